@@ -1,0 +1,10 @@
+namespace Redshift.Fits;
+
+/// <summary>The file ends before what its headers announce.</summary>
+public sealed class FitsTruncatedException : FitsException
+{
+    internal FitsTruncatedException(FitsLocation location, string expected, string found)
+        : base(location, $"the file is cut short: expected {expected}, found {found}")
+    {
+    }
+}

@@ -1,0 +1,11 @@
+namespace Redshift.Fits;
+
+/// <summary>An extension of a type that is not read here: its header is, its data are skipped.</summary>
+public sealed class OtherHdu : Hdu
+{
+    internal OtherHdu(HduLayout layout, ByteSource source, string type)
+        : base(layout, source) => Type = type;
+
+    /// <summary>Value of XTENSION.</summary>
+    public string Type { get; }
+}
