@@ -1,1 +1,3 @@
-return 0;
+using Redshift.Cli;
+
+return await CommandLine.InvokeAsync(args).ConfigureAwait(false);

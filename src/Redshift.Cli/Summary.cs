@@ -1,0 +1,49 @@
+using System.Text.Json;
+using Redshift.Pipeline.Report;
+using Redshift.Pipeline.Results;
+
+namespace Redshift.Cli;
+
+/// <summary>The closing words of a run, on standard output.</summary>
+internal static class Summary
+{
+    private static readonly Verdict[] Order = [Verdict.Firm, Verdict.Likely, Verdict.Unsettled, Verdict.Nothing];
+
+    /// <summary>Prints the counts for people or for programs.</summary>
+    public static void Print(Tally tally, string folder, TimeSpan time, bool json)
+    {
+        if (json)
+            PrintJson(tally, folder, time);
+        else
+            PrintText(tally, folder, time);
+    }
+
+    private static void PrintText(Tally tally, string folder, TimeSpan time)
+    {
+        var verdicts = string.Join(", ", Order.Select(verdict => $"{tally.Of(verdict)} {Words.Of(verdict)}"));
+        var rate = tally.Results / Math.Max(time.TotalSeconds, 1e-3);
+        Console.WriteLine($"{Counted(tally.Results, "spectrum", "spectra")}: {verdicts}; {Counted(tally.Rejects, "reject", "rejects")}");
+        Console.WriteLine(FormattableString.Invariant(
+            $"in {HarmlessText.Printable(folder)} after {time.TotalSeconds:F1} s ({rate:F0} spectra a second)"));
+    }
+
+    private static string Counted(int count, string one, string many) => $"{count} {(count == 1 ? one : many)}";
+
+    private static void PrintJson(Tally tally, string folder, TimeSpan time)
+    {
+        using var stream = new MemoryStream();
+        using (var writer = new Utf8JsonWriter(stream))
+        {
+            writer.WriteStartObject();
+            writer.WriteNumber("spectra", tally.Results);
+            foreach (var verdict in Order)
+                writer.WriteNumber(Words.Of(verdict), tally.Of(verdict));
+            writer.WriteNumber("rejects", tally.Rejects);
+            writer.WriteString("out", folder);
+            writer.WriteNumber("seconds", Math.Round(time.TotalSeconds, 3));
+            writer.WriteEndObject();
+        }
+
+        Console.WriteLine(System.Text.Encoding.UTF8.GetString(stream.ToArray()));
+    }
+}

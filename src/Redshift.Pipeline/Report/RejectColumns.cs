@@ -1,0 +1,17 @@
+using Redshift.Pipeline.Observations;
+
+namespace Redshift.Pipeline.Report;
+
+/// <summary>The columns of the list of rejects, one row a file or spectrum that could not be used.</summary>
+public static class RejectColumns
+{
+    /// <summary>The columns.</summary>
+    public static IReadOnlyList<Column<Reject>> All { get; } =
+    [
+        new("source", "", "meta.id;meta.file", "File below the common parent of all inputs", r => Cell.Of(r.Source)),
+        new("row", "", "meta.record", "Spectrum of the file, from 0; empty where the whole file is meant", r => r.Row is { } row ? Cell.Of(row) : Cell.Empty),
+        new("place", "", "meta.note", "Where in the file", r => Cell.Of(r.Place)),
+        new("found", "", "meta.note", "What stands there", r => Cell.Of(r.Found)),
+        new("expected", "", "meta.note", "What was expected", r => Cell.Of(r.Expected)),
+    ];
+}

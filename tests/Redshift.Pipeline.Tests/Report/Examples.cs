@@ -1,0 +1,98 @@
+using Redshift.Physics.Units;
+using Redshift.Pipeline.Observations;
+using Redshift.Pipeline.Results;
+
+namespace Redshift.Pipeline.Tests.Report;
+
+/// <summary>Hand-made results with every field set, or none.</summary>
+internal static class Examples
+{
+    public static Observation Observation(string source = "night1/a.fits", int row = 0) => new()
+    {
+        Source = source,
+        Row = row,
+        Spectra = [],
+        Target = "M 42, core",
+        RaDeg = 83.8220833,
+        DecDeg = -5.3911111,
+        MidTimeUtc = new DateTime(2026, 1, 2, 3, 4, 5, DateTimeKind.Utc),
+        ExposureS = 600,
+        Instrument = "=spec",
+        Medium = WavelengthMedium.Air,
+        MediumAssumed = true,
+        Frame = VelocityFrame.Barycentric,
+        Cautions = ["check-medium"],
+        Kept = [new("AIRMASS", "1.25")],
+    };
+
+    public static ObservationResult Full() => new()
+    {
+        Observation = Observation(),
+        Verdict = Verdict.Firm,
+        Kind = ObjectKind.Galaxy,
+        Z = 0.1,
+        ZErr = 0.00012345678,
+        ZFile = 0.0999,
+        VelocityCorrectionKmS = 29.9792458,
+        Confidence = 0.99876,
+        KindConfidence = 0.9999,
+        LnOdds = 12.34567,
+        SpectralType = "G2",
+        SpectralTypeErr = 1.26,
+        SnrPixel = 10.126,
+        SnrAngstrom = 12,
+        NoiseScale = 1.1,
+        Resolution = 2000,
+        ResolutionFrom = ResolutionSource.Keyword,
+        LinesExpected = 5,
+        LinesMatched = 4,
+        ZeroPointKmS = -3.2,
+        ZeroPointErrKmS = 1.5,
+        Next = new(ObjectKind.Quasar, 0.5, 0.001, "broad lines", 3, 0.001),
+        NextConfidence = 0.00123,
+        Lines = [HAlpha()],
+        Cautions = ["check-medium", "rival-redshift"],
+    };
+
+    public static ObservationResult Nothing() => new()
+    {
+        Observation = Observation("night1/b.fits") with
+        {
+            Target = "",
+            RaDeg = null,
+            DecDeg = null,
+            MidTimeUtc = null,
+            ExposureS = null,
+            Instrument = "",
+            Medium = WavelengthMedium.Vacuum,
+            MediumAssumed = false,
+            Frame = VelocityFrame.Unknown,
+            Cautions = [],
+            Kept = [],
+        },
+        Verdict = Verdict.Nothing,
+        Kind = ObjectKind.Unknown,
+    };
+
+    public static LineMeasurement HAlpha() => new()
+    {
+        Line = "H alpha",
+        Family = "hydrogen",
+        RestVacuumA = 6564.614,
+        RestAirA = 6562.801,
+        ObservedVacuumA = 7220.419,
+        ObservedErrA = 0.123,
+        OffsetKmS = -4.5,
+        OffsetErrKmS = 5.1,
+        Flux = 1.5e-15,
+        FluxErr = 1e-17,
+        FluxUnit = "erg/s/cm2/A",
+        EquivalentWidthRestA = -25.25,
+        EquivalentWidthErrA = 0.5,
+        FwhmObservedKmS = 250,
+        FwhmIntrinsicKmS = 200,
+        LnLikelihoodGain = 512.25,
+        State = LineState.Matched,
+        Note = "",
+    };
+}
