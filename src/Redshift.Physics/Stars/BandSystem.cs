@@ -77,7 +77,7 @@ internal sealed record BandSystem(
             var thermal = population * Math.Exp(-Constants.WavenumberKelvin * Lower.Term(lower) / kelvin);
             for (var upper = 0; upper <= LastVibration; upper++)
             {
-                var strength = thermal * OscillatorStrength * Constants.ClassicalCrossSection * FranckCondon(upper, lower);
+                var strength = thermal * 0.3 * OscillatorStrength * Constants.ClassicalCrossSection * FranckCondon(upper, lower);
                 foreach (var (air, share) in Marks)
                     yield return BandAt(air, upper, lower, strength * share);
             }

@@ -21,10 +21,15 @@ internal sealed class ContinuousOpacity
         (Element.Find("Ca"), 2028, 2.0e-19, 0, 1), (Element.Find("Ca"), 2930, 6.0e-18, 1.88, 9),
     ];
 
+    // Cross-section per nucleus that the countless weak lines of TiO and water add at 1e6 dyn/cm² below 3400 K: order of magnitude of published
+    // Rosseland means (Ferguson et al. 2005, ApJ 623, 585), which fall with pressure as the gaps between lines open.
+    private const double MolecularHaze = 6e-26;
+
     private readonly Gas _gas;
     private readonly double[] _levels = new double[LastLevel + 1];
     private readonly double[] _edges = new double[MetalEdges.Length];
     private readonly double _free;
+    private readonly double _haze;
     private readonly double _kT;
     private readonly double _negativeIons;
     private readonly double _logTheta;
@@ -34,6 +39,7 @@ internal sealed class ContinuousOpacity
         _gas = gas;
         _kT = Constants.BoltzmannEv * gas.Temperature;
         var theta = Constants.Theta(gas.Temperature);
+        _haze = MolecularHaze * Math.Pow(10, gas.Composition.Metallicity) * Math.Pow(gas.GasPressure / 1e6, 0.7) / (1 + Math.Exp((gas.Temperature - 3400) / 200));
         for (var n = 1; n <= LastLevel; n++)
             _levels[n] = Math.Exp(-RydbergEv * (1 - (1.0 / (n * n))) / _kT) / (n * n * n);
         _free = Math.Exp(-RydbergEv / _kT) * _kT / (2 * RydbergEv);
@@ -50,7 +56,22 @@ internal sealed class ContinuousOpacity
         var atoms = emission * ((1.0449e-26 * Cube(wavelength) * BoundAndFree(wavelength)) + (_negativeIons * NegativeIonBoundFree(wavelength)));
         return (_gas.NeutralHydrogen * (atoms + NegativeIonFreeFree(wavelength) + Rayleigh(wavelength)))
             + (ThomsonCrossSection * _gas.ElectronsPerNucleus)
+            + _haze
             + (wavelength < 4000 ? emission * Metals(wavelength) : 0);
+    }
+
+    /// <summary>Rosseland mean: harmonic mean weighted by dB/dT.</summary>
+    public double RosselandMean()
+    {
+        double sum = 0, weights = 0;
+        for (var x = 0.9; x < 16; x *= 1.15)
+        {
+            var weight = x * x * x * x * x * Math.Exp(-x) / ((1 - Math.Exp(-x)) * (1 - Math.Exp(-x)));
+            sum += weight / At(Constants.SecondRadiation / (x * _gas.Temperature));
+            weights += weight;
+        }
+
+        return weights / sum;
     }
 
     // Ionization from levels up to 8 one by one, from the rest as an integral (Unsöld), and free-free.

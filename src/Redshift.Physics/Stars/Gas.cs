@@ -54,21 +54,26 @@ internal sealed class Gas
 
     public double ElectronsPerNucleus => ElectronPressure / NucleiPressure;
 
-    /// <summary>Layer at an optical depth (at 5000 Å) of a grey atmosphere: P = g τ / κ with P and κ both set by the electron pressure.</summary>
+    /// <summary>Layer at a Rosseland optical depth of a grey atmosphere: P = g τ / κ with P and κ both set by the electron pressure.</summary>
     public static Gas AtDepth(double effectiveTemperature, double logGravity, Composition composition, double opticalDepth)
     {
         var temperature = effectiveTemperature * Math.Pow(0.75 * (opticalDepth + (2.0 / 3)), 0.25);
         var target = Math.Log(Math.Pow(10, logGravity) * opticalDepth * HydrogenMassPerNucleus * Constants.AtomicMassGram);
-        double low = -14, high = 18;
-        while (high - low > 1e-3)
+        Gas At(double lnPressure) => new(temperature, Math.Exp(lnPressure), composition);
+        double Excess(Gas gas) => Math.Log(gas.GasPressure * new ContinuousOpacity(gas).RosselandMean()) - target;
+        double before = 2, here = 4, excessBefore = Excess(At(before));
+        for (var step = 0; step < 20; step++)
         {
-            var middle = (low + high) / 2;
-            var gas = new Gas(temperature, Math.Exp(middle), composition);
-            var tooDense = Math.Log(gas.GasPressure * new ContinuousOpacity(gas).At(5000)) > target;
-            (low, high) = tooDense ? (low, middle) : (middle, high);
+            var gas = At(here);
+            var excess = Excess(gas);
+            if (Math.Abs(excess) < 1e-4)
+                return gas;
+            var slope = Math.Clamp((excess - excessBefore) / (here - before), 0.5, 4);
+            (before, excessBefore) = (here, excess);
+            here -= Math.Clamp(excess / slope, -4, 4);
         }
 
-        return new Gas(temperature, Math.Exp(low), composition);
+        return At(here);
     }
 
     /// <summary>Nuclei of an element per hydrogen nucleus.</summary>

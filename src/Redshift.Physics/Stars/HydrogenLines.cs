@@ -36,8 +36,18 @@ internal static class HydrogenLines
 
     private static double? KnownGaunt(int lower, int upper) => (lower, upper) switch
     {
-        (1, 2) => 0.717, (1, 3) => 0.765, (1, 4) => 0.779, (2, 3) => 0.7577, (2, 4) => 0.8211, (2, 5) => 0.8418, (3, 4) => 0.770,
-        (1, _) => 0.79, (2, 6) => 0.852, (2, _) => 0.865, (3, _) => 0.87, _ => 0.88,
+        (1, 2) => 0.717,
+        (1, 3) => 0.765,
+        (1, 4) => 0.779,
+        (2, 3) => 0.7577,
+        (2, 4) => 0.8211,
+        (2, 5) => 0.8418,
+        (3, 4) => 0.770,
+        (1, _) => 0.79,
+        (2, 6) => 0.852,
+        (2, _) => 0.865,
+        (3, _) => 0.87,
+        _ => 0.88,
     };
 
     private static double Term(int n) => RydbergHydrogen / ((n - 7e-6) * (n - 7e-6));
@@ -61,8 +71,9 @@ internal static class HydrogenLines
 
     private readonly struct Line
     {
-        // S(β) = 3/(31.6 + β^2.5): Holtsmark wings 1.5 β^-2.5 doubled for electrons, normalized to one over both sides.
-        private const double Wing = 3;
+        // S(β) = 1.5/(9.9 + β^2.5): Holtsmark wings of the ions, normalized to one over both sides. Electrons double the far wings only;
+        // where lines are half deep they mostly fill the centre (Edmonds, Schlüter & Wells 1967, MmRAS 71, 271).
+        private const double Wing = 1.5;
         private static readonly double Core = Math.Pow(2.643 * Wing, 1 / 0.6);
         private readonly double _scale;
         private readonly double _smoothing;

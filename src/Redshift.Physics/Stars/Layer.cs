@@ -14,9 +14,12 @@ internal sealed class Layer
         var opacity = new ContinuousOpacity(gas);
         for (var i = 0; i < _lnOpacity.Length; i++)
             _lnOpacity[i] = Math.Log(opacity.At(Math.Exp(FirstNode + (i * NodeStep))));
+        RosselandMean = opacity.RosselandMean();
     }
 
     public Gas Gas { get; }
+
+    public double RosselandMean { get; }
 
     /// <summary>Microturbulence in cm/s.</summary>
     public double Turbulence { get; }
