@@ -1,3 +1,8 @@
+using Redshift.Fits;
+using Redshift.Pipeline.Load.Assembly;
+using Redshift.Pipeline.Load.Layouts;
+using Redshift.Pipeline.Load.Metadata;
+using Redshift.Pipeline.Load.Text;
 using Redshift.Pipeline.Observations;
 using Redshift.Pipeline.Settings;
 
@@ -13,7 +18,12 @@ public static class SpectrumLoader
     /// <returns>An observation or a reject for each; at least one outcome, and never an exception for what a file holds.</returns>
     public static IEnumerable<LoadOutcome> Load(string path, string source, LoadSettings settings)
     {
-        _ = settings;
-        yield return new(null, new Reject(source, null, path, "nothing", "a spectrum"));
+        using var reading = new FileReading(source, settings);
+        if (reading.Open(path) is { } refused)
+        {
+            yield return new(null, refused);
+            yield break;
+        }
+        for (var row = 0; row < reading.Rows; row++) yield return reading.Read(row);
     }
 }

@@ -1,0 +1,38 @@
+using Redshift.Physics.Units;
+using Redshift.Pipeline.Load.Layouts;
+using Redshift.Pipeline.Load.Metadata;
+using Redshift.Pipeline.Settings;
+
+namespace Redshift.Pipeline.Load.Assembly;
+
+/// <summary>The medium of the wavelengths, in the order of trust: pipeline file, coordinate, header, default.</summary>
+internal static class MediumChoice
+{
+    /// <summary>Settles the medium of a layout.</summary>
+    public static Setting<WavelengthMedium> Make(Layout layout, LoadSettings settings, LoadRule? rule)
+    {
+        if ((settings.Medium ?? rule?.Medium) is { } given) return new(given, false, "the pipeline file");
+        var wavelength = layout.Spectra[0].Wavelength;
+        if (wavelength.Medium is { } own) return new(own, false, $"the coordinate itself ({wavelength.Place})");
+        if (MediumFinder.Stated(layout.Header) is { } stated) return new(stated.Medium, false, stated.Where);
+        foreach (var remark in layout.Remarks)
+            if (MediumFinder.FromText(remark) is { } medium) return new(medium, false, $"the remark '{remark.Trim()}'");
+        return Default(layout);
+    }
+
+    private static Setting<WavelengthMedium> Default(Layout layout)
+    {
+        var shortest = layout.Spectra.Min(static spectrum => Shortest(spectrum));
+        var logarithmic = layout.Spectra[0].Wavelength.Unit.StartsWith("log", StringComparison.Ordinal);
+        var (medium, why) = MediumFinder.Default(shortest, logarithmic, layout.ListsWavelengths);
+        return new(medium, true, why);
+    }
+
+    private static double Shortest(SpectrumSources spectrum)
+    {
+        var shortest = double.PositiveInfinity;
+        foreach (var angstrom in spectrum.Wavelength.Angstroms(0, spectrum.Flux.Length))
+            if (angstrom > 0 && angstrom < shortest) shortest = angstrom;
+        return shortest;
+    }
+}

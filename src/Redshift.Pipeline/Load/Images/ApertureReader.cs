@@ -1,0 +1,60 @@
+using Redshift.Pipeline.Load.Layouts;
+using Redshift.Pipeline.Load.Metadata;
+using Redshift.Pipeline.Load.Roles;
+using Redshift.Pipeline.Load.SpectralAxis;
+
+namespace Redshift.Pipeline.Load.Images;
+
+/// <summary>Reads images whose rows have a dispersion each: echelle orders of one object, or fibres with an object each.</summary>
+internal static class ApertureReader
+{
+    // Neighbouring orders share little; fibres all see the same range.
+    private const double MostSharedByOrders = 0.8;
+
+    /// <summary>The spectra of all apertures.</summary>
+    /// <param name="family">The image and its siblings.</param>
+    /// <param name="length">Pixels of a row.</param>
+    /// <param name="rows">Number of apertures.</param>
+    /// <param name="bands">Number of bands of each.</param>
+    /// <param name="axes">The dispersions, one a row.</param>
+    public static UnitContent Read(ImageFamily family, int length, int rows, int bands, IReadOnlyList<ApertureAxis> axes)
+    {
+        var all = new SpectrumSources
+        {
+            Wavelength = new ApertureWavelengths(axes, family.Flux.Index),
+            Flux = Rows(family, length, rows, 0),
+            Noise = ErrorBand(family, bands) is { } band ? (Role.Error, Rows(family, length, rows, band)) : ImageReader.NoiseOf(family, length, rows),
+        };
+        return AreOrders(axes, rows, length)
+            ? new([.. Enumerable.Range(0, rows).Select(row => all.AtRow(row, rows == 1 ? "" : $"order {axes[row].Beam}"))], 1)
+            : new([all], rows) { Targets = TargetTable.For(family.File, rows) };
+    }
+
+    private static ImageArray Rows(ImageFamily family, int length, int rows, int band) =>
+        new(family.Flux, length, rows, (long)band * rows * length, length) { Place = $"HDU {family.Flux.Index}", Label = family.FluxLabel };
+
+    private static int? ErrorBand(ImageFamily family, int bands)
+    {
+        var names = bands == 1 ? null : BandNames.Read(family.Header, bands) ?? BandReader.UsualBands(bands);
+        for (var band = 0; band < names?.Count; band++)
+            if (RoleGuesser.Of(new(names[band])).Role == Role.Error) return band;
+        return null;
+    }
+
+    private static bool AreOrders(IReadOnlyList<ApertureAxis> axes, int rows, int length)
+    {
+        for (var row = 1; row < rows; row++)
+        {
+            var (before, here) = (Range(axes[row - 1], length), Range(axes[row], length));
+            var shared = Math.Min(before.High, here.High) - Math.Max(before.Low, here.Low);
+            if (shared > MostSharedByOrders * Math.Min(before.High - before.Low, here.High - here.Low)) return false;
+        }
+        return true;
+    }
+
+    private static (double Low, double High) Range(ApertureAxis axis, int length)
+    {
+        var (first, last) = (axis.At(1), axis.At(length));
+        return (Math.Min(first, last), Math.Max(first, last));
+    }
+}

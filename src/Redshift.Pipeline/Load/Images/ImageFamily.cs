@@ -1,0 +1,79 @@
+using Redshift.Fits;
+using Redshift.Pipeline.Load.Layouts;
+using Redshift.Pipeline.Load.Metadata;
+using Redshift.Pipeline.Load.Roles;
+
+namespace Redshift.Pipeline.Load.Images;
+
+/// <summary>An image with the flux and the sibling images of the same arm and version that hold its other arrays.</summary>
+internal sealed class ImageFamily
+{
+    private readonly IReadOnlyList<(ImageHdu Hdu, Label Label, Role Role)> _siblings;
+
+    /// <summary>Gathers the siblings.</summary>
+    /// <param name="file">The file.</param>
+    /// <param name="flux">The unit with the flux.</param>
+    public ImageFamily(FitsFile file, ImageHdu flux)
+    {
+        File = file;
+        Flux = flux;
+        FluxLabel = LabelOf(flux);
+        var own = Qualifiers(FluxLabel);
+        _siblings =
+        [
+            .. from hdu in file.Hdus.OfType<ImageHdu>()
+               where hdu != flux && hdu.Count > 0
+               let label = LabelOf(hdu)
+               let role = RoleGuesser.Of(label).Role
+               where role is not (Role.Other or Role.Flux)
+               let words = Qualifiers(label)
+               where words.SetEquals(own) || own.Count == 0 && words.Count == 0
+               where hdu.Version == flux.Version || hdu.Shape.Count == 1 && role == Role.Wavelength
+               select (hdu, label, role),
+        ];
+    }
+
+    /// <summary>The file.</summary>
+    public FitsFile File { get; }
+
+    /// <summary>The image with the flux.</summary>
+    public ImageHdu Flux { get; }
+
+    /// <summary>What the file says of it.</summary>
+    public Label FluxLabel { get; }
+
+    /// <summary>The headers that speak of it.</summary>
+    public HeaderScope Header => Flux.Index == 0 ? new([Flux.Header]) : new([Flux.Header, File.Hdus[0].Header]);
+
+    /// <summary>What the file says of an image: its name, or what stands in for one.</summary>
+    public static Label LabelOf(ImageHdu hdu)
+    {
+        var header = new HeaderScope([hdu.Header]);
+        var name = hdu.Name is { Length: > 0 } given && !given.Equals("PRIMARY", StringComparison.OrdinalIgnoreCase) && given != "COMPRESSED_IMAGE"
+            ? given
+            : header.Text("HDUCLAS2", "CONTENT") ?? "";
+        return new(name, header.Text("BUNIT", "YUNITS", "FLUXUNIT", "UNITS") ?? "");
+    }
+
+    /// <summary>The sibling of a role whose rows match the flux.</summary>
+    public ImageHdu? Sibling(Role role, params ReadOnlySpan<int> lengths)
+    {
+        foreach (var (hdu, _, itsRole) in _siblings)
+            if (itsRole == role && hdu.Shape[0] == lengths[0]) return hdu;
+        return null;
+    }
+
+    /// <summary>An array of a sibling beside a flux of this length and number of rows; null where the shapes do not match.</summary>
+    public NumberArray? Array(Role role, int length, int rows)
+    {
+        if (Sibling(role, length) is not { } hdu) return null;
+        var perRow = hdu.Count / (rows * (long)length);
+        var place = $"HDU {hdu.Index}";
+        if (hdu.Count == length) return new ImageArray(hdu, length) { Place = place, Label = LabelOf(hdu) };
+        if (hdu.Count % (rows * (long)length) != 0 || perRow > 64) return null;
+        var elements = checked((int)(perRow * length));
+        return new ImageArray(hdu, elements, rows, 0, elements) { Place = place, Label = LabelOf(hdu) };
+    }
+
+    private static HashSet<string> Qualifiers(Label label) => [.. RoleGuesser.Qualifiers(label.Words).Where(static word => word != "resolution" && word != "resol")];
+}

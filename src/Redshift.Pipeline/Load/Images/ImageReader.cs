@@ -1,0 +1,117 @@
+using Redshift.Fits;
+using Redshift.Pipeline.Load.Layouts;
+using Redshift.Pipeline.Load.Metadata;
+using Redshift.Pipeline.Load.Roles;
+using Redshift.Pipeline.Load.SpectralAxis;
+using Redshift.Pipeline.Observations;
+
+namespace Redshift.Pipeline.Load.Images;
+
+/// <summary>Decides what the axes of an image with flux are: one spectrum, bands of one, a stack, or orders.</summary>
+internal static class ImageReader
+{
+    private const int FewestPixels = 16;
+
+    /// <summary>Reads the layout of an image and its siblings.</summary>
+    /// <exception cref="LoadException">The structure is ambiguous or no spectrum.</exception>
+    public static UnitContent Read(ImageFamily family)
+    {
+        var shape = family.Flux.Shape;
+        if (shape.Any(static length => length > Array.MaxLength)) throw Unfit(family, "a spectrum along the first axis");
+        var lengths = shape.Select(static length => (int)length).ToArray();
+        var dimensions = lengths.Length;
+        while (dimensions > 1 && lengths[dimensions - 1] == 1) dimensions--;
+        return dimensions switch
+        {
+            1 => Stack(family, lengths[0], 1),
+            2 => TwoAxes(family, lengths[0], lengths[1]),
+            3 => ThreeAxes(family, lengths[0], lengths[1], lengths[2]),
+            _ => throw Unfit(family, "at most three axes"),
+        };
+    }
+
+    private static UnitContent TwoAxes(ImageFamily family, int length, int rows)
+    {
+        if (length <= 8 && rows >= 100) return SidewaysTable(family, length);
+        if (BandNames.Read(family.Header, rows) is { } names) return BandReader.Named(family, length, names);
+        if (ApertureAxis.ReadAll(family.Header) is { Count: > 0 } apertures && apertures.Count >= rows) return ApertureReader.Read(family, length, rows, 1, apertures);
+        if (IsStack(family, length, rows)) return Stack(family, length, rows);
+        return rows <= 8 ? BandReader.Unnamed(family, length, rows) : throw Unfit(family, "a stack with a table of its rows, named bands, or a [[load]] rule");
+    }
+
+    private static UnitContent ThreeAxes(ImageFamily family, int length, int apertures, int bands)
+    {
+        var header = family.Header;
+        if (apertures is 3 or 4 && BandReader.HasWavelengthRow(family, length)) return BandReader.Orders(family, length, apertures, bands);
+        var axes = ApertureAxis.ReadAll(header);
+        if (axes.Count >= apertures) return ApertureReader.Read(family, length, apertures, bands, axes);
+        var names = BandNames.Read(header, bands) ?? BandReader.UsualBands(bands) ?? throw Unfit(family, "bands named by BANDIDn");
+        return BandReader.Named(family, length, names, apertures);
+    }
+
+    // Rows are spectra where something counts them: a table with as many rows, noise of the same shape, an aperture card for each.
+    private static bool IsStack(ImageFamily family, int length, int rows)
+    {
+        if (AxisReader.IsForeign(family.Header, 2)) return false;
+        if (TargetTable.For(family.File, rows) is not null) return true;
+        var apertureCards = family.Header.Has("APNUM1") && family.Header.Has(HeaderScope.Indexed("APNUM", rows));
+        var type = family.Header.Text("CTYPE2")?.ToUpperInvariant() ?? "";
+        return apertureCards
+            || type.Contains("FIB", StringComparison.Ordinal) || type.Contains("SPEC", StringComparison.Ordinal) || type.Contains("APER", StringComparison.Ordinal)
+            || (family.Sibling(Role.Wavelength, length) is not null && family.Array(Role.InverseVariance, length, rows) is not null);
+    }
+
+    private static UnitContent Stack(ImageFamily family, int length, int rows)
+    {
+        if (length < FewestPixels) throw Unfit(family, $"at least {FewestPixels} pixels along the first axis");
+        var flux = new ImageArray(family.Flux, length, rows, 0, length) { Place = $"HDU {family.Flux.Index}", Label = family.FluxLabel };
+        var listed = family.Array(Role.Wavelength, length, rows);
+        var sources = new SpectrumSources
+        {
+            Wavelength = listed is null ? AxisOf(family, length) : new ArrayWavelengths(listed),
+            Flux = flux,
+            Noise = NoiseOf(family, length, rows),
+            Mask = family.Array(Role.Mask, length, rows) is { } mask && mask.Length == length ? new(mask) : null,
+            Width = WidthOf(family, length, rows),
+        };
+        var targets = rows > 1 ? TargetTable.For(family.File, rows) : null;
+        return new([sources], rows) { ListsWavelengths = listed is not null, Targets = targets };
+    }
+
+    /// <summary>Noise from a sibling image.</summary>
+    public static (Role, NumberArray)? NoiseOf(ImageFamily family, int length, int rows)
+    {
+        foreach (var role in (ReadOnlySpan<Role>)[Role.InverseVariance, Role.Error, Role.Variance])
+            if (family.Array(role, length, rows) is { } array && array.Length == length) return (role, array);
+        return null;
+    }
+
+    private static WidthSource? WidthOf(ImageFamily family, int length, int rows)
+    {
+        foreach (var role in (ReadOnlySpan<Role>)[Role.Resolution, Role.Sigma, Role.Fwhm])
+            if (family.Array(role, length, rows) is { } array) return new(array, role);
+        return null;
+    }
+
+    /// <summary>The axis of the image's own header, or of the primary one where its own has none.</summary>
+    public static AxisWavelengths AxisOf(ImageFamily family, int length)
+    {
+        if (AxisReader.IsForeign(family.Header, 1)) throw Unfit(family, "a spectral first axis");
+        var axis = AxisReader.Read(family.Header, 1, length, family.File);
+        return axis is null ? throw new LoadException(PlaceOf(family), "neither CRVAL1 with CDELT1 or CD1_1 nor an array of wavelengths", "wavelengths") : new(axis, family.Flux.Index);
+    }
+
+    private static UnitContent SidewaysTable(ImageFamily family, int columns)
+    {
+        var arrays = Enumerable.Range(0, columns)
+            .Select(column => new ImageColumnArray(family.Flux, column) { Place = $"HDU {family.Flux.Index} column {column}", Label = new("") })
+            .ToList<NumberArray>();
+        return BandReader.ByContent(family, arrays);
+    }
+
+    /// <summary>The reject of an image whose shape is not understood.</summary>
+    public static LoadException Unfit(ImageFamily family, string expected) =>
+        new(PlaceOf(family), $"an image of {string.Join(" x ", family.Flux.Shape)}", expected);
+
+    private static string PlaceOf(ImageFamily family) => $"HDU {family.Flux.Index} {family.Flux.Name}".TrimEnd();
+}

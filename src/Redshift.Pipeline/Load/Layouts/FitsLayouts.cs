@@ -1,0 +1,134 @@
+using Redshift.Fits;
+using Redshift.Pipeline.Load.Images;
+using Redshift.Pipeline.Load.Metadata;
+using Redshift.Pipeline.Load.Tables;
+using Redshift.Pipeline.Observations;
+
+namespace Redshift.Pipeline.Load.Layouts;
+
+/// <summary>Finds the observations of a FITS file: which of its units hold spectra, and which of these belong together.</summary>
+internal static class FitsLayouts
+{
+    /// <summary>The layouts, in the order of the rows they give.</summary>
+    /// <exception cref="LoadException">Nothing is a spectrum, or the structure is ambiguous.</exception>
+    /// <param name="file">The file.</param>
+    /// <param name="only">Index or name of the only unit to look at, or null for all.</param>
+    public static IReadOnlyList<Layout> Find(FitsFile file, string? only = null)
+    {
+        var tables = TableUnits.Find(file).Where(unit => unit.IsCalled(only)).ToList();
+        List<SpectrumUnit> units = tables.Count > 0 ? tables : [.. ImageUnits.Find(file).Where(unit => unit.IsCalled(only))];
+        if (units.Count == 0) throw NothingFound(file);
+        var best = BestForms(units, out var aside);
+        var layouts = Combine(best, file);
+        return aside.Count == 0 ? layouts : [.. layouts.Select(layout => layout with { Notes = [.. layout.Notes, Aside(aside)] })];
+    }
+
+    // A coadd beside its exposures, an optimal beside a summed extraction: the better form of each arm is read.
+    private static List<SpectrumUnit> BestForms(List<SpectrumUnit> units, out IReadOnlyList<SpectrumUnit> aside)
+    {
+        var best = units.GroupBy(static unit => unit.Arm)
+            .SelectMany(static arm => arm.Where(unit => unit.Rank == arm.Min(static other => other.Rank)))
+            .OrderBy(static unit => unit.Hdu.Index).ToList();
+        if (best.Exists(static unit => unit.Arm.Length > 0) && units.Min(static unit => unit.Rank) < 0) best = [.. best.Where(static unit => unit.Rank < 0)];
+        aside = [.. units.Except(best)];
+        return best;
+    }
+
+    private static IReadOnlyList<Layout> Combine(List<SpectrumUnit> units, FitsFile file)
+    {
+        if (units.Count == 1) return [Single(units[0], file)];
+        if (units.Select(static unit => unit.Arm).Distinct().Count() == units.Count) return [Arms(units, file)];
+        if (AreOrders(units)) return [Orders(units, file)];
+        if (AreVersions(units)) return [.. units.Select(unit => Single(unit, file))];
+        return [Covering(units, file)];
+    }
+
+    private static Layout Single(SpectrumUnit unit, FitsFile file)
+    {
+        var content = unit.Read();
+        return new()
+        {
+            Spectra = content.Spectra,
+            Rows = content.Rows,
+            Header = ScopeOf(unit.Hdu, file),
+            Targets = content.Targets,
+            Notes = content.Notes,
+            ListsWavelengths = content.ListsWavelengths,
+        };
+    }
+
+    private static Layout Arms(List<SpectrumUnit> units, FitsFile file)
+    {
+        var contents = units.Select(static unit => (unit.Arm, Content: unit.Read())).ToList();
+        var rows = contents[0].Content.Rows;
+        if (contents.Exists(arm => arm.Content.Rows != rows))
+            throw new LoadException(Places(units), $"{string.Join(", ", contents.Select(static arm => arm.Content.Rows))} rows", "as many in each arm");
+        return Single(units[0], file) with
+        {
+            Spectra = [.. contents.SelectMany(static arm => arm.Content.Labelled(arm.Arm))],
+            Targets = contents[0].Content.Targets ?? (rows > 1 ? TargetTable.For(file, rows) : null),
+            Notes = [.. contents[0].Content.Notes, new("spectra", Places(units), "the arms that the names give")],
+        };
+    }
+
+    private static Layout Orders(List<SpectrumUnit> units, FitsFile file) => Single(units[0], file) with
+    {
+        Spectra = [.. units.SelectMany(static unit => unit.Read().Labelled($"order {OrderOf(unit)}"))],
+        Notes = [new("spectra", Places(units), "the orders that the headers number")],
+    };
+
+    private static bool AreOrders(List<SpectrumUnit> units) =>
+        units.All(static unit => OrderOf(unit) is not null)
+        && units.Select(OrderOf).Distinct().Count() == units.Count
+        && units.Select(static unit => new HeaderScope([unit.Hdu.Header]).Text("SOURCEID", "SLTNAME", "OBJECT")).Distinct().Count() == 1;
+
+    private static string? OrderOf(SpectrumUnit unit) => new HeaderScope([unit.Hdu.Header]).Text("SPORDER", "ORDER", "ECHORDER");
+
+    private static bool AreVersions(List<SpectrumUnit> units) =>
+        units.All(unit => unit.Hdu.Name.Equals(units[0].Hdu.Name, StringComparison.OrdinalIgnoreCase) && unit.Hdu.Name.Length > 0)
+        && units.Select(static unit => unit.Hdu.Version).Distinct().Count() == units.Count;
+
+    // A unit that covers all the others, or stands before a set of tables that differ from it but not among themselves, is their
+    // sum; without one, nothing says which to take.
+    private static Layout Covering(List<SpectrumUnit> units, FitsFile file)
+    {
+        var layouts = units.Select(unit => Single(unit, file)).ToList();
+        var (low, high) = Range(layouts[0]);
+        var covers = layouts.Skip(1).Select(Range).All(range => range.Low > low * 0.999 && range.High < high * 1.001);
+        if ((!covers && !IsFirstAmongAlike(units)) || layouts[0].Rows != 1)
+            throw new LoadException(Places(units), $"{units.Count} units with spectra of equal standing", "one, or a [[load]] rule that names it");
+        return layouts[0] with { Notes = [.. layouts[0].Notes, new("spectrum", units[0].Place, $"the sum of {Places(units.Skip(1))}, which are parts or exposures")] };
+    }
+
+    private static bool IsFirstAmongAlike(List<SpectrumUnit> units)
+    {
+        var columns = units.Select(static unit => unit.Hdu is TableHdu table ? string.Join(' ', table.Columns.Select(static column => column.Name)) : "").ToList();
+        return columns.Count > 2 && columns[0] != columns[1] && columns.Skip(1).Distinct().Count() == 1;
+    }
+
+    private static (double Low, double High) Range(Layout layout)
+    {
+        var spectrum = layout.Spectra[0];
+        var sound = spectrum.Wavelength.Angstroms(0, spectrum.Flux.Length).Where(double.IsFinite).DefaultIfEmpty(0).ToList();
+        return (sound.Min(), sound.Max());
+    }
+
+    /// <summary>The headers that speak of a unit.</summary>
+    public static HeaderScope ScopeOf(Hdu hdu, FitsFile file) => hdu.Index == 0 ? new([hdu.Header]) : new([hdu.Header, file.Hdus[0].Header]);
+
+    private static string Places(IEnumerable<SpectrumUnit> units) => string.Join(", ", units.Select(static unit => unit.Place));
+
+    private static ReadingNote Aside(IReadOnlyList<SpectrumUnit> aside) => new("left aside", Places(aside), "other forms of the same spectrum");
+
+    private static LoadException NothingFound(FitsFile file) =>
+        file.Damage is { } damage
+            ? new("file", damage.Message, "a complete FITS file")
+            : new("file", Describe(file), "a spectrum: an image or a table with flux and wavelengths");
+
+    private static string Describe(FitsFile file) => string.Join("; ", file.Hdus.Select(static hdu => hdu switch
+    {
+        ImageHdu { Count: > 0 } image => $"HDU {hdu.Index} {hdu.Name} image {string.Join(" x ", image.Shape)}",
+        TableHdu table => $"HDU {hdu.Index} {hdu.Name} table of {table.RowCount} rows with {string.Join(", ", table.Columns.Take(12).Select(static column => column.Name))}",
+        _ => $"HDU {hdu.Index} {hdu.Name} without data",
+    }));
+}

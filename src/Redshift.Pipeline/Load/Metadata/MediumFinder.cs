@@ -1,0 +1,74 @@
+using System.Text.RegularExpressions;
+using Redshift.Fits;
+using Redshift.Physics.Units;
+
+namespace Redshift.Pipeline.Load.Metadata;
+
+/// <summary>The medium of wavelengths: what the header says, or the documented default.</summary>
+internal static partial class MediumFinder
+{
+    // Spectroscopists give wavelengths below 2000 Å in vacuum, and whoever observes there is above the air.
+    private const double AirBegins = 2000;
+
+    // Sky lines and lamps beyond 9500 Å are tabulated in vacuum by most infrared pipelines.
+    private const double InfraredBegins = 9500;
+
+    private static readonly string[] MediumKeywords =
+        ["AIRORVAC", "VACORAIR", "AIR_VAC", "AIRVAC", "WAVEMED", "WAVE_MED", "MEDIUM", "WAVETYPE", "VACAIR", "WAVESYS", "WAVETAG"];
+
+    /// <summary>What the cards state, and where; null where they are silent.</summary>
+    public static (WavelengthMedium Medium, string Where)? Stated(HeaderScope header)
+    {
+        if (header.Flag("VACUUM") is { } vacuum) return (vacuum ? WavelengthMedium.Vacuum : WavelengthMedium.Air, "keyword VACUUM");
+        foreach (var keyword in MediumKeywords)
+            if (header.Text(keyword) is { } text && FromWord(text) is { } medium) return (medium, $"keyword {keyword}");
+        return FromRemarks(header.Cards);
+    }
+
+    /// <summary>The default for a file that does not state its medium, with the reason.</summary>
+    /// <param name="shortest">Shortest wavelength in Å.</param>
+    /// <param name="isLogarithmic">Whether the axis is equidistant in the logarithm, as coadded surveys write it.</param>
+    /// <param name="listsWavelengths">Whether wavelengths are listed in a binary table or array.</param>
+    public static (WavelengthMedium Medium, string Why) Default(double shortest, bool isLogarithmic, bool listsWavelengths)
+    {
+        if (shortest < AirBegins) return (WavelengthMedium.Vacuum, "assumed: it begins below 2000 A");
+        if (shortest > InfraredBegins) return (WavelengthMedium.Vacuum, "assumed: it lies in the infrared");
+        if (isLogarithmic) return (WavelengthMedium.Vacuum, "assumed: the axis is logarithmic");
+        return listsWavelengths
+            ? (WavelengthMedium.Vacuum, "assumed: wavelengths are listed in a binary table")
+            : (WavelengthMedium.Air, "assumed: a plain axis or text, as slit spectrographs on the ground give it");
+    }
+
+    private static WavelengthMedium? FromWord(string text)
+    {
+        if (text.StartsWith("vac", StringComparison.OrdinalIgnoreCase)) return WavelengthMedium.Vacuum;
+        return text.StartsWith("air", StringComparison.OrdinalIgnoreCase) ? WavelengthMedium.Air : null;
+    }
+
+    private static (WavelengthMedium Medium, string Where)? FromRemarks(IEnumerable<Card> cards)
+    {
+        foreach (var card in cards)
+        {
+            var text = card.Value.Kind == CardValueKind.Text ? card.Value.Literal + " " + card.Comment : card.Comment;
+            if (text.Length < 6) continue;
+            var (vacuum, air) = (VacuumPattern().IsMatch(text), AirPattern().IsMatch(text));
+            if (vacuum != air) return (vacuum ? WavelengthMedium.Vacuum : WavelengthMedium.Air, $"card {card.Keyword}: {text.Trim()}");
+        }
+        return null;
+    }
+
+    /// <summary>What a line of free text says of the medium.</summary>
+    public static WavelengthMedium? FromText(string text)
+    {
+        var (vacuum, air) = (VacuumPattern().IsMatch(text), AirPattern().IsMatch(text));
+        return vacuum == air ? null : vacuum ? WavelengthMedium.Vacuum : WavelengthMedium.Air;
+    }
+
+    [GeneratedRegex(@"(wavelengths?|lambda|wave)\b[^.;]{0,30}\bvac(uum)?\b|\bvac(uum)?[ -_](wavelengths?|lambda|scale)|airtovac|air[ _]?to[ _]?vac|converted to vac",
+        RegexOptions.IgnoreCase | RegexOptions.CultureInvariant)]
+    private static partial Regex VacuumPattern();
+
+    [GeneratedRegex(@"(wavelengths?|lambda|wave)\b[^.;]{0,30}\b(in|to|are|is|scale)\b[^.;]{0,8}\bair\b(?! ?mass)|\bair[ _-]wavelengths?|vactoair|vac[ _]?to[ _]?air|converted to air",
+        RegexOptions.IgnoreCase | RegexOptions.CultureInvariant)]
+    private static partial Regex AirPattern();
+}
