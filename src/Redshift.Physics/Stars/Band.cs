@@ -1,0 +1,75 @@
+namespace Redshift.Physics.Stars;
+
+/// <summary>
+/// One vibrational band with its P, Q and R branches, the rotational lines smeared out: ν = ν₀ + (B′ + B″) m + (B′ − B″) m²
+/// (Herzberg 1950), level populations of Boltzmann. The head is where the parabola turns; its shape follows from B′ and B″ alone.
+/// </summary>
+/// <param name="Origin">Wavenumber of the band origin in cm⁻¹, vacuum.</param>
+/// <param name="Upper">Rotational constant B′ in cm⁻¹.</param>
+/// <param name="Lower">Rotational constant B″ in cm⁻¹.</param>
+/// <param name="QShare">Share of the Q branch; P and R have half of the rest each.</param>
+/// <param name="CrossSection">Integrated cross-section of a molecule of the gas, in cm.</param>
+internal readonly record struct Band(double Origin, double Upper, double Lower, double QShare, double CrossSection)
+{
+    private const double Faintest = 0.002;
+
+    /// <summary>Vacuum wavelength of the head in Å.</summary>
+    public double HeadWavelength => 1e8 / Head;
+
+    private double Head => Origin - ((Upper + Lower) * (Upper + Lower) / (4 * (Upper - Lower)));
+
+    /// <summary>Origin of a band whose P or R head stands at a wavenumber.</summary>
+    public static double OriginOfHead(double head, double upper, double lower) => head + ((upper + lower) * (upper + lower) / (4 * (upper - lower)));
+
+    /// <summary>Adds absorbers (per hydrogen nucleus, over the continuous opacity) times the cross-section, mean over each grid step.</summary>
+    public void Add(Span<double> ratio, LogWavelengthGrid grid, double kelvin, double absorbersOverOpacity)
+    {
+        var strength = absorbersOverOpacity * CrossSection;
+        var spread = Constants.WavenumberKelvin * Lower / kelvin;
+        var curvature = Upper - Lower;
+        var extent = 9 / spread * Math.Abs(curvature);
+        if (strength / (extent / 9) < Faintest)
+            return;
+        var turn = -(Upper + Lower) / (2 * curvature);
+        var far = Math.Pow(Math.Abs(turn) + (3 / Math.Sqrt(spread)), 2) * Math.Abs(curvature);
+        var toRed = curvature < 0;
+        var (blueEnd, redEnd) = toRed ? (Head, Head - far) : (Head + far, Head);
+        AddBranches(ratio, grid, strength, spread, curvature, turn, (blueEnd, redEnd));
+    }
+
+    private void AddBranches(
+        Span<double> ratio, LogWavelengthGrid grid, double strength, double spread, double curvature, double turn, (double Blue, double Red) ends)
+    {
+        var first = Math.Max(0, (int)Math.Floor(grid.Position(1e8 / ends.Blue)));
+        var last = Math.Min(grid.Count - 1, (int)Math.Ceiling(grid.Position(1e8 / ends.Red)));
+        if (first > last)
+            return;
+        var shrink = Math.Exp(-grid.LnStep);
+        var edge = 1e8 / grid.Wavelength(first - 0.5);
+        var before = Cumulative(edge, spread, curvature, turn);
+        for (var i = first; i <= last; i++)
+        {
+            var next = edge * shrink;
+            var after = Cumulative(next, spread, curvature, turn);
+            ratio[i] += strength * Math.Abs(after - before) / (edge - next);
+            (edge, before) = (next, after);
+        }
+    }
+
+    // Share of the band's strength between its head (or origin for the Q branch) and a wavenumber.
+    private double Cumulative(double wavenumber, double spread, double curvature, double turn)
+    {
+        var fromHead = Math.Max(0, (wavenumber - Head) / curvature);
+        var x = Math.Sqrt(fromHead);
+        var near = Below(turn + x, spread) - Below(turn - x, spread);
+        var q = QShare > 0 ? 1 - Math.Exp(-spread * Math.Max(0, (wavenumber - Origin) / curvature)) : 0;
+        return ((1 - QShare) * near) + (QShare * q);
+    }
+
+    // Integral of spread |m| exp(−spread m²) up to m, both branches together normalized to one.
+    private static double Below(double m, double spread)
+    {
+        var half = (1 - Math.Exp(-spread * m * m)) / 2;
+        return m < 0 ? 0.5 - half : 0.5 + half;
+    }
+}

@@ -1,0 +1,110 @@
+using System.Numerics;
+
+namespace Redshift.Physics.Stars;
+
+/// <summary>Adds up the opacity of all lines and bands of a star on a grid.</summary>
+internal sealed class SpectrumBuilder(Photosphere star, LogWavelengthGrid grid)
+{
+    private const double FaintestWing = 0.01;
+    private const double FaintestWidth = 0.002;
+    private const int ProfileReach = 4;
+    private static readonly double[][] Gaussians = [.. Enumerable.Range(0, 33).Select(i => Gaussian((i - 16) / 32.0))];
+    private readonly double[] _ratio = new double[grid.Count];
+    private readonly double[] _narrow = new double[grid.Count];
+    private readonly double[] _emission = new double[grid.Count];
+
+    public StellarSpectrum Build()
+    {
+        AddHydrogen();
+        foreach (var line in LineTables.All)
+            AddLine(line);
+        if (star.Star.TemperatureK < 6800)
+            MolecularBands.Add(_ratio, grid, star.Lines);
+        ChromosphericEmission.Add(_emission, grid, star.Star);
+        return Transfer();
+    }
+
+    private static double[] Gaussian(double offset) =>
+        [.. Enumerable.Range(-ProfileReach, (2 * ProfileReach) + 1).Select(i => Math.Exp(-0.5 * (i - offset) * (i - offset)) / Math.Sqrt(2 * Math.PI))];
+
+    private void AddHydrogen()
+    {
+        if (star.Star.Variant == StellarVariant.WhiteDwarfDB)
+            return;
+        var layer = star.Hydrogen;
+        HydrogenLines.Add(_ratio, grid, layer.Gas, layer.ContinuousOpacityAt, layer.DopplerCm(Element.Hydrogen));
+    }
+
+    private void AddLine(SpectralLine line)
+    {
+        var position = grid.Position(line.Wavelength);
+        if (position < 0 || position > grid.Count - 1)
+            return;
+        var layer = star.Lines;
+        var central = line.CentralRatio(layer) / star.HalfDepthRatio(line.Wavelength);
+        var doppler = layer.DopplerCm(line.Element) / Constants.LightSpeedCm / grid.LnStep;
+        if (central * doppler < FaintestWidth)
+            return;
+        var damping = layer.Damping(line);
+        var k = CurveOfGrowth.WingStrength(central, damping);
+        var width = CurveOfGrowth.CoreInsideWings(central, damping);
+        if (Math.Sqrt(k) * doppler < 0.7)
+            width += CurveOfGrowth.Wings(central, damping);
+        else
+            AddWings(position, k * doppler * doppler * star.HalfDepthRatio(line.Wavelength), CurveOfGrowth.WingStart * doppler);
+        AddNarrow(position, width * doppler * star.StrongestDepth(line.Wavelength));
+    }
+
+    // Strength and start in units of grid steps.
+    private void AddWings(double position, double strength, double start)
+    {
+        var reach = Math.Min(Math.Sqrt(strength / FaintestWing), 2000);
+        var floor = Math.Max(start * start, 0.5);
+        var last = Math.Min(grid.Count - 1, (int)(position + reach));
+        for (var i = Math.Max(0, (int)(position - reach)); i <= last; i++)
+            _ratio[i] += strength / (((i - position) * (i - position)) + floor);
+    }
+
+    private void AddNarrow(double position, double width)
+    {
+        var nearest = (int)Math.Round(position);
+        var gaussian = Gaussians[16 + (int)Math.Round(32 * (position - nearest))];
+        var first = nearest - ProfileReach;
+        for (var i = Math.Max(0, -first); i < gaussian.Length && first + i < grid.Count; i++)
+            _narrow[first + i] += width * gaussian[i];
+    }
+
+    private StellarSpectrum Transfer()
+    {
+        const int node = 16;
+        var relative = new float[grid.Count];
+        var continuum = new float[grid.Count];
+        var unit = star.ContinuumFlux(5500);
+        for (var first = 0; first < grid.Count; first += node)
+        {
+            var (here, next) = (At(first, unit), At(first + node, unit));
+            var step = (next - here) * (1f / node);
+            for (var i = first; i < Math.Min(first + node, grid.Count); i++, here += step)
+            {
+                continuum[i] = here.X;
+                relative[i] = (float)(Residual(_ratio[i] / here.Z, here.Y, _narrow[i]) + _emission[i]);
+            }
+        }
+
+        return new StellarSpectrum(star.Star, relative, continuum);
+    }
+
+    // Continuum, strongest depth and half-depth ratio, smooth enough to be interpolated.
+    private Vector3 At(int index, double unit)
+    {
+        var wavelength = grid.Wavelength(index);
+        return new((float)(star.ContinuumFlux(wavelength) / unit), (float)star.StrongestDepth(wavelength), (float)star.HalfDepthRatio(wavelength));
+    }
+
+    // Narrow lines lose contrast where wings or bands have already taken the light away.
+    private static double Residual(double ratio, double strongest, double narrow)
+    {
+        var residual = 1 - (strongest * ratio / (1 + ratio));
+        return residual * Math.Exp(-narrow / ((1 + ratio) * residual));
+    }
+}
