@@ -30,6 +30,8 @@ internal static class CommandLine
     private static RootCommand Root() => new("From raw spectra in FITS to a catalogue of redshifts and velocities, with reasons.")
     {
         RunCommand.Build(),
+        ExplainCommand.Build(),
+        LinesCommand.Build(),
     };
 
     private static int Refuse(ParseResult parsed)

@@ -16,6 +16,7 @@ internal sealed class Progress : IDisposable
     private readonly bool _redraws;
     private readonly TimeSpan _interval;
     private readonly int _files;
+    private readonly Lock _lock = new();
     private readonly Stopwatch _watch = Stopwatch.StartNew();
     private TimeSpan _last;
     private bool _drawn;
@@ -32,11 +33,14 @@ internal sealed class Progress : IDisposable
     public static Progress Start(int files) => new(
         Console.Error, !Console.IsErrorRedirected && Environment.GetEnvironmentVariable("TERM") != "dumb", files);
 
-    /// <summary>Prints a line of its own.</summary>
+    /// <summary>Prints a line of its own; safe to call from several threads.</summary>
     public void Say(string message)
     {
-        Clear();
-        _out.WriteLine(HarmlessText.Printable(message));
+        lock (_lock)
+        {
+            Clear();
+            _out.WriteLine(HarmlessText.Printable(message));
+        }
     }
 
     /// <summary>Takes note of an outcome of the file with this number.</summary>
@@ -45,7 +49,19 @@ internal sealed class Progress : IDisposable
         if (_watch.Elapsed - _last < _interval)
             return;
         _last = _watch.Elapsed;
-        var done = (double)file / _files;
+        lock (_lock)
+            Draw((double)file / _files, tally);
+    }
+
+    /// <inheritdoc/>
+    public void Dispose()
+    {
+        lock (_lock)
+            Clear();
+    }
+
+    private void Draw(double done, Tally tally)
+    {
         Clear();
         if (_redraws)
             _out.Write(Bar(done) + Text(done, tally));
@@ -53,9 +69,6 @@ internal sealed class Progress : IDisposable
             _out.WriteLine(Text(done, tally));
         _drawn = _redraws;
     }
-
-    /// <inheritdoc/>
-    public void Dispose() => Clear();
 
     private void Clear()
     {

@@ -2,6 +2,8 @@ using System.CommandLine;
 using System.Diagnostics;
 using Redshift.Pipeline.Batch;
 using Redshift.Pipeline.Report;
+using Redshift.Pipeline.Report.Plots;
+using Redshift.Pipeline.Results;
 
 namespace Redshift.Cli;
 
@@ -21,6 +23,7 @@ internal sealed class RunCommand
 
     private readonly Option<int?> _jobs = Count("--jobs", "Number of spectra measured at the same time; as many as there are processors unless given", 1);
     private readonly Option<int?> _maxRejects = Count("--max-rejects", "End with status 4 where more than N spectra or files cannot be used", 0);
+    private readonly Option<bool> _plots = new("--plots") { Description = "Draw every spectrum with its answer into the folder plots" };
     private readonly Option<bool> _json = new("--json") { Description = "Print the summary as JSON" };
 
     private RunCommand()
@@ -28,6 +31,7 @@ internal sealed class RunCommand
         _paths = new(_command);
         _command.Add(_out);
         _shared = new(_command);
+        _command.Add(_plots);
         _command.Add(_jobs);
         _command.Add(_maxRejects);
         _command.Add(_json);
@@ -46,7 +50,8 @@ internal sealed class RunCommand
         using var folder = new ReportFolder(parsed.GetRequiredValue(_out), settings.Load.Keep);
         using var progress = Progress.Start(files.Count);
         var tally = new Tally();
-        await foreach (var outcome in new BatchRun(settings, jobs).RunAsync(files, token).ConfigureAwait(false))
+        Action<ObservationResult>? draw = parsed.GetValue(_plots) ? new PlotFolder(folder.Path, progress.Say).Draw : null;
+        await foreach (var outcome in new BatchRun(settings, jobs, draw).RunAsync(files, token).ConfigureAwait(false))
         {
             Record(outcome, folder, progress);
             tally.Count(outcome);
@@ -73,12 +78,6 @@ internal sealed class RunCommand
     {
         Description = description,
         HelpName = "N",
-        CustomParser = result =>
-        {
-            if (int.TryParse(result.Tokens[0].Value, out var value) && value >= least)
-                return value;
-            result.AddError($"'{result.Tokens[0].Value}': {name} expects a whole number, {least} or more");
-            return null;
-        },
+        CustomParser = result => WholeNumber.Parse(result, least),
     };
 }

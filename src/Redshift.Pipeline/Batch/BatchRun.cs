@@ -116,8 +116,9 @@ public sealed class BatchRun(PipelineSettings settings, int jobs, Action<Observa
                     finish?.Invoke(result);
                 pending.Outcome.SetResult(outcome);
             }
-            catch (IOException problem)
+            catch (Exception problem)
             {
+                // What finishing throws (a full disk) ends the run: the caller meets it in its turn.
                 pending.Outcome.SetException(problem);
             }
         }

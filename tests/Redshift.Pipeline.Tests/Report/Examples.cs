@@ -95,4 +95,68 @@ internal static class Examples
         State = LineState.Matched,
         Note = "",
     };
+
+    public static ObservationResult Explained() => Full() with
+    {
+        Candidates =
+        [
+            new(ObjectKind.Galaxy, 0.0999, 0.0001, "old stars and gas", 540.5, 0.9987),
+            new(ObjectKind.Quasar, 0.5, 0.001, "broad lines", 533.8, 0.0012),
+        ],
+        Lines =
+        [
+            HAlpha(),
+            HAlpha() with
+            {
+                Line = "[O III] 5007", Family = "forbidden", ObservedVacuumA = 5508.5, OffsetKmS = 12.2, LnLikelihoodGain = 20.5,
+                EquivalentWidthRestA = -4, State = LineState.Blended, Note = "with an unknown line",
+            },
+            HAlpha() with
+            {
+                Line = "H beta", RestVacuumA = 4862.691, ObservedVacuumA = null, OffsetKmS = null, OffsetErrKmS = null,
+                EquivalentWidthRestA = null, LnLikelihoodGain = null, State = LineState.ExpectedMissing,
+            },
+        ],
+        Cautions = ["rival-redshift", "word-without-advice"],
+    };
+
+    public static Observation Read() => Observation() with
+    {
+        Notes =
+        [
+            new("wavelength", "HDU 1 column LOGLAM", "unit log10(Angstrom)"),
+            new("flux", "HDU 1 column FLUX", "the only column with a flux unit"),
+        ],
+        Spectra =
+        [
+            new Spectrum
+            {
+                Label = "B", Wavelength = [4000, 4001, 4002], Flux = [1, 2, 3], InverseVariance = [1, 0, 1], HasErrors = true,
+                FluxUnit = "erg/s/cm2/A",
+            },
+        ],
+    };
+
+    /// <summary>A galaxy with its data, as the pictures need it.</summary>
+    public static ObservationResult Drawn()
+    {
+        var wavelength = Enumerable.Range(0, 3000).Select(i => 4000 + 1.5 * i).ToArray();
+        var continuum = wavelength.Select(w => 1e-16 * (2 - w / 9000)).ToArray();
+        var model = wavelength.Select((w, i) => continuum[i] * (1 + 3 * Math.Exp(-0.5 * Math.Pow((w - 7220) / 6, 2)))).ToArray();
+        var sigma = Array.ConvertAll(continuum, c => c / 20);
+        var flux = model.Select((m, i) => m + sigma[i] * Math.Sin(1e4 * i)).ToArray();
+        var spectrum = new Spectrum
+        {
+            Wavelength = wavelength,
+            Flux = flux,
+            InverseVariance = Array.ConvertAll(sigma, s => 1 / (s * s)),
+            HasErrors = true,
+            FluxUnit = "erg/s/cm2/A",
+        };
+        return Explained() with
+        {
+            Observation = Observation() with { Spectra = [spectrum] },
+            Curves = [new(continuum, model, sigma)],
+        };
+    }
 }

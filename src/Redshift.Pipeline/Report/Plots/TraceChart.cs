@@ -29,8 +29,9 @@ internal sealed class TraceChart : IDisposable
         _place = place;
         _result = result;
         var spectra = result.Observation.Spectra;
-        Blue = spectra.Min(spectrum => spectrum.Wavelength[0]);
-        Red = spectra.Max(spectrum => spectrum.Wavelength[^1]);
+        (Blue, Red) = (spectra.Min(spectrum => spectrum.Wavelength[0]), spectra.Max(spectrum => spectrum.Wavelength[^1]));
+        if (Red <= Blue)
+            (Blue, Red) = (Blue - 1, Red + 1);
         var width = (Red - Blue) / (Right - Left) * LeastStepPixels;
         _runs = [.. spectra.SelectMany((spectrum, i) => Bin.Runs(spectrum, result.Curves.ElementAtOrDefault(i), width))];
         (Bottom, Top) = Heights();

@@ -1,0 +1,18 @@
+using System.CommandLine.Parsing;
+using System.Globalization;
+
+namespace Redshift.Cli;
+
+/// <summary>Option values that count something.</summary>
+internal static class WholeNumber
+{
+    /// <summary>A whole number of at least <paramref name="least"/>; otherwise an error on the option.</summary>
+    public static int? Parse(ArgumentResult result, int least)
+    {
+        var text = result.Tokens.Count == 1 ? result.Tokens[0].Value : "";
+        if (int.TryParse(text, NumberStyles.None, CultureInfo.InvariantCulture, out var value) && value >= least)
+            return value;
+        result.AddError($"'{text}': expected a whole number, {least} or more");
+        return null;
+    }
+}
