@@ -1,3 +1,5 @@
+using System.Numerics;
+
 namespace Redshift.Physics.Air;
 
 /// <summary>
@@ -18,9 +20,6 @@ public static class AirRefraction
     /// <summary>The shortest vacuum wavelength, in angstrom, that is ever quoted in air.</summary>
     public const double ShortestVacuumAngstrom = 2000;
 
-    // The step shrinks by a factor of some 1e5 a round, so that this is reached after three or four.
-    private const double Convergence = 1e-14;
-
     private static readonly double ShortestAirAngstrom = ToAir(ShortestVacuumAngstrom);
 
     /// <summary>The refractivity n - 1 of standard air.</summary>
@@ -28,8 +27,7 @@ public static class AirRefraction
     /// <returns>n - 1, a pure number near 2.8e-4.</returns>
     public static double Refractivity(double vacuumAngstrom)
     {
-        double waveNumber = 1e4 / vacuumAngstrom;
-        double square = waveNumber * waveNumber;
+        double square = 1e8 / (vacuumAngstrom * vacuumAngstrom);
         return 1e-8 * (5792105 / (238.0185 - square) + 167917 / (57.362 - square));
     }
 
@@ -63,22 +61,37 @@ public static class AirRefraction
     public static void ToVacuum(ReadOnlySpan<double> airAngstrom, Span<double> vacuumAngstrom)
     {
         RequireRoom(airAngstrom, vacuumAngstrom);
-        for (int i = 0; i < airAngstrom.Length; i++)
+        int i = 0;
+        for (; i <= airAngstrom.Length - Vector<double>.Count; i += Vector<double>.Count)
+            ToVacuum(new Vector<double>(airAngstrom[i..])).CopyTo(vacuumAngstrom[i..]);
+        for (; i < airAngstrom.Length; i++)
             vacuumAngstrom[i] = ToVacuum(airAngstrom[i]);
     }
 
-    // The refractivity is a function of the vacuum wavelength, the unknown.
+    // The refractivity is a function of the vacuum wavelength, the unknown. A round shrinks the error by a factor of
+    // 1e4 or more, from 3e-4 at the start to 1e-17 after the last of them.
     private static double SolveForVacuum(double airAngstrom)
     {
-        double vacuum = airAngstrom;
-        double previous;
-        do
-        {
-            previous = vacuum;
-            vacuum = airAngstrom * (1 + Refractivity(vacuum));
-        }
-        while (Math.Abs(vacuum - previous) > Convergence * vacuum);
-        return vacuum;
+        double vacuum = airAngstrom * (1 + Refractivity(airAngstrom));
+        vacuum = airAngstrom * (1 + Refractivity(vacuum));
+        return airAngstrom * (1 + Refractivity(vacuum));
+    }
+
+    // The same operations in the same order as for one value, so that the results agree to the last bit.
+    private static Vector<double> ToVacuum(Vector<double> air)
+    {
+        Vector<double> vacuum = air * (Vector<double>.One + Refractivity(air));
+        vacuum = air * (Vector<double>.One + Refractivity(vacuum));
+        vacuum = air * (Vector<double>.One + Refractivity(vacuum));
+        return Vector.ConditionalSelect(Vector.LessThan(air, new Vector<double>(ShortestAirAngstrom)), air, vacuum);
+    }
+
+    private static Vector<double> Refractivity(Vector<double> vacuum)
+    {
+        Vector<double> square = new Vector<double>(1e8) / (vacuum * vacuum);
+        return new Vector<double>(1e-8)
+            * (new Vector<double>(5792105) / (new Vector<double>(238.0185) - square)
+                + new Vector<double>(167917) / (new Vector<double>(57.362) - square));
     }
 
     private static void RequireRoom(ReadOnlySpan<double> source, Span<double> destination)

@@ -1,3 +1,4 @@
+using System.Collections.Concurrent;
 using Redshift.Physics.Constants;
 
 namespace Redshift.Physics.Hydrogen;
@@ -13,12 +14,11 @@ namespace Redshift.Physics.Hydrogen;
 /// </remarks>
 public sealed class HydrogenicAtom
 {
-    private const int TabulatedUpper = 40;
-    private const int TabulatedLower = 6;
-
     private readonly double _groundEnergy;
     private readonly DipoleStrengths _strengths;
-    private readonly HydrogenicLine[][] _table;
+
+    // A line costs some microseconds to compute and is asked for again and again.
+    private readonly ConcurrentDictionary<(int Upper, int Lower), HydrogenicLine> _lines = new();
 
     private HydrogenicAtom(string name, int charge, PhysicalConstant electronNucleusMassRatio)
     {
@@ -27,7 +27,6 @@ public sealed class HydrogenicAtom
         ElectronNucleusMassRatio = electronNucleusMassRatio.Value;
         _groundEnergy = LevelEnergy.Of(new(1, 0, 1), charge, ElectronNucleusMassRatio);
         _strengths = new DipoleStrengths(this);
-        _table = [.. Enumerable.Range(1, TabulatedLower).Select(TabulateSeries)];
     }
 
     /// <summary>Neutral hydrogen, mass 1.</summary>
@@ -83,9 +82,7 @@ public sealed class HydrogenicAtom
     public HydrogenicLine Line(int upper, int lower)
     {
         RequireTransition(upper, lower);
-        return lower <= TabulatedLower && upper <= TabulatedUpper
-            ? _table[lower - 1][upper - lower - 1]
-            : ComputeLine(upper, lower);
+        return _lines.GetOrAdd((upper, lower), key => ComputeLine(key.Upper, key.Lower));
     }
 
     /// <summary>The electric dipole transitions of which the line between two shells consists.</summary>
@@ -98,9 +95,6 @@ public sealed class HydrogenicAtom
         RequireTransition(upper, lower);
         return _strengths.Components(upper, lower);
     }
-
-    private HydrogenicLine[] TabulateSeries(int lower)
-        => [.. Enumerable.Range(lower + 1, TabulatedUpper - lower).Select(upper => ComputeLine(upper, lower))];
 
     private HydrogenicLine ComputeLine(int upper, int lower)
     {

@@ -1,5 +1,3 @@
-using MathNet.Numerics;
-
 namespace Redshift.Physics.Hydrogen;
 
 /// <summary>
@@ -41,13 +39,20 @@ internal sealed class RadialIntegrals
     {
         double sum = upper + lower;
         double difference = upper - lower;
-        double logarithm = 0.5 * (SpecialFunctions.FactorialLn(upper + lower)
-                - SpecialFunctions.FactorialLn(upper - lower - 1)
-                - SpecialFunctions.FactorialLn(2 * lower - 1))
+        double logarithm = 0.5 * (SumOfLogs(upper - lower, upper + lower) - SumOfLogs(1, 2 * lower - 1))
             + (lower + 2) * Math.Log(4.0 * upper * lower)
             + (difference - 2) * Math.Log(difference)
             - (sum + 2) * Math.Log(sum);
         return Math.Exp(logarithm) / 4;
+    }
+
+    // The logarithm of last! / (first - 1)!.
+    private static double SumOfLogs(int first, int last)
+    {
+        double sum = 0;
+        for (int i = first; i <= last; i++)
+            sum += Math.Log(i);
+        return sum;
     }
 
     private static double Ladder(int n, int l) => Math.Sqrt((double)(n - l) * (n + l)) / ((double)n * l);

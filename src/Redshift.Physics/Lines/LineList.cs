@@ -1,5 +1,3 @@
-using System.Collections.Frozen;
-
 namespace Redshift.Physics.Lines;
 
 /// <summary>
@@ -8,7 +6,7 @@ namespace Redshift.Physics.Lines;
 /// </summary>
 public static class LineList
 {
-    private static readonly FrozenDictionary<string, SpectralLine> ByName = Read().ToFrozenDictionary(line => line.Name);
+    private static readonly Dictionary<string, SpectralLine> ByName = Read().ToDictionary(line => line.Name);
 
     /// <summary>Every line, by rising vacuum wavelength.</summary>
     public static IReadOnlyList<SpectralLine> All { get; } = [.. ByName.Values.OrderBy(line => line.VacuumAngstrom)];

@@ -1,5 +1,3 @@
-using MathNet.Numerics;
-
 namespace Redshift.Physics.Profiles;
 
 /// <summary>The Gaussian profile of unit area. All lengths in one unit of the caller's choice.</summary>
@@ -30,8 +28,8 @@ public static class Gaussian
         double scale = 1 / (Math.Sqrt(2) * sigma);
         // Far from the centre the difference of two values near 1 would be rounding only.
         return left > 0
-            ? 0.5 * (SpecialFunctions.Erfc(left * scale) - SpecialFunctions.Erfc(right * scale))
-            : 0.5 * (SpecialFunctions.Erf(right * scale) - SpecialFunctions.Erf(left * scale));
+            ? 0.5 * (ErrorFunction.Erfc(left * scale) - ErrorFunction.Erfc(right * scale))
+            : 0.5 * (ErrorFunction.Erf(right * scale) - ErrorFunction.Erf(left * scale));
     }
 
     /// <summary>The mean of the profile over each pixel, which is what a detector records.</summary>
@@ -44,7 +42,15 @@ public static class Gaussian
     {
         if (edges.Length != pixels.Length + 1)
             throw new ArgumentException($"{pixels.Length} pixels have {pixels.Length + 1} edges, not {edges.Length}.", nameof(edges));
+        if (pixels.IsEmpty)
+            return;
+        double scale = 1 / (Math.Sqrt(2) * sigma);
+        double left = ErrorFunction.Erf((edges[0] - centre) * scale);
         for (int i = 0; i < pixels.Length; i++)
-            pixels[i] = Area(edges[i] - centre, edges[i + 1] - centre, sigma) / (edges[i + 1] - edges[i]);
+        {
+            double right = ErrorFunction.Erf((edges[i + 1] - centre) * scale);
+            pixels[i] = 0.5 * (right - left) / (edges[i + 1] - edges[i]);
+            left = right;
+        }
     }
 }

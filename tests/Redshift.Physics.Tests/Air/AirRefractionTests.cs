@@ -62,8 +62,8 @@ public sealed class AirRefractionTests
     [Fact]
     public void Spans_are_converted_like_single_values_and_in_place()
     {
-        double[] vacuum = [1500, 2000, 5000, 9000];
-        double[] air = new double[4];
+        double[] vacuum = [.. Enumerable.Range(0, 83).Select(i => 1500 + 97.3 * i)];
+        double[] air = new double[vacuum.Length];
         AirRefraction.ToAir(vacuum, air);
         Assert.Equal(vacuum.Select(AirRefraction.ToAir), air);
 

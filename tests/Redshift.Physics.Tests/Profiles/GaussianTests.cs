@@ -1,4 +1,5 @@
 using CsCheck;
+using MathNet.Numerics;
 using Redshift.Physics.Profiles;
 using Xunit;
 
@@ -19,6 +20,29 @@ public sealed class GaussianTests
     public void Far_tail_keeps_its_relative_precision()
         => Assert.Equal(1, Gaussian.Area(10, 11, 1) / 7.61966e-24, 1e-5);
 
+    // The area is half the difference of two error functions, here those of a general library.
+    [Fact]
+    public void Area_agrees_with_the_error_function()
+        => Gen.Select(Gen.Double[-9, 9], Gen.Double[0, 3]).Sample((left, width) =>
+        {
+            double expected = 0.5 * (SpecialFunctions.Erf((left + width) / Math.Sqrt(2)) - SpecialFunctions.Erf(left / Math.Sqrt(2)));
+            Assert.Equal(expected, Gaussian.Area(left, left + width, 1), 3e-16);
+        });
+
+    // 0.5 erfc(x / sqrt 2) on all pieces of the approximation, computed with 25 digits.
+    [Theory]
+    [InlineData(0.1, 0.46017216272297102)]
+    [InlineData(0.6, 0.27425311775007358)]
+    [InlineData(0.7, 0.24196365222307301)]
+    [InlineData(1, 0.15865525393145705)]
+    [InlineData(3, 0.0013498980316300945)]
+    [InlineData(5, 2.8665157187919391e-7)]
+    [InlineData(5.7, 5.9903714010635344e-9)]
+    [InlineData(8, 6.2209605742717841e-16)]
+    [InlineData(20, 2.7536241186062337e-89)]
+    public void Upper_tail_is_precise(double left, double area)
+        => Assert.Equal(1, Gaussian.Area(left, 60, 1) / area, 3e-14);
+
     [Fact]
     public void Area_is_symmetric()
         => Gen.Select(Gen.Double[-5, 5], Gen.Double[0, 5]).Sample((left, width) =>
@@ -31,6 +55,7 @@ public sealed class GaussianTests
         double[] pixels = new double[100];
         Gaussian.PixelMeans(edges, 5031.3, 1.1, pixels);
         Assert.Equal(1, pixels.Sum() * 0.7, 1e-13);
+        Assert.Equal(Gaussian.Area(edges[44] - 5031.3, edges[45] - 5031.3, 1.1) / 0.7, pixels[44], 1e-12);
     }
 
     // A pixel adds the variance of its width, d^2/12, to that of the line.
