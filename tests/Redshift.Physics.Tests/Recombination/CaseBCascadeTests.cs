@@ -15,21 +15,15 @@ public sealed class CaseBCascadeTests
         Assert.Equal([2.34e-14, 5.35e-14], cascade.Capture(2), (e, a) => Math.Abs(a / e - 1) < 0.004);
     }
 
-    // The same book, table 4.4: 4 pi j(H beta) / n_e n_p, in 1e-25 erg cm^3/s.
+    // Emission of H beta, 4 pi j / n_e n_p in 1e-25 erg cm^3/s: the same book, table 4.4.
     [Theory]
     [InlineData(5000, 2.20)]
     [InlineData(10000, 1.24)]
     [InlineData(20000, 0.658)]
-    public void Emission_of_H_beta_agrees_with_the_published_one(double temperature, double emission)
-        => Assert.Equal(1, 1e25 * CaseBCascade.Extrapolated(temperature, 80)(4, 2) / emission, 0.008);
-
-    [Theory]
-    [InlineData(5000)]
-    [InlineData(10000)]
-    [InlineData(20000)]
-    public void Stored_table_is_what_the_cascade_gives(double temperature)
+    public void Stored_table_is_what_the_cascade_gives(double temperature, double publishedHBeta)
     {
         Func<int, int, double> emission = CaseBCascade.Extrapolated(temperature, 80);
+        Assert.Equal(1, 1e25 * emission(4, 2) / publishedHBeta, 0.008);
         for (int lower = 2; lower <= 4; lower++)
         {
             for (int upper = lower + 1; upper <= CaseB.HighestUpper; upper++)
