@@ -8,10 +8,10 @@ public sealed class FitsFile : IDisposable
 {
     private readonly ByteSource _source;
 
-    private FitsFile(ByteSource source)
+    private FitsFile(ByteSource source, FitsReadOptions options)
     {
         _source = source;
-        (Hdus, Damage) = HduScanner.Scan(source);
+        (Hdus, Damage) = HduScanner.Scan(source, options);
     }
 
     /// <summary>Path or name it was opened by.</summary>
@@ -33,7 +33,7 @@ public sealed class FitsFile : IDisposable
     /// <exception cref="FitsException">Not one header-data unit with data is sound.</exception>
     /// <exception cref="IOException">The file system says no.</exception>
     public static FitsFile Open(string path, FitsReadOptions? options = null) =>
-        Open(SourceOpener.Open(path, options ?? FitsReadOptions.Default));
+        Open(SourceOpener.Open(path, options ?? FitsReadOptions.Default), options ?? FitsReadOptions.Default);
 
     /// <summary>Reads a stream, seekable or not, to its end; the stream stays the caller's.</summary>
     /// <param name="stream">Plain or gzip-compressed FITS.</param>
@@ -42,7 +42,7 @@ public sealed class FitsFile : IDisposable
     /// <exception cref="NotFitsException">The stream is something else.</exception>
     /// <exception cref="FitsException">Not one header-data unit with data is sound.</exception>
     public static FitsFile Open(Stream stream, string name, FitsReadOptions? options = null) =>
-        Open(SourceOpener.Open(stream, name, options ?? FitsReadOptions.Default));
+        Open(SourceOpener.Open(stream, name, options ?? FitsReadOptions.Default), options ?? FitsReadOptions.Default);
 
     /// <summary>Whether a file that begins with these bytes claims to be FITS; ten bytes suffice.</summary>
     public static bool LooksLikeFits(ReadOnlySpan<byte> firstBytes) => firstBytes.StartsWith("SIMPLE  ="u8);
@@ -50,11 +50,11 @@ public sealed class FitsFile : IDisposable
     /// <inheritdoc/>
     public void Dispose() => _source.Dispose();
 
-    private static FitsFile Open(ByteSource source)
+    private static FitsFile Open(ByteSource source, FitsReadOptions options)
     {
         try
         {
-            return new FitsFile(source);
+            return new FitsFile(source, options);
         }
         catch
         {

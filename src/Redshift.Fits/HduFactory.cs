@@ -3,7 +3,7 @@ namespace Redshift.Fits;
 /// <summary>Says of which kind a unit is.</summary>
 internal static class HduFactory
 {
-    public static Hdu Create(HduLayout layout, ByteSource source)
+    public static Hdu Create(HduLayout layout, ByteSource source, FitsReadOptions options)
     {
         if (layout.Where.Hdu == 0) return CreatePrimary(layout, source);
         var type = layout.Header.RequireString("XTENSION", layout.Where);
@@ -11,6 +11,7 @@ internal static class HduFactory
         {
             // IUEIMAGE is the name under which IMAGE was first used.
             "IMAGE" or "IUEIMAGE" => new ImageHdu(layout, source),
+            "BINTABLE" when CompressedImage.Is(layout) => CompressedImage.Create(layout, source, options),
             "BINTABLE" or "A3DTABLE" => new TableHdu(layout, source, isAscii: false),
             "TABLE" => new TableHdu(layout, source, isAscii: true),
             _ => new OtherHdu(layout, source, type),

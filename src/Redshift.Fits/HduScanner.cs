@@ -7,17 +7,22 @@ namespace Redshift.Fits;
 internal sealed class HduScanner
 {
     private readonly ByteSource _source;
+    private readonly FitsReadOptions _options;
     private readonly List<Hdu> _hdus = [];
 
-    private HduScanner(ByteSource source) => _source = source;
+    private HduScanner(ByteSource source, FitsReadOptions options)
+    {
+        _source = source;
+        _options = options;
+    }
 
     /// <summary>The sound units, and what is wrong behind them.</summary>
-    public static (IReadOnlyList<Hdu> Hdus, FitsException? Damage) Scan(ByteSource source)
+    public static (IReadOnlyList<Hdu> Hdus, FitsException? Damage) Scan(ByteSource source, FitsReadOptions options)
     {
-        var scanner = new HduScanner(source);
+        var scanner = new HduScanner(source, options);
         scanner.RequireFits();
-        var damage = source.Damage ?? scanner.ScanAll();
-        if (source.Damage is not null) scanner.ScanAll();
+        var found = scanner.ScanAll();
+        var damage = source.Damage ?? found;
         if (damage is not null && !scanner._hdus.Exists(hdu => hdu.Layout.DataLength > 0)) throw damage;
         return (scanner._hdus, damage);
     }
@@ -39,7 +44,7 @@ internal sealed class HduScanner
     {
         var layout = HduLayout.Read(_source, new FitsLocation(_source.Name, _hdus.Count, Offset: at));
         RequireData(layout);
-        _hdus.Add(HduFactory.Create(layout, _source));
+        _hdus.Add(HduFactory.Create(layout, _source, _options));
         RequirePadding(layout);
         return layout.End;
     }

@@ -175,6 +175,8 @@ public sealed class TableColumn
         return values;
     }
 
+    internal Window ViewCell(long row) => _cells.ViewCell(row);
+
     private string? Text(string stem) => _table.Header.GetString(Keywords.Indexed(stem, Index + 1));
 
     private Card? Card(string stem) => _table.Header.Find(Keywords.Indexed(stem, Index + 1));

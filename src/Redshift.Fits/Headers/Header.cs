@@ -71,11 +71,15 @@ public sealed class Header : IReadOnlyList<Card>
 
     IEnumerator IEnumerable.GetEnumerator() => GetEnumerator();
 
-    private ReadOnlySpan<byte> RecordsOf(int index)
+    /// <summary>The records of each card, as they stand.</summary>
+    internal IEnumerable<ReadOnlyMemory<byte>> Records()
     {
-        var end = index + 1 < _starts.Length ? _starts[index + 1] : _records.Length;
-        return _records.AsSpan(_starts[index]..end);
+        for (var i = 0; i < Count; i++) yield return _records.AsMemory(RangeOf(i));
     }
+
+    private Range RangeOf(int index) => _starts[index]..(index + 1 < _starts.Length ? _starts[index + 1] : _records.Length);
+
+    private ReadOnlySpan<byte> RecordsOf(int index) => _records.AsSpan(RangeOf(index));
 
     private ReadOnlySpan<byte> FirstRecordOf(int index) => _records.AsSpan(_starts[index], RecordFields.RecordLength);
 

@@ -1,0 +1,32 @@
+using System.Globalization;
+
+namespace Redshift.Fits;
+
+/// <summary>Makes an image of a table that holds one in compressed tiles (chapter 10).</summary>
+internal static class CompressedImage
+{
+    public static bool Is(HduLayout layout) => layout.Header.GetLogical("ZIMAGE") == true;
+
+    public static ImageHdu Create(HduLayout layout, ByteSource source, FitsReadOptions options)
+    {
+        var table = new TableHdu(layout, source, isAscii: false);
+        var bitpix = HduLayout.ReadBitpix(layout.Header, layout.Where, "ZBITPIX");
+        var axes = HduLayout.ReadAxes(layout.Header, layout.Where, "ZNAXIS");
+        RequireBounds(axes, bitpix, layout, options);
+        var shown = layout with { Header = UncompressedHeader.Of(layout.Header) };
+        return new ImageHdu(shown, new TiledPixels(table, bitpix, axes), bitpix, axes, 0);
+    }
+
+    private static void RequireBounds(long[] axes, Bitpix bitpix, HduLayout layout, FitsReadOptions options)
+    {
+        var limit = options.ExpansionLimit(layout.DataLength);
+        Int128 bytes = BigEndian.SizeOf(bitpix);
+        foreach (var axis in axes)
+        {
+            bytes *= axis;
+            if (bytes > limit)
+                throw new FitsUnsupportedException(
+                    layout.Where, string.Create(CultureInfo.InvariantCulture, $"the image is larger than the {limit} bytes allowed"));
+        }
+    }
+}
