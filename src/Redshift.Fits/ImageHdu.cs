@@ -12,20 +12,19 @@ public sealed class ImageHdu : Hdu
     private const int Piece = 1 << 16;
 
     private readonly Scaling _scaling;
+    private readonly ByteSource _pixels;
     private readonly long _start;
 
-    internal ImageHdu(HduLayout layout, ByteSource source)
-        : this(layout, source, layout.Bitpix, layout.Axes, layout.DataStart)
-    {
-    }
+    internal ImageHdu(HduLayout layout, ByteSource file)
+        : this(layout, file, layout.Header, file, layout.Bitpix, layout.Axes) => _start = layout.DataStart;
 
-    internal ImageHdu(HduLayout layout, ByteSource pixels, Bitpix bitpix, long[] axes, long start)
-        : base(layout, pixels)
+    internal ImageHdu(HduLayout layout, ByteSource file, Header shown, ByteSource pixels, Bitpix bitpix, long[] axes)
+        : base(layout, file, shown)
     {
+        _pixels = pixels;
         Bitpix = bitpix;
         Shape = axes;
         Count = HduLayout.Elements(axes);
-        _start = start;
         _scaling = new Scaling(Header.GetDouble("BSCALE") ?? 1, Header.GetDouble("BZERO") ?? 0, Header.GetInteger("BLANK"));
     }
 
@@ -109,7 +108,7 @@ public sealed class ImageHdu : Hdu
     private Window View(long first, int count)
     {
         var size = BigEndian.SizeOf(Bitpix);
-        return Source.View(_start + first * size, count * size);
+        return _pixels.View(_start + first * size, count * size);
     }
 
     private void RequireRange(long first, int count)

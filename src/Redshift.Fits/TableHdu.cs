@@ -5,11 +5,11 @@ public sealed class TableHdu : Hdu
 {
     private readonly Lazy<IReadOnlyList<TableColumn>> _columns;
 
-    internal TableHdu(HduLayout layout, ByteSource source, bool isAscii)
-        : base(layout, source)
+    internal TableHdu(HduLayout layout, ByteSource file, bool isAscii)
+        : base(layout, file)
     {
         IsAscii = isAscii;
-        Rows = TableRows.Read(layout, source);
+        Rows = TableRows.Read(layout, file);
         _columns = new Lazy<IReadOnlyList<TableColumn>>(() => ColumnReader.ReadAll(this), LazyThreadSafetyMode.PublicationOnly);
     }
 

@@ -13,8 +13,7 @@ internal static class CompressedImage
         var bitpix = HduLayout.ReadBitpix(layout.Header, layout.Where, "ZBITPIX");
         var axes = HduLayout.ReadAxes(layout.Header, layout.Where, "ZNAXIS");
         RequireBounds(axes, bitpix, layout, options);
-        var shown = layout with { Header = UncompressedHeader.Of(layout.Header) };
-        return new ImageHdu(shown, new TiledPixels(table, bitpix, axes), bitpix, axes, 0);
+        return new ImageHdu(layout, source, UncompressedHeader.Of(layout.Header), new TiledPixels(table, bitpix, axes), bitpix, axes);
     }
 
     private static void RequireBounds(long[] axes, Bitpix bitpix, HduLayout layout, FitsReadOptions options)

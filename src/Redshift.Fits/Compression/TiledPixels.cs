@@ -4,7 +4,7 @@ namespace Redshift.Fits;
 /// The pixels of a tile-compressed image as if they lay in a file uncompressed. The slab read last is kept, since neighbours
 /// are usually wanted next.
 /// </summary>
-internal sealed class TiledPixels(TableHdu table, Bitpix bitpix, long[] axes) : ByteSource(table.Source.Name)
+internal sealed class TiledPixels(TableHdu table, Bitpix bitpix, long[] axes) : ByteSource(table.File.Name)
 {
     private readonly int _size = BigEndian.SizeOf(bitpix);
     private readonly Lazy<(TileGrid Grid, TileDecoder Decoder)> _tiles =

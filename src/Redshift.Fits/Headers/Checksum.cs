@@ -8,7 +8,7 @@ internal static class Checksum
     /// <summary>The sum of a unit that carries a right CHECKSUM: all ones, which is minus zero.</summary>
     public const uint Sound = uint.MaxValue;
 
-    /// <summary>Adds bytes, a multiple of four of them, to a sum.</summary>
+    /// <summary>Adds bytes to a sum; bytes of an unfinished last word do not count.</summary>
     public static uint Add(uint sum, ReadOnlySpan<byte> bytes)
     {
         ulong total = sum;
