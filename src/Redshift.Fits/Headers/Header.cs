@@ -10,6 +10,9 @@ namespace Redshift.Fits;
 /// </summary>
 public sealed class Header : IReadOnlyList<Card>
 {
+    // Keys are scattered by a factor nobody can foresee, so that no header can make the index slow.
+    private static readonly ulong Scatter = (ulong)Random.Shared.NextInt64() | 1;
+
     private readonly byte[] _records;
     private readonly int[] _starts;
     private readonly Dictionary<ulong, int> _index;
@@ -138,7 +141,7 @@ public sealed class Header : IReadOnlyList<Card>
     private static ulong Pack(ReadOnlySpan<byte> keyword)
     {
         var packed = BinaryPrimitives.ReadUInt64BigEndian(keyword);
-        return MayHoldLowerCase(packed) ? PackLowerCase(keyword) : packed;
+        return Scatter * (MayHoldLowerCase(packed) ? PackLowerCase(keyword) : packed);
     }
 
     // Lower-case letters are among the characters with both of the bits 0x60; upper-case ones have 0x40 alone.

@@ -10,6 +10,8 @@ internal static class ColumnReader
 
     public static IReadOnlyList<TableColumn> ReadAll(TableHdu table)
     {
+        if (table.Header.GetLogical("ZTABLE") == true)
+            throw new FitsUnsupportedException(table.Layout.Where with { Keyword = "ZTABLE" }, "compressed tables are not read");
         var columns = new TableColumn[table.Header.RequireInteger("TFIELDS", 0, MostColumns, table.Layout.Where)];
         long offset = 0;
         for (var i = 0; i < columns.Length; i++)
