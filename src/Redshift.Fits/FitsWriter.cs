@@ -59,7 +59,7 @@ public sealed class FitsWriter(Stream stream, bool checksums = false)
         ArgumentOutOfRangeException.ThrowIfGreaterThan(columns.Count, 999);
         if (!_hasPrimary) WriteHeader("");
         var header = TableHeader.Build(name, rows, columns);
-        AddCards(header, cards);
+        AddCards(header, name, cards);
         WriteUnit(header, sink => TableHeader.WriteRows(sink, rows, columns));
     }
 
@@ -69,7 +69,7 @@ public sealed class FitsWriter(Stream stream, bool checksums = false)
     {
         if (HduLayout.Elements(shape) != values.Length) throw new ArgumentException("the shape does not fit the number of values", nameof(shape));
         var header = ImageHeader.Build(name, bitpix, shape, isPrimary: !_hasPrimary);
-        AddCards(header, cards);
+        AddCards(header, name, cards);
         var dataSum = 0u;
         if (checksums) dataSum = Send(values, new DataSink(null));
         stream.Write(checksums ? header.ToBytes(dataSum) : header.ToBytes());
@@ -106,9 +106,9 @@ public sealed class FitsWriter(Stream stream, bool checksums = false)
         return sink.Sum;
     }
 
-    private static void AddCards(HeaderBuilder header, IEnumerable<Card>? cards)
+    private static void AddCards(HeaderBuilder header, string name, IEnumerable<Card>? cards)
     {
         foreach (var card in cards ?? [])
-            if (!Structure.Describes(card)) header.Add(card);
+            if (!Structure.Describes(card) && !(name.Length > 0 && card.Keyword == "EXTNAME")) header.Add(card);
     }
 }

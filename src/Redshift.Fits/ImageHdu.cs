@@ -54,61 +54,41 @@ public sealed class ImageHdu : Hdu
     }
 
     /// <summary>Fills the span with physical values; see <see cref="ReadDoubles(long, int)"/>.</summary>
-    public void ReadDoubles(long first, Span<double> into)
-    {
-        RequireRange(first, into.Length);
-        for (var done = 0; done < into.Length; done += Piece)
-        {
-            var part = into[done..Math.Min(done + Piece, into.Length)];
-            using var view = View(first + done, part.Length);
-            _scaling.ToDoubles(Bitpix, view.Bytes, part);
-        }
-    }
+    public void ReadDoubles(long first, Span<double> into) =>
+        Read(first, into, (bytes, part) => _scaling.ToDoubles(Bitpix, bytes, part));
 
     /// <summary>Fills the span with physical values in single precision; 32-bit floats without scaling keep their bits.</summary>
-    public void ReadSingles(long first, Span<float> into)
-    {
-        RequireRange(first, into.Length);
-        for (var done = 0; done < into.Length; done += Piece)
-        {
-            var part = into[done..Math.Min(done + Piece, into.Length)];
-            using var view = View(first + done, part.Length);
-            _scaling.ToSingles(Bitpix, view.Bytes, part);
-        }
-    }
+    public void ReadSingles(long first, Span<float> into) =>
+        Read(first, into, (bytes, part) => _scaling.ToSingles(Bitpix, bytes, part));
 
     /// <summary>Fills the span with exact integers. BLANK is given as it stands, shifted by BZERO like the rest.</summary>
     /// <exception cref="FitsUnsupportedException">The values are no integers, or one of them does not fit.</exception>
     public void ReadIntegers(long first, Span<long> into)
     {
-        RequireRange(first, into.Length);
         Exactly.Require(IsInteger, Layout.Where);
-        for (var done = 0; done < into.Length; done += Piece)
-        {
-            var part = into[done..Math.Min(done + Piece, into.Length)];
-            using var view = View(first + done, part.Length);
-            Exactly.ToIntegers(_scaling, Bitpix, view.Bytes, part, Layout.Where);
-        }
+        Read(first, into, (bytes, part) => Exactly.ToIntegers(_scaling, Bitpix, bytes, part, Layout.Where));
     }
 
     /// <summary>Fills the span with exact unsigned integers, for data shifted by 2^63.</summary>
     /// <exception cref="FitsUnsupportedException">The values are no integers, or one of them is negative.</exception>
     public void ReadUnsigned(long first, Span<ulong> into)
     {
-        RequireRange(first, into.Length);
         Exactly.Require(IsInteger, Layout.Where);
-        for (var done = 0; done < into.Length; done += Piece)
-        {
-            var part = into[done..Math.Min(done + Piece, into.Length)];
-            using var view = View(first + done, part.Length);
-            Exactly.ToUnsigned(_scaling, Bitpix, view.Bytes, part, Layout.Where);
-        }
+        Read(first, into, (bytes, part) => Exactly.ToUnsigned(_scaling, Bitpix, bytes, part, Layout.Where));
     }
 
-    private Window View(long first, int count)
+    private delegate void Conversion<T>(ReadOnlySpan<byte> stored, Span<T> into);
+
+    private void Read<T>(long first, Span<T> into, Conversion<T> convert)
     {
+        RequireRange(first, into.Length);
         var size = BigEndian.SizeOf(Bitpix);
-        return _pixels.View(_start + first * size, count * size);
+        for (; !into.IsEmpty; into = into[Math.Min(Piece, into.Length)..], first += Piece)
+        {
+            var part = into[..Math.Min(Piece, into.Length)];
+            using var stored = _pixels.View(_start + first * size, part.Length * size);
+            convert(stored.Bytes, part);
+        }
     }
 
     private void RequireRange(long first, int count)

@@ -46,7 +46,7 @@ internal sealed class Gathering(FitsReadOptions options) : IDisposable
     private void MakeRoom()
     {
         if (_used < _buffer.Length) return;
-        if (_used >= options.MemoryLimit) Spill();
+        if (_used >= Math.Min(options.MemoryLimit, Array.MaxLength / 2)) Spill();
         else Grow();
     }
 

@@ -10,7 +10,8 @@ internal static class SourceOpener
 {
     public static ByteSource Open(string path, FitsReadOptions options)
     {
-        var handle = File.OpenHandle(path);
+        // Sharing everything spares a lock, which network disks are slow to give.
+        var handle = File.OpenHandle(path, FileMode.Open, FileAccess.Read, FileShare.ReadWrite | FileShare.Delete);
         var file = new HandleSource(path, handle, handle);
         return ExpandIfGzip(file.Length <= options.MemoryLimit ? ReadWhole(file) : file, options);
     }

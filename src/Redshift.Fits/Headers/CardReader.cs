@@ -14,6 +14,14 @@ internal static class CardReader
             : new Card(keyword, new CardValue(fields.Kind, Decode(fields.Value)), Decode(fields.Comment));
     }
 
+    /// <summary>The text alone, or null when the value is none: most cards that are read are asked for no more.</summary>
+    public static string? ReadText(ReadOnlySpan<byte> records)
+    {
+        var fields = RecordFields.Parse(records[..RecordFields.RecordLength]);
+        if (fields.Kind != CardValueKind.Text) return null;
+        return records.Length == RecordFields.RecordLength ? Unquote(fields.Value) : Read(records).Value.AsText();
+    }
+
     private static Card ReadText(string keyword, RecordFields fields, ReadOnlySpan<byte> more)
     {
         var text = new StringBuilder(Unquote(fields.Value));

@@ -51,8 +51,10 @@ internal sealed record HduLayout(Header Header, Bitpix Bitpix, long[] Axes, long
 
     private static long ReadDataLength(Header header, Bitpix bitpix, long[] axes, long start, FitsLocation where)
     {
-        var parameters = header.IntegerOr("PCOUNT", 0, 0, where);
-        var groups = header.IntegerOr("GCOUNT", 0, 1, where);
+        // In a primary header the two would speak of random groups, which are refused.
+        var isExtension = where.Hdu > 0;
+        var parameters = isExtension ? header.IntegerOr("PCOUNT", 0, 0, where) : 0;
+        var groups = isExtension ? header.IntegerOr("GCOUNT", 0, 1, where) : 1;
         try
         {
             var bytes = checked(Math.Abs((long)bitpix) / 8 * groups * (parameters + Elements(axes)));

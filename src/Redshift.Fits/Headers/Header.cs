@@ -39,7 +39,7 @@ public sealed class Header : IReadOnlyList<Card>
     public Card? Find(string keyword) => IndexOf(keyword) is >= 0 and var index ? this[index] : null;
 
     /// <summary>The string of a card, or null when it is absent or holds no string.</summary>
-    public string? GetString(string keyword) => Find(keyword)?.Value.AsText();
+    public string? GetString(string keyword) => IndexOf(keyword) is >= 0 and var index ? CardReader.ReadText(RecordsOf(index)) : null;
 
     /// <summary>The number of a card, also one in quotes or with a D exponent, or null when it is absent or holds no number.</summary>
     public double? GetDouble(string keyword)
