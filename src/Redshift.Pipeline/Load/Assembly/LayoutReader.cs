@@ -3,6 +3,7 @@ using Redshift.Pipeline.Load.Layouts;
 using Redshift.Pipeline.Load.Metadata;
 using Redshift.Pipeline.Load.SpectralAxis;
 using Redshift.Pipeline.Observations;
+using Redshift.Pipeline.Report;
 using Redshift.Pipeline.Settings;
 
 namespace Redshift.Pipeline.Load.Assembly;
@@ -32,7 +33,7 @@ internal sealed class LayoutReader
         var normalised = IsNormalised(layout);
         _builders = [.. layout.Spectra.Select(sources => new SpectrumBuilder(sources, _medium.Value, resolution, normalised))];
         _cautions = [.. Cautions()];
-        _notes = [.. ReadingNotes.Of(layout), new("medium", _medium.Value.ToString().ToLowerInvariant(), _medium.Why), new("frame", _frame.Value.ToString().ToLowerInvariant(), _frame.Why), .. ReadingNotes.OfResolution(layout, resolution)];
+        _notes = [.. ReadingNotes.Of(layout), new("medium", Words.Of(_medium.Value), _medium.Why), new("frame", Words.Of(_frame.Value), _frame.Why), .. ReadingNotes.OfResolution(layout, resolution)];
     }
 
     /// <summary>Reads one observation.</summary>

@@ -17,7 +17,7 @@ internal static class ReadingNotes
         if (spectrum.Noise is { } noise) yield return new(NameOf(noise.Role), noise.Values.Place, Reason(noise.Values));
         else yield return new("error", "none", "nothing in the file is one");
         if (spectrum.Mask is { } mask) yield return new("mask", mask.Place, mask.Why);
-        if (layout.Targets is { } targets) yield return new("targets", targets.Place, "a row for each spectrum");
+        if (layout is { Rows: > 1, Targets: { } targets }) yield return new("targets", targets.Place, "a row for each spectrum");
         if (layout.Spectra.Count > 1) yield return new("spectra of the object", string.Join(", ", layout.Spectra.Select(static one => one.Label)), "all of one observation");
         foreach (var note in layout.Notes) yield return note;
     }

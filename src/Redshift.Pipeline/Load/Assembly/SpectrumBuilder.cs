@@ -31,7 +31,22 @@ internal sealed class SpectrumBuilder(SpectrumSources sources, WavelengthMedium 
         var fwhm = Overridden ? null : sources.Width?.FwhmKmS(row, grid.Angstroms);
         return [.. grid.Runs
             .Select((run, i) => Build(run, Label(i, grid.Runs.Count), flux, inverseVariance, hasErrors, fwhm))
-            .Where(static spectrum => spectrum.InverseVariance.Count(static value => value > 0) >= WavelengthGrid.ShortestRun)];
+            .Where(IsUsable)];
+    }
+
+    // A flux that is the same everywhere is a fibre without light or an array that was never filled.
+    private static bool IsUsable(Spectrum spectrum)
+    {
+        var usable = 0;
+        double low = double.PositiveInfinity, high = double.NegativeInfinity;
+        for (var i = 0; i < spectrum.Count; i++)
+        {
+            if (spectrum.InverseVariance[i] <= 0) continue;
+            usable++;
+            low = Math.Min(low, spectrum.Flux[i]);
+            high = Math.Max(high, spectrum.Flux[i]);
+        }
+        return usable >= WavelengthGrid.ShortestRun && high > low;
     }
 
     private WavelengthGrid GridFor(int row, int count)
@@ -87,7 +102,7 @@ internal sealed class SpectrumBuilder(SpectrumSources sources, WavelengthMedium 
     {
         if (sources.Mask is not { } mask || mask.Length != count) return null;
         var good = mask.Good(row);
-        return good.Count(static value => value) * 10 >= count ? good : null;
+        return good.Length == count && good.Count(static value => value) * 10 >= count ? good : null;
     }
 
     private Spectrum Build(GridRun run, string label, double[] flux, double[] weights, bool hasErrors, float[]? fwhm)

@@ -24,7 +24,7 @@ internal static class BandNames
     }
 
     // "spectrum: background fit, weights variance" names the band before the colon and describes it behind.
-    private static string Head(string text) => text.Split([':', ',', '-'], 2)[0].Trim();
+    private static string Head(string text) => text.Split([":", ",", " - "], 2, StringSplitOptions.None)[0].Trim();
 
     private static List<string>? Listed(HeaderScope header, int count)
     {

@@ -40,19 +40,21 @@ internal static class BandReader
     public static UnitContent Unnamed(ImageFamily family, int length, int rows)
     {
         var arrays = Enumerable.Range(0, rows).Select(NumberArray (row) => Band(family, length, "", row, 1)).ToList();
-        if (LooksLikeWavelengths(arrays[0].Read(0))) return ByContent(family, arrays);
+        if (arrays.Any(static array => LooksLikeWavelengths(array.Read(0)))) return ByContent(family, arrays);
         if (rows != 2 || !LooksLikeErrors(arrays[1].Read(0), arrays[0].Read(0)))
             throw ImageReader.Unfit(family, "bands named by cards such as BANDIDn or ROWn, or a [[load]] rule");
         return new([new() { Wavelength = ImageReader.AxisOf(family, length), Flux = Labelled(arrays[0], family), Noise = (Role.Error, arrays[1]) }], 1);
     }
 
-    /// <summary>Arrays without names whose first is the wavelength.</summary>
-    public static UnitContent ByContent(ImageFamily family, IReadOnlyList<NumberArray> arrays)
+    /// <summary>Arrays without names: one that rises or falls all the way is the wavelength, the others are flux and error in this order.</summary>
+    public static UnitContent ByContent(ImageFamily family, IReadOnlyList<NumberArray> all)
     {
-        if (arrays.Count < 2 || !LooksLikeWavelengths(arrays[0].Read(0)))
-            throw ImageReader.Unfit(family, "wavelengths in the first row or column, or a [[load]] rule");
+        var wavelengths = all.Where(static array => LooksLikeWavelengths(array.Read(0))).ToList();
+        if (wavelengths.Count != 1 || all.Count < 2)
+            throw ImageReader.Unfit(family, "one row or column of wavelengths, or a [[load]] rule");
+        NumberArray[] arrays = [wavelengths[0], .. all.Except(wavelengths)];
         var unit = family.Header.Text("XUNITS", "XUNIT", "WAVEUNIT", "CUNIT1") ?? "";
-        var isError = arrays.Count > 2 && LooksLikeErrors(arrays[2].Read(0), arrays[1].Read(0));
+        var isError = arrays.Length > 2 && LooksLikeErrors(arrays[2].Read(0), arrays[1].Read(0));
         return new([new()
         {
             Wavelength = new ArrayWavelengths(arrays[0], SpectralAxis.SpectralUnit.Parse(unit)),
@@ -60,6 +62,14 @@ internal static class BandReader
             Noise = isError ? (Role.Error, arrays[2]) : null,
         }], 1)
         { ListsWavelengths = true };
+    }
+
+    /// <summary>The error in a second image without a name, if its content can be nothing else.</summary>
+    public static (Role, NumberArray)? UnnamedError(ImageFamily family, NumberArray flux)
+    {
+        if (family.UnnamedTwin() is not { } twin) return null;
+        var array = new ImageArray(twin, flux.Length) { Place = $"HDU {twin.Index}", Label = new("") };
+        return LooksLikeErrors(array.Read(0), flux.Read(0)) ? (Role.Error, array) : null;
     }
 
     /// <summary>Orders of one object, each with rows for wavelength, flux and error.</summary>
@@ -80,8 +90,8 @@ internal static class BandReader
 
     private static bool IsMonotonic(double[] values)
     {
+        if (!double.IsFinite(values[^1] - values[0]) || values[^1] == values[0]) return false;
         var sign = Math.Sign(values[^1] - values[0]);
-        if (sign == 0) return false;
         var last = double.NaN;
         foreach (var value in values)
         {

@@ -55,11 +55,14 @@ internal sealed class ImageFamily
         return new(name, header.Text("BUNIT", "YUNITS", "FLUXUNIT", "UNITS") ?? "");
     }
 
-    /// <summary>The sibling of a role whose rows match the flux.</summary>
-    public ImageHdu? Sibling(Role role, params ReadOnlySpan<int> lengths)
+    /// <summary>The only other image of the same shape, where it has no name.</summary>
+    public ImageHdu? UnnamedTwin() =>
+        File.Hdus.OfType<ImageHdu>().Where(hdu => hdu != Flux && hdu.Shape.SequenceEqual(Flux.Shape)).ToList() is [var only] && LabelOf(only).Name.Length == 0 ? only : null;
+
+    private ImageHdu? Sibling(Role role, int length)
     {
         foreach (var (hdu, _, itsRole) in _siblings)
-            if (itsRole == role && hdu.Shape[0] == lengths[0]) return hdu;
+            if (itsRole == role && hdu.Shape[0] == length) return hdu;
         return null;
     }
 

@@ -12,6 +12,9 @@ internal static class ImageReader
 {
     private const int FewestPixels = 16;
 
+    // Images with no more rows than this are bands of one spectrum or a few spectra, but no frame of a slit.
+    private const int MostBands = 8;
+
     /// <summary>Reads the layout of an image and its siblings.</summary>
     /// <exception cref="LoadException">The structure is ambiguous or no spectrum.</exception>
     public static UnitContent Read(ImageFamily family)
@@ -32,11 +35,11 @@ internal static class ImageReader
 
     private static UnitContent TwoAxes(ImageFamily family, int length, int rows)
     {
-        if (length <= 8 && rows >= 100) return SidewaysTable(family, length);
+        if (length <= MostBands && rows >= 100) return SidewaysTable(family, length);
         if (BandNames.Read(family.Header, rows) is { } names) return BandReader.Named(family, length, names);
         if (ApertureAxis.ReadAll(family.Header) is { Count: > 0 } apertures && apertures.Count >= rows) return ApertureReader.Read(family, length, rows, 1, apertures);
         if (IsStack(family, length, rows)) return Stack(family, length, rows);
-        return rows <= 8 ? BandReader.Unnamed(family, length, rows) : throw Unfit(family, "a stack with a table of its rows, named bands, or a [[load]] rule");
+        return rows <= MostBands ? BandReader.Unnamed(family, length, rows) : throw Unfit(family, "a stack with a table of its rows, named bands, or a [[load]] rule");
     }
 
     private static UnitContent ThreeAxes(ImageFamily family, int length, int apertures, int bands)
@@ -58,8 +61,12 @@ internal static class ImageReader
         var type = family.Header.Text("CTYPE2")?.ToUpperInvariant() ?? "";
         return apertureCards
             || type.Contains("FIB", StringComparison.Ordinal) || type.Contains("SPEC", StringComparison.Ordinal) || type.Contains("APER", StringComparison.Ordinal)
-            || (family.Sibling(Role.Wavelength, length) is not null && family.Array(Role.InverseVariance, length, rows) is not null);
+            || HasNoiseOfItsRows(family, length, rows);
     }
+
+    // Two-dimensional frames come with errors too, but hardly with inverse variances, and never with a handful of rows.
+    private static bool HasNoiseOfItsRows(ImageFamily family, int length, int rows) =>
+        NoiseOf(family, length, rows) is { } noise && noise.Values.Rows == rows && (noise.Role == Role.InverseVariance || rows <= MostBands);
 
     private static UnitContent Stack(ImageFamily family, int length, int rows)
     {
@@ -70,7 +77,7 @@ internal static class ImageReader
         {
             Wavelength = listed is null ? AxisOf(family, length) : new ArrayWavelengths(listed),
             Flux = flux,
-            Noise = NoiseOf(family, length, rows),
+            Noise = NoiseOf(family, length, rows) ?? (rows == 1 ? BandReader.UnnamedError(family, flux) : null),
             Mask = family.Array(Role.Mask, length, rows) is { } mask && mask.Length == length ? new(mask) : null,
             Width = WidthOf(family, length, rows),
         };
@@ -79,7 +86,7 @@ internal static class ImageReader
     }
 
     /// <summary>Noise from a sibling image.</summary>
-    public static (Role, NumberArray)? NoiseOf(ImageFamily family, int length, int rows)
+    public static (Role Role, NumberArray Values)? NoiseOf(ImageFamily family, int length, int rows)
     {
         foreach (var role in (ReadOnlySpan<Role>)[Role.InverseVariance, Role.Error, Role.Variance])
             if (family.Array(role, length, rows) is { } array && array.Length == length) return (role, array);

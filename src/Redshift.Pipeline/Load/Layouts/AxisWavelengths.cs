@@ -23,7 +23,7 @@ internal sealed class AxisWavelengths(PixelAxis axis, int hdu) : WavelengthSourc
     public override bool IsShared => true;
 
     /// <inheritdoc/>
-    public override bool IsUnitAssumed => axis.Why == LegacyAxis.GuessedWhy;
+    public override bool IsUnitAssumed => axis.Why == LegacyAxis.GuessedWhy && axis.Unit != SpectralUnit.Angstrom.ToString();
 
     /// <inheritdoc/>
     public override WavelengthSource In(SpectralUnit unit, HeaderScope header) => AxisReader.LinearPart(header, 1) is { } pixels

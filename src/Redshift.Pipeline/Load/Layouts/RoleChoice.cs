@@ -53,7 +53,7 @@ internal sealed class RoleChoice
     public WidthSource? WidthOf(NumberArray flux)
     {
         foreach (var role in (ReadOnlySpan<Role>)[Role.Fwhm, Role.Sigma, Role.Resolution])
-            if (Belonging(role, flux) is { } array && new WidthSource(array, role) is var width && width.Fits(flux.Length)) return width;
+            if (Belonging(role, flux) is { } array && new WidthSource(array, role) is var width && width.Fits(flux.Length) && width.IsSpectral) return width;
         return null;
     }
 

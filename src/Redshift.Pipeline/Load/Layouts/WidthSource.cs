@@ -18,6 +18,9 @@ internal sealed class WidthSource(NumberArray values, Role role)
     /// <summary>The widths of one row of many.</summary>
     public WidthSource AtRow(int row) => new(new FixedRow(values, row), role);
 
+    /// <summary>Whether the width is one along the spectrum: a FWHM without a unit may be that of the slit profile.</summary>
+    public bool IsSpectral => role != Role.Fwhm || values.Label.Unit.Length > 0;
+
     /// <summary>Whether it can describe spectra of this length.</summary>
     public bool Fits(int count) => values.Length == count || (role == Role.Resolution && values.Length > count && values.Length % count == 0);
 
@@ -27,6 +30,7 @@ internal sealed class WidthSource(NumberArray values, Role role)
     public float[]? FwhmKmS(int row, double[] angstroms)
     {
         var raw = values.Read(row);
+        if (raw.Length < angstroms.Length) return null;
         var widths = raw.Length > angstroms.Length ? ResolutionMatrix.FwhmPixels(raw, angstroms.Length) : raw;
         var isMatrix = widths != raw;
         var fwhm = new float[angstroms.Length];

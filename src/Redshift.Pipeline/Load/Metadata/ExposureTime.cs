@@ -57,7 +57,7 @@ internal static class ExposureTime
         if (text.Length == 8 && text[2] == '/' && DateTime.TryParseExact(text, "dd/MM/yy", CultureInfo.InvariantCulture, DateTimeStyles.None, out _))
             return DateTime.ParseExact(text[..6] + "19" + text[6..], "dd/MM/yyyy", CultureInfo.InvariantCulture, DateTimeStyles.AssumeUniversal | DateTimeStyles.AdjustToUniversal);
         var (day, time) = text.IndexOfAny(['T', ' ']) is > 0 and var at ? (text[..at], text[(at + 1)..]) : (text, "");
-        if (!DateTime.TryParseExact(day.Replace('/', '-'), ["yyyy-M-d"], CultureInfo.InvariantCulture, DateTimeStyles.AssumeUniversal | DateTimeStyles.AdjustToUniversal, out var date)) return null;
+        if (!DateTime.TryParseExact(day.Replace('/', '-'), ["yyyy-M-d"], CultureInfo.InvariantCulture, DateTimeStyles.AssumeUniversal | DateTimeStyles.AdjustToUniversal, out var date) || date.Year is < 1800 or > 2200) return null;
         return date + (TimeOfDay(time) ?? TimeSpan.Zero);
     }
 

@@ -54,6 +54,7 @@ internal static partial class FrameFinder
     /// <summary>What a line of free text says of the frame.</summary>
     public static VelocityFrame? FromText(string text)
     {
+        if (!text.Contains("centric", StringComparison.OrdinalIgnoreCase) && !text.Contains("center", StringComparison.OrdinalIgnoreCase) && !text.Contains("centre", StringComparison.OrdinalIgnoreCase)) return null;
         if (AppliedPattern().Match(text) is not { Success: true } match || DeniedPattern().IsMatch(text)) return null;
         return match.Value.Contains("helio", StringComparison.OrdinalIgnoreCase) ? VelocityFrame.Heliocentric : VelocityFrame.Barycentric;
     }

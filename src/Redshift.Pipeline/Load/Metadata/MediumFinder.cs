@@ -50,9 +50,7 @@ internal static partial class MediumFinder
         foreach (var card in cards)
         {
             var text = card.Value.Kind == CardValueKind.Text ? card.Value.Literal + " " + card.Comment : card.Comment;
-            if (text.Length < 6) continue;
-            var (vacuum, air) = (VacuumPattern().IsMatch(text), AirPattern().IsMatch(text));
-            if (vacuum != air) return (vacuum ? WavelengthMedium.Vacuum : WavelengthMedium.Air, $"card {card.Keyword}: {text.Trim()}");
+            if (FromText(text) is { } medium) return (medium, $"card {card.Keyword}: {text.Trim()}");
         }
         return null;
     }
@@ -60,7 +58,8 @@ internal static partial class MediumFinder
     /// <summary>What a line of free text says of the medium.</summary>
     public static WavelengthMedium? FromText(string text)
     {
-        var (vacuum, air) = (VacuumPattern().IsMatch(text), AirPattern().IsMatch(text));
+        var vacuum = text.Contains("vac", StringComparison.OrdinalIgnoreCase) && VacuumPattern().IsMatch(text);
+        var air = text.Contains("air", StringComparison.OrdinalIgnoreCase) && AirPattern().IsMatch(text);
         return vacuum == air ? null : vacuum ? WavelengthMedium.Vacuum : WavelengthMedium.Air;
     }
 

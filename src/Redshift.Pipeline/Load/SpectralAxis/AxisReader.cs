@@ -77,7 +77,7 @@ internal static class AxisReader
             };
         var scaled = new LinearPixels(pixels.ReferencePixel, unit.ToBase(pixels.ReferenceValue), unit.ToBase(pixels.Increment));
         var why = $"CTYPE{axis} {header.Text(HeaderScope.Indexed("CTYPE", axis))}, unit from {where}";
-        if (code is "GRI" or "GRA") return Grism(header, axis, code, scaled, why);
+        if (code is "GRI" or "GRA") return Grism(header, axis, variable, code, scaled, why);
         var sampled = Sampled(variable, code, axis);
         var needsRest = SpectralScale.NeedsRest(variable) || SpectralScale.NeedsRest(sampled);
         return new WcsAxis(variable, sampled, code == "LOG", scaled, needsRest ? RestWavelength(header, variable, axis) : 1) { Why = why };
@@ -148,11 +148,12 @@ internal static class AxisReader
         throw new LoadException($"keyword CTYPE{axis}", $"{variable.ToString().ToUpperInvariant()} without a rest wavelength", "RESTWAV or RESTFRQ");
     }
 
-    private static GrismAxis Grism(HeaderScope header, int axis, string code, LinearPixels pixels, string why)
+    private static GrismAxis Grism(HeaderScope header, int axis, SpectralVariable variable, string code, LinearPixels pixels, string why)
     {
-        double[] defaults = [0, 0, 0, 1, 0, 0, 0];
-        for (var i = 0; i < defaults.Length; i++)
-            defaults[i] = header.Number(string.Create(CultureInfo.InvariantCulture, $"PV{axis}_{i}")) ?? defaults[i];
-        return new(code == "GRA" ? WavelengthMedium.Air : WavelengthMedium.Vacuum, pixels, defaults) { Why = why };
+        double[] parameters = [0, 0, 0, 1, 0, 0, 0];
+        for (var i = 0; i < parameters.Length; i++)
+            parameters[i] = header.Number(string.Create(CultureInfo.InvariantCulture, $"PV{axis}_{i}")) ?? parameters[i];
+        var rest = SpectralScale.NeedsRest(variable) ? RestWavelength(header, variable, axis) : 1;
+        return new(variable, code == "GRA", pixels, rest, parameters) { Why = why };
     }
 }

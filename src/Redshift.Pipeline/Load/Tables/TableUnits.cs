@@ -74,11 +74,13 @@ internal static class TableUnits
 
     private static UnitContent Arrange(TableHdu table, SpectrumSources sources, NumberArray flux)
     {
-        if (flux.Rows == 1) return new([sources], 1) { Targets = flux is CellArray ? new TargetTable(table) : null };
+        if (flux.Rows == 1) return new([sources], 1) { Targets = flux is CellArray ? TargetsOf(table) : null };
         if (OrderColumns.Select(table.Find).FirstOrDefault(static column => column is not null) is { } order && Distinct(order, flux.Rows))
             return new([.. Enumerable.Range(0, flux.Rows).Select(row => sources.AtRow(row, OrderLabel(order, row)))], 1);
-        return new([sources], flux.Rows) { Targets = new TargetTable(table) };
+        return new([sources], flux.Rows) { Targets = TargetsOf(table) };
     }
+
+    private static TargetTable? TargetsOf(TableHdu table) => new TargetTable(table) is { TellsTargets: true } targets ? targets : null;
 
     private static bool Distinct(TableColumn order, int rows) =>
         rows <= 1000 && Enumerable.Range(0, rows).Select(row => OrderLabel(order, row)).Distinct().Count() == rows;
