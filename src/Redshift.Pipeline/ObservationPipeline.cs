@@ -1,3 +1,8 @@
+using Redshift.Physics.Units;
+using Redshift.Pipeline.Match;
+using Redshift.Pipeline.Match.Fit;
+using Redshift.Pipeline.Match.Posterior;
+using Redshift.Pipeline.Normalize;
 using Redshift.Pipeline.Observations;
 using Redshift.Pipeline.Results;
 using Redshift.Pipeline.Settings;
@@ -7,12 +12,95 @@ namespace Redshift.Pipeline;
 /// <summary>The stages between reading and reporting: normalize, detect, match. One instance serves one worker thread.</summary>
 public sealed class ObservationPipeline(PipelineSettings settings)
 {
+    private readonly Matcher _matcher = new(settings.Match);
+
     /// <summary>Analyses one observation; the result depends on nothing but the observation and the settings.</summary>
     /// <param name="observation">The observation as read.</param>
     /// <returns>The answer, or the verdict that there is nothing.</returns>
     public ObservationResult Analyze(Observation observation)
     {
-        _ = settings;
-        return new() { Observation = observation, Verdict = Verdict.Nothing, Kind = ObjectKind.Unknown };
+        var normalized = Normalizer.Normalize(observation);
+        var result = Describe(normalized);
+        return normalized.Spectra.Count > 0 && _matcher.Match(normalized) is { } match ? Answer(result, normalized, match) : result;
+    }
+
+    private static ObservationResult Describe(NormalizedObservation normalized) => new()
+    {
+        Observation = normalized.Observation,
+        Verdict = Verdict.Nothing,
+        Kind = ObjectKind.Unknown,
+        SnrPixel = normalized.SnrPixel,
+        SnrAngstrom = normalized.SnrAngstrom,
+        NoiseScale = normalized.NoiseScale,
+        Resolution = normalized.Resolution,
+        ResolutionFrom = normalized.Spectra.Count > 0 ? normalized.Spectra[0].Original.ResolutionFrom : ResolutionSource.Estimate,
+        Cautions = [.. normalized.Observation.Cautions, .. NoiseCautions(normalized)],
+    };
+
+    private static IEnumerable<string> NoiseCautions(NormalizedObservation normalized)
+    {
+        if (normalized.Spectra.Any(s => !s.Original.HasErrors)) yield return "noise-from-residuals";
+        if (normalized.Spectra.Any(s => s.Noise.Scale != 1)) yield return "errors-rescaled";
+        if (normalized.Spectra.Any(s => s.Original.FwhmKmS is null)) yield return "resolution-estimated";
+    }
+
+    private static ObservationResult Answer(ObservationResult result, NormalizedObservation normalized, MatchResult match)
+    {
+        var decision = match.Decision;
+        var confidence = Calibration.Confidence(decision);
+        var verdict = Calibration.Verdict(confidence, decision.LnOddsFeatures);
+        result = result with { Verdict = verdict, Confidence = confidence, LnOdds = decision.LnOdds, Candidates = decision.Candidates };
+        if (verdict == Verdict.Nothing) return result;
+        var fit = decision.Answer.Fit;
+        var z = Math.Exp(fit.LnShift) - 1;
+        return result with
+        {
+            Kind = fit.Model.Kind,
+            KindConfidence = confidence * decision.KindShare,
+            Z = z,
+            ZFile = z,
+            ZErr = RedshiftError.Of(fit) * (1 + z),
+            SpectralType = fit.Model.Template?.SpectralType ?? "",
+            Next = decision.Next,
+            NextConfidence = decision.Next is { } next ? (1 - confidence) * next.Probability / Math.Max(1e-12, decision.Candidates.Sum(c => c.Probability) - decision.Candidates[0].Probability) : null,
+            Curves = Curves(normalized, fit, match.Error),
+            Cautions = [.. result.Cautions, .. AnswerCautions(confidence, decision)],
+        };
+    }
+
+    private static IEnumerable<string> AnswerCautions(double confidence, Decision decision)
+    {
+        if (confidence < 0.99 && decision.LnOdds < 3) yield return "rival-redshift";
+    }
+
+    /// <summary>The answer's model at the native pixels of every spectrum.</summary>
+    private static List<ModelCurve> Curves(NormalizedObservation normalized, Refined answer, ModelError error)
+    {
+        var pixels = FitPixels.Build([.. normalized.Spectra.Select(PixelRun.Native)], error, Match.Search.Cells.Step);
+        var fit = new ModelFit(pixels);
+        fit.LnEvidence(answer.Model, answer.LnShift);
+        var (model, _) = fit.Curves();
+        var curves = new List<ModelCurve>();
+        for (var s = 0; s < normalized.Spectra.Count; s++)
+            curves.Add(Curve(normalized.Spectra[s], model.AsSpan(pixels.Starts[s], pixels.Starts[s + 1] - pixels.Starts[s]), normalized.FluxScale));
+        return curves;
+    }
+
+    private static ModelCurve Curve(NormalizedSpectrum spectrum, ReadOnlySpan<float> model, double scale)
+    {
+        var count = spectrum.Original.Count;
+        double[] continuum = new double[count], full = new double[count], sigma = new double[count];
+        Array.Fill(sigma, double.PositiveInfinity);
+        var ln = spectrum.LnWavelength;
+        for (int i = 0, near = 0; i < count; i++)
+        {
+            var x = Math.Log(spectrum.Original.Wavelength[i]);
+            while (near + 1 < ln.Length && Math.Abs(ln[near + 1] - x) <= Math.Abs(ln[near] - x)) near++;
+            continuum[i] = spectrum.Continuum[near] * scale;
+            full[i] = model[near] * scale;
+            if (spectrum.Original.InverseVariance[i] > 0 && spectrum.Weight[near] > 0) sigma[i] = scale / Math.Sqrt(spectrum.Weight[near]);
+        }
+
+        return new(continuum, full, sigma);
     }
 }

@@ -39,7 +39,7 @@ internal static partial class UnitText
         if (header.Find(keyword)?.Comment.Trim() is not { Length: > 0 } comment) return null;
         var where = $"comment of {keyword}";
         if (SpectralUnit.Parse(comment) is { } whole) return (whole, where);
-        foreach (Match word in WordPattern().Matches(comment))
+        foreach (System.Text.RegularExpressions.Match word in WordPattern().Matches(comment))
             if (SpectralUnit.Parse(word.Value) is { Quantity: SpectralQuantity.Wavelength } unit) return (unit, where);
         return null;
     }

@@ -1,0 +1,59 @@
+using Redshift.Pipeline.Normalize;
+
+namespace Redshift.Pipeline.Match.Fit;
+
+/// <summary>
+/// How wrong models are, as a share of the continuum, along an observation: a stated least value, or what the best model leaves over
+/// and noise cannot explain. Stretches where no model is good (ultraviolet, telluric bands, bad calibration) thus count for less,
+/// for all kinds alike.
+/// </summary>
+internal sealed class ModelError
+{
+    /// <summary>Computed spectra differ from real ones by at least this share, in cells of the search grid.</summary>
+    public const double Least = 0.03;
+
+    private const double Most = 0.5;
+    private const double Block = 0.1;
+
+    private readonly double _start;
+    private readonly double[] _shares;
+
+    private ModelError(double start, double[] shares) => (_start, _shares) = (start, shares);
+
+    /// <summary>The stated least value everywhere.</summary>
+    public static ModelError Uniform { get; } = new(0, [Least]);
+
+    /// <summary>The greatest share anywhere.</summary>
+    public double Greatest => _shares.Max();
+
+    /// <summary>Share of the continuum at a wavelength.</summary>
+    public double Share(double lnWavelength)
+    {
+        var x = Math.Clamp((lnWavelength - _start) / Block - 0.5, 0, _shares.Length - 1);
+        var b = Math.Min((int)x, Math.Max(0, _shares.Length - 2));
+        return _shares.Length == 1 ? _shares[0] : _shares[b] + (x - b) * (_shares[b + 1] - _shares[b]);
+    }
+
+    /// <summary>Solves, block by block, for the share that makes the median squared residual what noise and model error together predict.</summary>
+    /// <param name="pixels">The pixels as fitted, in cells of the search grid.</param>
+    /// <param name="runs">The same pixels with their noise alone.</param>
+    /// <param name="model">The best model.</param>
+    public static ModelError Measure(FitPixels pixels, IReadOnlyList<PixelRun> runs, float[] model)
+    {
+        var start = runs.Min(r => r.LnWavelength[0]);
+        var blocks = Math.Max(1, (int)Math.Ceiling((runs.Max(r => r.LnWavelength[^1]) - start) / Block));
+        var excess = Enumerable.Range(0, blocks).Select(_ => new List<double>()).ToArray();
+        var at = 0;
+        foreach (var run in runs)
+            for (var i = 0; i < run.Flux.Length; i++, at++)
+            {
+                if (run.Weight[i] <= 0) continue;
+                var level = Math.Max(Math.Abs(run.Continuum[i]), run.Baseline[i]);
+                var residual = pixels.Flux[at] - model[at];
+                // The median of χ²₁ is 0.455: what is above that share of the noise is model error.
+                excess[Math.Min(blocks - 1, (int)((run.LnWavelength[i] - start) / Block))].Add((residual * residual - 0.455 / run.Weight[i]) / (0.455 * level * level));
+            }
+
+        return new(start, Array.ConvertAll(excess, e => Math.Clamp(Math.Sqrt(Math.Max(0, NoiseCheck.Median([.. e]))), Least, Most)));
+    }
+}

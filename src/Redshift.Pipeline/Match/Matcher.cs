@@ -1,0 +1,77 @@
+using Redshift.Pipeline.Match.Fit;
+using Redshift.Pipeline.Match.Posterior;
+using Redshift.Pipeline.Match.Search;
+using Redshift.Pipeline.Normalize;
+using Redshift.Pipeline.Settings;
+
+namespace Redshift.Pipeline.Match;
+
+/// <summary>The match stage: search over all redshifts, exact fits of the leaders, posterior.</summary>
+internal sealed class Matcher(MatchSettings settings)
+{
+    /// <summary>Where models turn out to be worse than this share, the search is repeated knowing it.</summary>
+    private const double SearchAgain = 0.06;
+
+    /// <summary>A peak so far below the best, in units of the best's own ln evidence and in ln, is not climbed.</summary>
+    private const double HopelessShare = 0.35;
+    private const double Hopeless = 30;
+
+    /// <summary>Peaks of each kind that are climbed however far below.</summary>
+    private const int AlwaysClimbed = 2;
+
+    /// <summary>Matches an observation with at least one spectrum.</summary>
+    /// <returns>The decision with the fit it rests on, or null where nothing can be matched.</returns>
+    public MatchResult? Match(NormalizedObservation observation)
+    {
+        var runs = observation.Spectra.Select(s => PixelRun.Binned(s, Cells.Step)).ToList();
+        var peaks = Search(observation, ModelError.Uniform);
+        if (peaks.Count == 0) return null;
+        var error = Learn(peaks, runs);
+        if (error.Greatest > SearchAgain) peaks.AddRange(Search(observation, error));
+        var pixels = FitPixels.Build(runs, error, Cells.Step);
+        var fit = new ModelFit(pixels);
+        var refined = Climb(fit, peaks);
+        var best = refined.MaxBy(r => r.LnEvidence)!;
+        fit.LnEvidence(best.Model, best.LnShift);
+        var excess = ResidualExcess.Measure(pixels, fit.Curves().Model);
+        var hypotheses = refined.Select(r => r.Soften(excess))
+            .Select(r => new Hypothesis(r, r.LnVolume + RedshiftPrior.LnDensity(r.Model.Kind, r.LnShift, settings)))
+            .OrderByDescending(h => h.LnWeight).ToList();
+        return new(PosteriorSum.Decide(hypotheses, observation.Resolution), hypotheses, error, excess);
+    }
+
+    private List<Peak> Search(NormalizedObservation observation, ModelError error) =>
+        new GridSearch(Cells.Build(observation.Spectra, error), settings).Peaks();
+
+    /// <summary>Measures the model error on the best model of a first round.</summary>
+    private static ModelError Learn(List<Peak> peaks, List<PixelRun> runs)
+    {
+        var pixels = FitPixels.Build(runs, ModelError.Uniform, Cells.Step);
+        var fit = new ModelFit(pixels);
+        var best = peaks.MaxBy(p => fit.LnEvidence(p.Model, p.LnShift));
+        var climbed = Refinement.Climb(fit, best.Model, best.LnShift, 0.5 * Cells.Step);
+        fit.LnEvidence(climbed.Model, climbed.LnShift);
+        return ModelError.Measure(pixels, runs, fit.Curves().Model);
+    }
+
+    private static List<Refined> Climb(ModelFit fit, List<Peak> peaks)
+    {
+        var first = peaks.ConvertAll(p => (Peak: p, LnEvidence: fit.LnEvidence(p.Model, p.LnShift)));
+        var best = first.Max(f => f.LnEvidence);
+        var floor = best - Hopeless - HopelessShare * Math.Abs(best);
+        var leaders = first.GroupBy(f => f.Peak.Model.Kind).SelectMany(g => g.OrderByDescending(f => f.LnEvidence).Take(AlwaysClimbed)).ToHashSet();
+        return [.. first.Where(f => f.LnEvidence > floor || leaders.Contains(f)).Select(f => Refinement.Climb(fit, f.Peak.Model, f.Peak.LnShift, 0.5 * Cells.Step))];
+    }
+}
+
+/// <summary>What matching gives.</summary>
+/// <param name="Decision">The answer and its rivals.</param>
+/// <param name="Hypotheses">All refined peaks by weight.</param>
+/// <param name="Error">How wrong models are, along the spectrum.</param>
+/// <param name="Excess">Factor by which ln likelihoods were softened.</param>
+internal sealed record MatchResult(Decision Decision, IReadOnlyList<Hypothesis> Hypotheses, ModelError Error, double Excess);
+
+/// <summary>A refined peak with its weight in the posterior.</summary>
+/// <param name="Fit">The peak.</param>
+/// <param name="LnWeight">ln of prior times likelihood, integrated over the peak, over that of a smooth spectrum.</param>
+internal sealed record Hypothesis(Refined Fit, double LnWeight);

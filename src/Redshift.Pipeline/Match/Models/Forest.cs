@@ -1,0 +1,36 @@
+namespace Redshift.Pipeline.Match.Models;
+
+/// <summary>Mean transmission of the intergalactic medium shortward of Lyman alpha.</summary>
+internal static class Forest
+{
+    /// <summary>ln of the wavelength of Lyman alpha in Å.</summary>
+    public const double LnLymanAlpha = 7.1030456;
+    private const double LnLymanBeta = 6.9331568;
+    private const double LnLymanLimit = 6.8153695;
+
+    /// <summary>
+    /// Transmission at an observed wavelength: τ = 0.00247 (1+z)^3.9 and more steeply beyond z = 5.5, z being that of the absorbing gas
+    /// (Lyα optical depths of Becker et al. 2013, MNRAS 430, 2067, and Bosman et al. 2018; rounded, from memory).
+    /// Lyman beta adds a third of it; below the Lyman limit nearly nothing passes at z &gt; 3.
+    /// </summary>
+    /// <param name="lnObserved">ln of the observed vacuum wavelength in Å.</param>
+    /// <param name="lnShift">ln(1+z) of the object.</param>
+    public static double Transmission(double lnObserved, double lnShift)
+    {
+        var lnRest = lnObserved - lnShift;
+        if (lnRest >= LnLymanAlpha) return 1;
+        var tau = OpticalDepth(lnObserved - LnLymanAlpha);
+        if (lnRest < LnLymanBeta) tau += 0.35 * OpticalDepth(lnObserved - LnLymanBeta);
+        if (lnRest < LnLymanLimit) tau += Math.Max(0, 3 * (Math.Exp(lnShift) - 1.8));
+        return Math.Exp(-tau);
+    }
+
+    /// <summary>
+    /// Scatter of the transmission about its mean in pixels of some 100 km/s: the forest is a random process, between dark and clear.
+    /// A two-state process has √(F(1−F)); real forests, with the instrument's smoothing, have about half of that (common practice).
+    /// </summary>
+    public static double Scatter(double transmission) => 0.45 * Math.Sqrt(Math.Max(0, transmission * (1 - transmission)));
+
+    private static double OpticalDepth(double lnAbsorber) =>
+        lnAbsorber <= 0 ? 0 : 0.00247 * Math.Exp(3.9 * lnAbsorber) * (lnAbsorber > 1.87 ? Math.Exp(7 * (lnAbsorber - 1.87)) : 1);
+}

@@ -1,0 +1,156 @@
+using Redshift.Physics.Stars;
+using Redshift.Pipeline.Match.Fit;
+using Redshift.Pipeline.Results;
+
+namespace Redshift.Pipeline.Match.Models;
+
+/// <summary>All models of all kinds, computed once a process and shared.</summary>
+internal sealed class ModelLibrary
+{
+    private static readonly Lazy<ModelLibrary> Lazy = new(() => new ModelLibrary());
+
+    private readonly LogWavelengthGrid _grid = new(TemplateGrid.LnStart, TemplateGrid.Step, TemplateGrid.Count);
+    private readonly Dictionary<StellarParameters, StellarSpectrum> _stars = [];
+
+    private ModelLibrary()
+    {
+        Stars = WithEqualShares(WithPartners(StellarModel.StandardGrid.Select(p => (p, Star(p))).ToList()));
+        var mixes = StellarMix.Ages.ToDictionary(m => m.Name, m => m.Compute(StarFlux));
+        Galaxies = WithEqualShares(WithPartners([.. GalaxyTemplates(mixes).Select(t => Galaxy(t.Template, t.GreatestZ))]));
+        Quasars = WithEqualShares(QuasarTemplates(mixes).SelectMany(t => Widths.Select(w => Quasar(t, w))).ToList());
+        Nebulae = WithEqualShares([new FitModel { Kind = ObjectKind.Nebula, Name = "ionised gas", Groups = NebulaLines.All, NarrowKmS = 15 }]);
+    }
+
+    public static ModelLibrary Instance => Lazy.Value;
+
+    public IReadOnlyList<FitModel> Stars { get; }
+
+    public IReadOnlyList<FitModel> Galaxies { get; }
+
+    public IReadOnlyList<FitModel> Quasars { get; }
+
+    public IReadOnlyList<FitModel> Nebulae { get; }
+
+    /// <summary>σ of broad lines, km/s.</summary>
+    public static IReadOnlyList<double> Widths { get; } = [800, 1700, 3500];
+
+    private FitModel Star(StellarParameters parameters)
+    {
+        var star = Compute(parameters);
+        var name = $"{star.SpectralType} {parameters.TemperatureK:F0} K log g {parameters.LogGravity:F1} [M/H] {parameters.Metallicity:F1}";
+        return new() { Kind = ObjectKind.Star, Name = name, Template = new Template(name, ObjectKind.Star, StarFlux(parameters), star.SpectralType) };
+    }
+
+    /// <summary>A star's partners: the next hotter and cooler of its kind and gravity, and itself spun up, for hot stars rotate.</summary>
+    private static IEnumerable<FitModel> WithPartners(List<(StellarParameters Parameters, FitModel Model)> stars)
+    {
+        foreach (var (parameters, model) in stars)
+        {
+            var peers = stars.FindAll(s => s.Parameters.Variant == parameters.Variant && s.Parameters.TemperatureK != parameters.TemperatureK
+                && Math.Abs(s.Parameters.LogGravity - parameters.LogGravity) < 0.8 && Math.Abs(s.Parameters.Metallicity - parameters.Metallicity) < 0.3);
+            var hotter = peers.FindAll(s => s.Parameters.TemperatureK > parameters.TemperatureK).OrderBy(s => s.Parameters.TemperatureK).FirstOrDefault().Model;
+            var cooler = peers.FindAll(s => s.Parameters.TemperatureK < parameters.TemperatureK).OrderByDescending(s => s.Parameters.TemperatureK).FirstOrDefault().Model;
+            var partners = new List<Template>();
+            if (hotter is not null) partners.Add(hotter.Template!);
+            if (cooler is not null) partners.Add(cooler.Template!);
+            if (parameters.TemperatureK > 6500 && parameters.LogGravity < 5) partners.Add(model.Template!.Spun(120));
+            yield return model with { Partners = partners };
+        }
+    }
+
+    /// <summary>Populations mix with an old, a middle and a young one; young stars behind gas with thicker and thinner gas.</summary>
+    private static List<FitModel> WithPartners(List<FitModel> galaxies)
+    {
+        string[] plain = ["12 Gyr", "1.5 Gyr", "0.03 Gyr"], gas = ["0.005 Gyr behind neutral gas", "0.03 Gyr behind thin gas", "0.6 Gyr behind gas"];
+        return galaxies.ConvertAll(g => g with
+        {
+            Partners = [.. galaxies.Where(p => (g.Name.Contains("gas", StringComparison.Ordinal) ? gas : plain).Contains(p.Name) && p != g).Select(p => p.Template!)],
+        });
+    }
+
+    private StellarSpectrum Compute(StellarParameters parameters)
+    {
+        if (!_stars.TryGetValue(parameters, out var star)) _stars[parameters] = star = StellarModel.Compute(parameters, _grid);
+        return star;
+    }
+
+    private float[] StarFlux(StellarParameters parameters)
+    {
+        var star = Compute(parameters);
+        var flux = new float[TemplateGrid.Count];
+        for (var i = 0; i < flux.Length; i++) flux[i] = star.Relative[i] * star.Continuum[i];
+        return flux;
+    }
+
+    private static IEnumerable<(Template Template, double GreatestZ)> GalaxyTemplates(Dictionary<string, float[]> mixes)
+    {
+        foreach (var mix in StellarMix.Ages) yield return (new Template(mix.Name, ObjectKind.Galaxy, mixes[mix.Name]), mix.GreatestZ);
+        yield return (Blend("old with young", mixes["12 Gyr"], mixes["0.03 Gyr"], 0.5), 1.5);
+        yield return (Blend("intermediate with young", mixes["1.5 Gyr"], mixes["0.005 Gyr"], 0.6), 4);
+        foreach (var (name, strength, column) in new[] { ("thin gas", 0.5, 0.0), ("gas", 1.0, 0.0), ("neutral gas", 1.3, 3.0) })
+        {
+            yield return (WithGas($"0.005 Gyr behind {name}", mixes["0.005 Gyr"], strength, column), 9);
+            yield return (WithGas($"0.03 Gyr behind {name}", mixes["0.03 Gyr"], strength, column), 9);
+        }
+
+        yield return (WithGas("0.6 Gyr behind gas", mixes["0.6 Gyr"], 1, 0), 4);
+    }
+
+    private static IEnumerable<Template?> QuasarTemplates(Dictionary<string, float[]> mixes)
+    {
+        yield return null;
+        yield return Blend("with its galaxy", mixes["5 Gyr"], Flat, 0.5);
+        yield return BroadAbsorption.Template;
+    }
+
+    private static float[] Flat
+    {
+        get
+        {
+            var flat = new float[TemplateGrid.Count];
+            Array.Fill(flat, 1f);
+            return flat;
+        }
+    }
+
+    private static Template Blend(string name, float[] first, float[] second, double share)
+    {
+        var flux = new float[first.Length];
+        for (var i = 0; i < flux.Length; i++) flux[i] = (float)(share * first[i] + (1 - share) * second[i]);
+        return new(name, ObjectKind.Galaxy, flux);
+    }
+
+    private static Template WithGas(string name, float[] stars, double strength, double column)
+    {
+        var flux = (float[])stars.Clone();
+        InterstellarAbsorption.Apply(flux, strength, column);
+        return new(name, ObjectKind.Galaxy, flux);
+    }
+
+    private static FitModel Galaxy(Template template, double greatestZ) => new()
+    {
+        Kind = ObjectKind.Galaxy,
+        Name = template.Name,
+        Template = template,
+        Forest = true,
+        Groups = GalaxyLines.All,
+        GreatestLnShift = Math.Log(1 + greatestZ),
+    };
+
+    private static FitModel Quasar(Template? template, double broad) => new()
+    {
+        Kind = ObjectKind.Quasar,
+        Name = $"{template?.Name ?? "quasar"}, broad lines {2.355 * broad:F0} km/s",
+        Template = template,
+        Forest = true,
+        Groups = QuasarLines.All,
+        BroadKmS = broad,
+        NarrowKmS = 200,
+    };
+
+    private static List<FitModel> WithEqualShares(IEnumerable<FitModel> models)
+    {
+        var all = models.ToList();
+        return all.ConvertAll(m => m with { LnPrior = -Math.Log(all.Count) });
+    }
+}

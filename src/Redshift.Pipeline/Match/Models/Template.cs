@@ -1,0 +1,60 @@
+using System.Collections.Concurrent;
+using Redshift.Pipeline.Numerics;
+using Redshift.Pipeline.Results;
+
+namespace Redshift.Pipeline.Match.Models;
+
+/// <summary>
+/// A computed spectrum at rest on <see cref="TemplateGrid"/>, its colour taken out: what is left are lines, bands, breaks and jumps.
+/// Broadened copies are made once, on first use, and shared by all workers.
+/// </summary>
+internal sealed class Template
+{
+    /// <summary>Structure wider than this σ in ln λ is colour, which dust and flux calibration change at will.</summary>
+    private const double ColourScale = 0.10;
+
+    private readonly float[] _flattened;
+    private readonly ConcurrentDictionary<int, float[]> _broadened = new();
+
+    /// <summary>Takes a computed spectrum.</summary>
+    /// <param name="name">What the model is.</param>
+    /// <param name="kind">The kind it stands for.</param>
+    /// <param name="flux">F_λ on the template grid, positive.</param>
+    /// <param name="spectralType">Spectral type of a star, else empty.</param>
+    public Template(string name, ObjectKind kind, float[] flux, string spectralType = "")
+    {
+        Name = name;
+        Kind = kind;
+        SpectralType = spectralType;
+        _flattened = Flatten(flux);
+    }
+
+    private Template(Template original, double sigmaKmS)
+    {
+        Name = original.Name + " rotating";
+        Kind = original.Kind;
+        SpectralType = original.SpectralType;
+        _flattened = GaussianFilter.Convolve(original._flattened, sigmaKmS / 299792.458 / TemplateGrid.Step);
+    }
+
+    public string Name { get; }
+
+    public ObjectKind Kind { get; }
+
+    public string SpectralType { get; }
+
+    /// <summary>The same spectrum with lines broadened by rotation.</summary>
+    public Template Spun(double sigmaKmS) => new(this, sigmaKmS);
+
+    /// <summary>The flattened flux convolved to a level of <see cref="LineSpreadLevels"/>.</summary>
+    public float[] Broadened(int level) =>
+        _broadened.GetOrAdd(level, l => GaussianFilter.Convolve(_flattened, LineSpreadLevels.Sigma(l) / TemplateGrid.Step));
+
+    private static float[] Flatten(float[] flux)
+    {
+        var logs = Array.ConvertAll(flux, f => MathF.Log(Math.Max(f, 1e-30f)));
+        var smooth = GaussianFilter.Convolve(logs, ColourScale / TemplateGrid.Step);
+        for (var i = 0; i < logs.Length; i++) logs[i] = MathF.Exp(logs[i] - smooth[i]);
+        return logs;
+    }
+}

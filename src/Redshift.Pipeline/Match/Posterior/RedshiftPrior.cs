@@ -1,0 +1,43 @@
+using Redshift.Pipeline.Results;
+using Redshift.Pipeline.Settings;
+
+namespace Redshift.Pipeline.Match.Posterior;
+
+/// <summary>What is expected before the spectrum is seen; broad, and not the object mix of any survey.</summary>
+internal static class RedshiftPrior
+{
+    /// <summary>ln prior of a galaxy or quasar at the velocities of stars.</summary>
+    private const double NearestPenalty = -5000;
+
+    private const double KmSPerLn = 299792.458;
+
+    /// <summary>ln of the prior density in ln(1+z) of a kind at a redshift, weight of the kind included.</summary>
+    public static double LnDensity(ObjectKind kind, double lnShift, MatchSettings settings) => kind switch
+    {
+        ObjectKind.Star => Math.Log(settings.PriorStar) + Velocities(lnShift * KmSPerLn, 60, 200),
+        ObjectKind.Nebula => Math.Log(settings.PriorNebula) + Velocities(lnShift * KmSPerLn, 40, 120),
+        ObjectKind.Galaxy => Math.Log(settings.PriorGalaxy) + Flat(lnShift, 1.2) + Distant(lnShift, settings),
+        ObjectKind.Quasar => Math.Log(settings.PriorQuasar) + Flat(lnShift, 0.4) + Distant(lnShift, settings),
+        _ => double.NegativeInfinity,
+    };
+
+    /// <summary>Disc and halo: two normal distributions of equal weight.</summary>
+    private static double Velocities(double kmS, double narrow, double wide) =>
+        Math.Log(KmSPerLn * (0.5 * Normal(kmS, narrow) + 0.5 * Normal(kmS, wide)) + 1e-12);
+
+    /// <summary>
+    /// Next to nothing extragalactic is found among the velocities of stars (a few members of the Local Group), while a mixture of stars fits
+    /// a star better than one computed star does: such redshifts are stars' unless the user expects otherwise.
+    /// </summary>
+    private static double Distant(double lnShift, MatchSettings settings)
+    {
+        var kmS = lnShift * KmSPerLn;
+        if (settings.Expect is not null || kmS > 900) return 0;
+        return kmS < 600 ? NearestPenalty : NearestPenalty * (900 - kmS) / 300;
+    }
+
+    private static double Normal(double x, double sigma) => Math.Exp(-0.5 * x * x / (sigma * sigma)) / (sigma * 2.5066282746310002);
+
+    /// <summary>Exponential in ln(1+z), so gentle that it only breaks ties: fainter objects are observed less often.</summary>
+    private static double Flat(double lnShift, double slope) => -slope * Math.Max(0, lnShift) + Math.Log(slope / (1 - Math.Exp(-slope * 2.14)));
+}

@@ -1,0 +1,103 @@
+using System.Numerics;
+
+namespace Redshift.Pipeline.Numerics;
+
+/// <summary>
+/// Complex fast Fourier transform of one length, a power of two, on separate real and imaginary arrays
+/// (Stockham's self-sorting radix-2 form; e.g. Van Loan 1992, Computational Frameworks for the FFT, §1.7).
+/// </summary>
+/// <remarks>Element-wise arithmetic only, so that the bits do not depend on the vector width. Not thread safe: holds scratch space.</remarks>
+internal sealed class FourierTransform
+{
+    private readonly float[][] _cos;
+    private readonly float[][] _sin;
+    private readonly float[] _re;
+    private readonly float[] _im;
+
+    public FourierTransform(int length)
+    {
+        if (!BitOperations.IsPow2(length)) throw new ArgumentOutOfRangeException(nameof(length), length, "a power of two is expected");
+        Length = length;
+        var stages = BitOperations.Log2((uint)length);
+        _cos = new float[stages][];
+        _sin = new float[stages][];
+        for (var stage = 0; stage < stages; stage++) FillTwiddles(stage, length >> (stage + 1));
+        _re = new float[length];
+        _im = new float[length];
+    }
+
+    public int Length { get; }
+
+    /// <summary>Transforms in place, kernel exp(−2πi jk/N), no scaling.</summary>
+    public void Forward(Span<float> re, Span<float> im)
+    {
+        Span<float> xr = re, xi = im, yr = _re, yi = _im;
+        var stride = 1;
+        for (int half = Length / 2, stage = 0; half >= 1; half /= 2, stage++)
+        {
+            Pass(xr, xi, yr, yi, half, stride, _cos[stage], _sin[stage]);
+            stride *= 2;
+            Span<float> tr = xr, ti = xi;
+            xr = yr;
+            xi = yi;
+            yr = tr;
+            yi = ti;
+        }
+
+        if (BitOperations.Log2((uint)Length) % 2 == 0) return;
+        xr.CopyTo(re);
+        xi.CopyTo(im);
+    }
+
+    /// <summary>Inverse transform without the factor 1/N: the forward one with the two parts exchanged.</summary>
+    public void Inverse(Span<float> re, Span<float> im) => Forward(im, re);
+
+    private void FillTwiddles(int stage, int half)
+    {
+        _cos[stage] = new float[half];
+        _sin[stage] = new float[half];
+        for (var p = 0; p < half; p++)
+        {
+            var angle = -Math.PI * p / half;
+            _cos[stage][p] = (float)Math.Cos(angle);
+            _sin[stage][p] = (float)Math.Sin(angle);
+        }
+    }
+
+    private static void Pass(Span<float> xr, Span<float> xi, Span<float> yr, Span<float> yi, int half, int stride, float[] cos, float[] sin)
+    {
+        for (var p = 0; p < half; p++)
+        {
+            int a = stride * p, b = stride * (p + half), c = stride * 2 * p, d = c + stride;
+            Butterflies(
+                xr.Slice(a, stride), xi.Slice(a, stride), xr.Slice(b, stride), xi.Slice(b, stride),
+                yr.Slice(c, stride), yi.Slice(c, stride), yr.Slice(d, stride), yi.Slice(d, stride), cos[p], sin[p]);
+        }
+    }
+
+    private static void Butterflies(
+        Span<float> ar, Span<float> ai, Span<float> br, Span<float> bi,
+        Span<float> sr, Span<float> si, Span<float> tr, Span<float> ti, float c, float s)
+    {
+        var q = 0;
+        var width = Vector<float>.Count;
+        for (Vector<float> vc = new(c), vs = new(s); q <= ar.Length - width; q += width)
+        {
+            Vector<float> pr = new(ar[q..]), pi = new(ai[q..]), qr = new(br[q..]), qi = new(bi[q..]);
+            (pr + qr).CopyTo(sr[q..]);
+            (pi + qi).CopyTo(si[q..]);
+            Vector<float> dr = pr - qr, di = pi - qi;
+            (dr * vc - di * vs).CopyTo(tr[q..]);
+            (dr * vs + di * vc).CopyTo(ti[q..]);
+        }
+
+        for (; q < ar.Length; q++)
+        {
+            float dr = ar[q] - br[q], di = ai[q] - bi[q];
+            sr[q] = ar[q] + br[q];
+            si[q] = ai[q] + bi[q];
+            tr[q] = dr * c - di * s;
+            ti[q] = dr * s + di * c;
+        }
+    }
+}
