@@ -21,14 +21,25 @@ internal readonly record struct Scaling(double Scale, double Zero, long? Null)
     /// <summary>Physical values of as many elements as the target holds; NaN where there is none.</summary>
     public void ToDoubles(Bitpix type, ReadOnlySpan<byte> bytes, Span<double> into)
     {
-        if (type > 0 && (Null is not null || NeedsExactShift(type)))
+        if (IsLinear(type))
+        {
+            BigEndian.ToDoubles(type, bytes, into);
+            Apply(into);
+        }
+        else
         {
             IntegersToDoubles(type, bytes, into);
-            return;
         }
+    }
 
-        BigEndian.ToDoubles(type, bytes, into);
-        if (!IsIdentity) Apply(into);
+    /// <summary>Whether physical values are those of <see cref="BigEndian"/> with <see cref="Apply"/> done to them, and no more.</summary>
+    public bool IsLinear(Bitpix type) => type < 0 || (Null is null && !NeedsExactShift(type));
+
+    /// <summary>Scales stored values in place.</summary>
+    public void Apply(Span<double> values)
+    {
+        if (IsIdentity) return;
+        foreach (ref var value in values) value = Zero + Scale * value;
     }
 
     /// <summary>Physical values rounded to single precision; 32-bit floats keep their bits.</summary>
@@ -69,11 +80,6 @@ internal readonly record struct Scaling(double Scale, double Zero, long? Null)
             BigEndian.ToIntegers(type, bytes.Slice(size * i, size), one);
             into[i] = checked((ulong)(one[0] + (Int128)Zero));
         }
-    }
-
-    private void Apply(Span<double> values)
-    {
-        foreach (ref var value in values) value = Zero + Scale * value;
     }
 
     // Adding 2^63 to a 64-bit integer that was rounded to double first would lose its small values.

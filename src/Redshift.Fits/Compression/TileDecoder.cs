@@ -97,7 +97,7 @@ internal sealed class TileDecoder
     // The stream itself tells the size of its elements: integers may be narrower or wider than the pixels.
     private void DecodeBytes(ReadOnlySpan<byte> bytes, long tile, int count, Span<byte> into)
     {
-        var elements = new byte[count * LargestPixel];
+        var elements = new byte[Math.Min((long)count * LargestPixel, Array.MaxLength)];
         var length = Expand(bytes, elements);
         var size = length / Math.Max(1, count);
         if (size is not (1 or 2 or 4 or 8) || size * count != length) RequireLength(length, into.Length);

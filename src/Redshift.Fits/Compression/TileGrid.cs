@@ -18,8 +18,8 @@ internal sealed class TileGrid
         _axes = axes[..rank];
         _tile = [.. tile.Take(rank).Select((length, i) => Math.Min(length, axes[i]))];
         _tiles = [.. _axes.Select((length, i) => (length - 1) / _tile[i] + 1)];
-        PixelsPerLayer = HduLayout.Elements(_axes[..^1].Length == 0 ? [1] : _axes[..^1]);
-        TilesPerSlab = HduLayout.Elements(_tiles[..^1].Length == 0 ? [1] : _tiles[..^1]);
+        PixelsPerLayer = Product(_axes[..^1]);
+        TilesPerSlab = Product(_tiles[..^1]);
     }
 
     /// <summary>Pixels of one step of the slowest axis.</summary>
@@ -63,6 +63,8 @@ internal sealed class TileGrid
             Advance(at, lengths);
         }
     }
+
+    private static long Product(long[] lengths) => lengths.Aggregate(1L, (product, length) => product * length);
 
     private long OffsetOf(long start, long[] at)
     {

@@ -76,6 +76,7 @@ for repeat in [1, 3]:
         limits = np.iinfo(kind)
         data = rng.integers(0, limits.max, shape, dtype=kind, endpoint=True)
         add(f"U{form}{repeat}", f"{repeat}{form}", data, "U", bzero=2 ** (limits.bits - 1))
+    add(f"SB{repeat}", f"{repeat}B", rng.integers(0, 256, shape).astype("u1"), "G")
     for form, kind in [("E", "f4"), ("D", "f8")]:
         add(f"{form}{repeat}", f"{repeat}{form}", rng.normal(0, 1, shape).astype(kind), "D")
     for form, kind in [("C", "c8"), ("M", "c16")]:
@@ -101,12 +102,16 @@ number = len(units) - 1
 for index, (column, code, *_) in enumerate(columns, 1):
     if code == "Z":
         table.header[f"XSCAL{index}"], table.header[f"XZERO{index}"], table.header[f"XNULL{index}"] = 0.25, 1.5, 7
+    if code == "G":
+        table.header[f"XZERO{index}"] = -128
 for column, code, array, more in columns:
     for row in range(ROWS):
         cell = np.ravel(array[row]) if not isinstance(array[row], str) else [array[row]]
         if code in "IU":
             lines.append(f"{code} {number} {column.name} {row} {' '.join(str(int(v)) for v in cell)}")
             lines.append(f"D {number} {column.name} {row} {doubles([float(int(v)) for v in cell])}")
+        elif code == "G":
+            lines.append(f"I {number} {column.name} {row} {' '.join(str(int(v) - 128) for v in cell)}")
         elif code == "Z":
             lines.append(f"D {number} {column.name} {row} {doubles(np.where(cell == 7, np.nan, 1.5 + 0.25 * cell))}")
         elif code == "D":

@@ -61,6 +61,18 @@ public sealed class WriterRoundTripTests
             Assert.Equal(1.5e-300, header.GetDouble("AFTER"));
         });
 
+    [Fact]
+    public void Cards_AnyNumber_IsReadBackBitByBit() =>
+        Gen.Select(Gen.Double.Where(double.IsFinite), Gen.Long, Gen.Bool).Sample((real, integer, logical) =>
+        {
+            Card[] cards = [Card.Of("REAL", real), Card.Of("INTEGER", integer), Card.Of("ESO A LOGICAL", logical)];
+            using var file = Written(writer => writer.WriteHeader("", cards));
+            var header = file.Hdus[0].Header;
+            Assert.Equal(real, header.GetDouble("REAL"));
+            Assert.Equal(integer, header.GetInteger("INTEGER"));
+            Assert.Equal(logical, header.GetLogical("ESO A LOGICAL"));
+        });
+
     [ToolFact("fitsverify")]
     public void Output_PassesFitsverifyWithoutErrorOrWarning()
     {
