@@ -1,6 +1,7 @@
 using System.CommandLine;
 using Redshift.Evaluation;
 using Redshift.Simulation;
+using Redshift.Simulation.Samples;
 
 var count = new Option<int>("--count") { Description = "Number of simulated observations", DefaultValueFactory = _ => 300 };
 var seed = new Option<ulong>("--seed") { Description = "Seed; the same seed draws the same observations", DefaultValueFactory = _ => 1 };
@@ -40,6 +41,9 @@ dump.SetAction(parse =>
         SpectrumDump.Write(observation, parse.GetValue(output)!);
 });
 
-return new RootCommand("Measures the pipeline against known truth") { simulate, judge, dump }.Parse(args).Invoke();
+var samples = new Command("samples", "Writes the sample spectra anew") { folder };
+samples.SetAction(parse => SampleNight.WriteTo(parse.GetValue(folder)!));
+
+return new RootCommand("Measures the pipeline against known truth") { simulate, judge, dump, samples }.Parse(args).Invoke();
 
 SurveyMix Mix(ParseResult parse) => SurveyMix.Default.Only(parse.GetValue(setups) ?? [], parse.GetValue(kinds) ?? []);

@@ -18,7 +18,7 @@ public enum TruthKind
     /// <summary>Ionised gas of our Galaxy.</summary>
     Nebula,
 
-    /// <summary>An object whose redshift nobody could tell: comet, supernova, blazar.</summary>
+    /// <summary>An object that no model explains: supernova, blazar; or comet, at redshift 0.</summary>
     Oddity,
 }
 

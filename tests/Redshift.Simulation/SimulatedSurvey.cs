@@ -8,6 +8,8 @@ namespace Redshift.Simulation;
 /// <summary>Draws observations; each depends on nothing but the seed and its own number.</summary>
 public static class SimulatedSurvey
 {
+    private const string Blank = "blank";
+
     /// <summary>Draws the first <paramref name="count"/> observations of a seed.</summary>
     public static IEnumerable<SimulatedObservation> Draw(ulong seed, int count, SurveyMix mix) =>
         Enumerable.Range(0, count).Select(index => Observe(seed, index, mix));
@@ -18,15 +20,34 @@ public static class SimulatedSurvey
         var random = RandomSource.ForMember(seed, (ulong)index);
         var entry = Choose(mix, random);
         var setup = SetupCatalog.All[entry.Setup](random);
-        var exposure = new Exposure(setup, random);
         var snr = Math.Clamp(setup.Snr.Median * random.Scatter(setup.Snr.ScatterLn), setup.Snr.Lowest, setup.Snr.Highest);
         var name = FormattableString.Invariant($"{seed}-{index}");
-        if (entry.ObjectClass == "blank")
-            return new(name, TruthKind.Blank, null, "blank", setup.Name, 0, exposure.Record(null, snr));
+        if (entry.ObjectClass == Blank)
+            return ObserveBlank(name, setup, snr, random);
         var kind = ObjectCatalog.All[entry.ObjectClass];
-        var z = Redshift(kind, entry, random);
+        return Observe(name, setup, kind, Redshift(kind, entry, random), snr, random);
+    }
+
+    /// <summary>Observes a given class of object, or <c>blank</c>, at a given redshift and signal to noise.</summary>
+    /// <exception cref="KeyNotFoundException">No such set-up or class.</exception>
+    public static SimulatedObservation Observe(ulong seed, string setup, string objectClass, double z, double snr)
+    {
+        var random = new RandomSource(seed);
+        var instrument = SetupCatalog.All[setup](random);
+        var name = FormattableString.Invariant($"{setup}-{objectClass}-{seed}");
+        return objectClass == Blank
+            ? ObserveBlank(name, instrument, snr, random)
+            : Observe(name, instrument, ObjectCatalog.All[objectClass], z, snr, random);
+    }
+
+    private static SimulatedObservation ObserveBlank(string name, Setup setup, double snr, RandomSource random) =>
+        new(name, TruthKind.Blank, null, Blank, setup.Name, 0, new Exposure(setup, random).Record(null, snr));
+
+    private static SimulatedObservation Observe(string name, Setup setup, ObjectClass kind, double z, double snr, RandomSource random)
+    {
+        var exposure = new Exposure(setup, random);
         var light = Light(exposure.Grid, kind, z, random);
-        return new(name, kind.Kind, kind.Kind == TruthKind.Oddity ? null : z, kind.Name, setup.Name, snr, exposure.Record(light, snr));
+        return new(name, kind.Kind, kind.HasRedshift ? z : null, kind.Name, setup.Name, snr, exposure.Record(light, snr));
     }
 
     private static Canvas Light(LogGrid grid, ObjectClass kind, double z, RandomSource random)

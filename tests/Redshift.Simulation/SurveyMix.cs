@@ -28,6 +28,7 @@ public sealed record SurveyMix(IReadOnlyList<SurveyEntry> Entries)
         new("amateur", "nebula-hii", 0.3, 30, 0), new("amateur", "quasar", 0.3, 0.02, 0.5), new("amateur", "galaxy-active", 0.2, 0.002, 0.05), new("amateur", "galaxy-passive", 0.15, 0.001, 0.05),
         new("amateur-high", "star-be", 0.8, 40, 0), new("amateur-high", "star-hot", 0.4, 40, 0), new("amateur-high", "star-a", 0.3, 30, 0), new("amateur-high", "star-fg", 0.3, 30, 0),
         new("amateur-high", "star-giant", 0.3, 40, 0), new("amateur-high", "nebula-planetary", 0.2, 40, 0), new("amateur-high", "star-k", 0.2, 30, 0),
+        new("echelle", "star-fg", 0.3, 40, 0), new("echelle", "star-hot", 0.2, 40, 0), new("echelle", "star-a", 0.2, 30, 0), new("echelle", "star-giant", 0.3, 50, 0), new("echelle", "star-m", 0.1, 40, 0),
         new("ultraviolet", "quasar", 0.8, 0.05, 1.6), new("ultraviolet", "galaxy-ultraviolet", 0.7, 0.02, 0.45), new("ultraviolet", "star-hot", 0.4, 60, 0),
         new("ultraviolet", "star-a", 0.2, 40, 0), new("ultraviolet", "star-da", 0.2, 40, 0), new("ultraviolet", "star-fg", 0.2, 40, 0),
         new("course", "nebula-planetary", 0.2, 40, 0), new("course", "nebula-hii", 0.2, 30, 0), new("course", "supernova", 0.2, 0.005, 0.08), new("course", "comet", 0.1, 0, 0), new("course", "blazar", 0.05, 0, 0),

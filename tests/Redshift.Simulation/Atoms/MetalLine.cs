@@ -11,8 +11,15 @@ internal sealed record MetalLine(string Species, double Vacuum, double SolarWidt
 {
     private const int Unlisted = 700;
 
-    /// <summary>The listed lines with nature's own departures from the table, and weak lines that no list holds.</summary>
-    public static IReadOnlyList<MetalLine> All { get; } = [.. Listed(new(20260131)), .. Invented(new(20260207))];
+    // The listed lines with nature's own departures from the table, and weak lines that no list holds.
+    private static readonly MetalLine[] All = [.. Listed(new(20260131)).Concat(Invented(new(20260207))).OrderBy(line => line.Vacuum)];
+
+    /// <summary>The lines in a range of wavelengths, Å.</summary>
+    public static ReadOnlySpan<MetalLine> Between(double from, double to)
+    {
+        var (first, last) = (Array.FindIndex(All, line => line.Vacuum >= from), Array.FindLastIndex(All, line => line.Vacuum <= to));
+        return first < 0 || last < first ? [] : All.AsSpan(first, last - first + 1);
+    }
 
     private static IEnumerable<MetalLine> Listed(RandomSource nature) =>
         from row in Table.Rows("photosphere.csv")
@@ -25,8 +32,8 @@ internal sealed record MetalLine(string Species, double Vacuum, double SolarWidt
         for (var i = 0; i < Unlisted; i++)
         {
             var wavelength = 2000 + (5000 * Math.Pow(nature.Uniform(), 1.3));
-            var species = nature.Chance(0.7) ? "Fe I" : nature.Chance(0.5) ? "Fe II" : "Ti I";
-            yield return new(species, wavelength, nature.Exponential(wavelength < 3000 ? 0.35 : wavelength < 4500 ? 0.06 : 0.03));
+            var species = nature.Chance(0.75) ? "Fe I" : nature.Chance(0.3) ? "Fe II" : "Ti I";
+            yield return new(species, wavelength, nature.Exponential(wavelength < 3000 ? 0.3 : wavelength < 4500 ? 0.045 : 0.02));
         }
     }
 }

@@ -16,7 +16,7 @@ internal sealed class Exposure
     public Exposure(Setup setup, RandomSource random)
     {
         (_setup, _random) = (setup, random);
-        _grid = LogGrid.Cover(setup.Arms[0].From * 0.99, setup.Arms[^1].To * 1.01, setup.Arms.Min(arm => arm.NarrowestKmS) / 5.5);
+        _grid = LogGrid.Cover(setup.Arms[0].From * 0.99, setup.Arms[^1].To * 1.01, setup.Arms.Min(arm => arm.NarrowestKmS) / 5);
         _spread = new(_grid, setup.Wings);
         _sky = setup.OnGround ? NightSky.Draw(_grid, setup.SkySloppiness, setup.Town, random) : NightSky.None(_grid);
         _transmission = Atmosphere.Transmission(_grid, setup.OnGround ? setup.Water : 0, setup.OnGround ? random.Uniform(1, 1.8) : 0);

@@ -48,5 +48,5 @@ internal sealed class Frame(Arm arm, double[] pixels)
     }
 
     // Gratings and detectors lose light towards the ends of an arm, more in the blue.
-    private static double Efficiency(double x) => 0.08 + (0.92 * Math.Pow(4 * x * (1 - x), 0.6) * (0.75 + (0.25 * x)));
+    private static double Efficiency(double x) => 0.05 + (0.95 * Math.Pow(4 * x * (1 - x), 0.6) * (1 - (0.6 * Math.Exp(-x / 0.06))));
 }

@@ -79,6 +79,6 @@ internal sealed class NightSky
     private static IEnumerable<(double Vacuum, double Area)> NearInfrared(RandomSource nature)
     {
         for (var wavelength = 9700.0; wavelength < 22800; wavelength += nature.Exponential(38))
-            yield return (wavelength, nature.Exponential(wavelength < 14500 ? 220 : 500));
+            yield return (wavelength, nature.Exponential(wavelength < 14500 ? 120 : 250));
     }
 }

@@ -29,6 +29,19 @@ internal sealed class NoiseMaker(Setup setup, RandomSource random)
             bad -= Blot(flux, inverseVariance, 1 + (int)random.Exponential(3), random.Chance(0.5));
         if (random.Chance(setup.GapChance))
             Blot(flux, inverseVariance, (int)(flux.Length * random.Uniform(0.01, 0.06)), emptied: true);
+        FillEnds(flux, inverseVariance, (int)(flux.Length * Math.Min(0.2, setup.DeadEnds)));
+    }
+
+    private void FillEnds(double[] flux, double[] inverseVariance, int length)
+    {
+        if (length == 0)
+            return;
+        var filling = random.Chance(0.5) ? 0 : flux[length];
+        foreach (var start in (int[])[0, flux.Length - length])
+        {
+            flux.AsSpan(start, length).Fill(filling);
+            inverseVariance.AsSpan(start, length).Clear();
+        }
     }
 
     // Linear interpolation between two rasters: neighbours share noise, in a slow beat along the spectrum.

@@ -58,6 +58,9 @@ internal sealed record Setup
     /// <summary>Chance of a gap of up to a few hundred pixels.</summary>
     public double GapChance { get; init; }
 
+    /// <summary>Share of the pixels at each end that the detector did not reach and the reduction filled with a constant.</summary>
+    public double DeadEnds { get; init; }
+
     /// <summary>Stated errors over true ones.</summary>
     public double ErrorScale { get; init; } = 1;
 

@@ -17,6 +17,7 @@ internal static class SetupCatalog
         ["amateur-high"] = AmateurHigh,
         ["ultraviolet"] = Ultraviolet,
         ["course"] = Course,
+        ["echelle"] = Echelle,
     };
 
     private static Setup Fibre(RandomSource random)
@@ -93,6 +94,7 @@ internal static class SetupCatalog
             TelluricCorrected = random.Chance(0.5),
             StatesResolution = random.Chance(0.3),
             Air = random.Chance(0.5),
+            DeadEnds = random.Chance(0.5) ? random.Exponential(0.03) : 0,
             Hits = 1.5,
             Masked = 0.002,
             ZeroPointKmS = 30,
@@ -120,7 +122,7 @@ internal static class SetupCatalog
             Arms = [new("", from, to, Sampling.Linear, middle / r / pixels, middle / r, random.Chance(0.5))],
             Snr = (4, 0.8, 0.4, 60),
             Sky = random.LogUniform(0.3, 10),
-            SkySloppiness = random.LogUniform(0.002, 0.01),
+            SkySloppiness = random.LogUniform(0.0007, 0.005),
             ErrorScale = random.Chance(0.4) ? random.Uniform(0.5, 3) : random.Uniform(0.9, 1.15),
             Resampled = random.Chance(0.7),
             TelluricCorrected = random.Chance(0.9),
@@ -148,7 +150,7 @@ internal static class SetupCatalog
             ],
             Snr = (5, 0.8, 0.5, 40),
             Sky = random.LogUniform(0.3, 8),
-            SkySloppiness = random.LogUniform(0.002, 0.01),
+            SkySloppiness = random.LogUniform(0.0007, 0.005),
             ErrorScale = SmallErrorOfErrors(random),
             Resampled = random.Chance(0.5),
             TelluricCorrected = true,
@@ -271,6 +273,34 @@ internal static class SetupCatalog
             Hits = 1,
             Uncalibrated = random.Chance(0.3),
             FluxUnit = random.LogUniform(1e-16, 1e3),
+        };
+    }
+
+    // Orders of one grating equation m λ = const overlap in the blue and nearly part in the red; each has its own blaze.
+    private static Setup Echelle(RandomSource random)
+    {
+        var r = random.Uniform(9000, 14000);
+        var orders = Enumerable.Range(33, 18).Reverse().Select(order => (Order: order, Blaze: 224000.0 / order));
+        return new()
+        {
+            Name = "echelle",
+            Arms =
+            [
+                .. from order in orders
+                   let span = 1.15 * order.Blaze / order.Order
+                   select LinearArm($"order {order.Order}", order.Blaze - (span / 2), order.Blaze + (span / 2), order.Blaze / r / 2.6, order.Blaze / r),
+            ],
+            Snr = (30, 0.8, 4, 150),
+            StatesResolution = random.Chance(0.5),
+            Air = random.Chance(0.6),
+            Sky = 0.02,
+            Water = random.LogUniform(1, 4),
+            Waves = random.Uniform(0.02, 0.1),
+            ZeroPointKmS = 0.5,
+            BendKmS = 0.5,
+            Resampled = random.Chance(0.6),
+            Uncalibrated = random.Chance(0.5),
+            FluxUnit = random.LogUniform(1, 1e4),
         };
     }
 

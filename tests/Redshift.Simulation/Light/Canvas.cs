@@ -7,14 +7,6 @@ internal sealed class Canvas(LogGrid grid)
 
     public double[] Flux { get; } = new double[grid.Count];
 
-    /// <summary>Sets the flux at each wavelength.</summary>
-    public Canvas Fill(Func<double, double> law)
-    {
-        for (var i = 0; i < Flux.Length; i++)
-            Flux[i] = law(Grid.Wavelength[i]);
-        return this;
-    }
-
     /// <summary>Multiplies by a law of wavelength.</summary>
     public Canvas Filter(Func<double, double> law)
     {
@@ -23,10 +15,17 @@ internal sealed class Canvas(LogGrid grid)
         return this;
     }
 
-    /// <summary>Multiplies by a law so smooth that it need not be worked out at every point.</summary>
+    /// <summary>Sets the flux from a law so smooth that it need not be worked out at every point.</summary>
+    public Canvas Fill(Func<double, double> law)
+    {
+        Array.Fill(Flux, 1);
+        return FilterSlowly(law);
+    }
+
+    /// <summary>Multiplies by such a law.</summary>
     public Canvas FilterSlowly(Func<double, double> law)
     {
-        const int Stride = 64;
+        const int Stride = 16;
         var next = law(Grid.Wavelength[0]);
         for (var i = 0; i < Flux.Length; i += Stride)
         {

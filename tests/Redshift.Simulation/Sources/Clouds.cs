@@ -24,12 +24,16 @@ internal sealed class Clouds(double z, double line, double proximityKmS, double 
         return _median * Math.Exp(Spread * _field) * distance / (distance + proximityKmS);
     }
 
-    // Median whose mean transmission is that of the forest (Becker et al. 2013, MNRAS 430, 2067, steepened beyond z = 5.5).
+    // ln of the median depth of the lognormal law against ln of the effective depth −ln⟨exp(−τ)⟩, worked out by quadrature.
+    private static readonly Curve LnMedian = new(
+        (-3, -4.47), (-2.303, -3.59), (-1.609, -2.62), (-0.916, -1.516), (-0.511, -0.789), (-0.105, 0.017), (0.182, 0.646), (0.693, 1.908), (1.099, 3.075), (1.386, 4.011), (1.609, 4.809), (1.946, 6.151));
+
+    // Mean transmission of the forest after Becker et al. 2013 (MNRAS 430, 2067), steepened beyond z = 5.5.
     private static double Median(double onePlusZ)
     {
         var effective = (0.751 * Math.Pow(onePlusZ / 4.5, 2.9)) - 0.132;
         if (onePlusZ > 6.5)
             effective *= Math.Pow(onePlusZ / 6.5, 8);
-        return 0.55 * Math.Pow(Math.Max(0.01, effective), 1.5);
+        return Math.Exp(LnMedian.At(Math.Log(Math.Max(0.03, effective))));
     }
 }

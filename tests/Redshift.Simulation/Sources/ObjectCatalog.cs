@@ -34,7 +34,7 @@ internal static class ObjectCatalog
         new("quasar-bal", TruthKind.Quasar, QuasarPainter.Outflowing),
         new("nebula-planetary", TruthKind.Nebula, NebulaPainter.Planetary),
         new("nebula-hii", TruthKind.Nebula, NebulaPainter.HII),
-        new("comet", TruthKind.Oddity, OddityPainter.Comet),
+        new("comet", TruthKind.Oddity, OddityPainter.Comet) { HasRedshift = true },
         new("supernova", TruthKind.Oddity, OddityPainter.Supernova),
         new("blazar", TruthKind.Oddity, OddityPainter.Blazar),
     }.ToDictionary(entry => entry.Name);

@@ -13,4 +13,8 @@ internal delegate Canvas Painter(LogGrid restGrid, double z, RandomSource random
 /// <param name="Name">E.g. <c>star-m</c>.</param>
 /// <param name="Kind">The kind it belongs to.</param>
 /// <param name="Paint">Draws one.</param>
-internal sealed record ObjectClass(string Name, TruthKind Kind, Painter Paint);
+internal sealed record ObjectClass(string Name, TruthKind Kind, Painter Paint)
+{
+    /// <summary>Whether there is a redshift that could be found.</summary>
+    public bool HasRedshift { get; init; } = Kind != TruthKind.Oddity;
+}

@@ -19,7 +19,7 @@ internal static class Balmer
         (3000, 0.2), (4000, 0.5), (4500, 0.8), (5000, 1.3), (5777, 2.6), (6200, 3.8), (6600, 5.5), (7000, 8.5), (7400, 11.5), (8100, 15), (9000, 17),
         (9900, 16.5), (11500, 13.5), (13500, 11), (17000, 8.5), (22000, 6.2), (28000, 4), (33000, 3.2), (45000, 2.2));
 
-    private static readonly double[] RelativeWidth = [0.78, 1.02, 1, 1, 0.9, 0.8, 0.66, 0.5, 0.36, 0.25, 0.17, 0.11, 0.07, 0.05];
+    private static readonly double[] RelativeWidth = [0.72, 0.78, 1, 1, 0.9, 0.8, 0.66, 0.5, 0.36, 0.25, 0.17, 0.11, 0.07, 0.05];
 
     /// <summary>Draws the Balmer and Paschen lines.</summary>
     public static void Absorb(Canvas canvas, StarParameters star, double scale)

@@ -25,13 +25,13 @@ internal static class Continuum
     private static double BelowLimit(double wavelength, double jump) =>
         jump + ((1 - jump) / (1 + Math.Exp((3690 - wavelength) / 18)));
 
-    // Besides a smooth rise there are steps at 2640 and 2900 A (ionised iron, neutral magnesium and iron).
+    // Besides a smooth rise there are steps at 4000 A (the crowd of iron lines), 2900 and 2640 A (magnesium and iron, neutral and ionised).
     private static double Veil(double wavelength, double strength)
     {
         if (wavelength > 4400 || strength == 0)
             return 1;
         var x = (4400 - wavelength) / 1000;
-        var steps = (wavelength < 2640 ? 0.7 : 0) + (wavelength < 2900 ? 0.35 : 0);
+        var steps = (wavelength < 2640 ? 0.7 : 0) + (wavelength < 2900 ? 0.35 : 0) + (0.28 / (1 + Math.Exp((wavelength - 3985) / 8)));
         return Math.Exp(-strength * ((x * x) + steps));
     }
 }

@@ -7,11 +7,11 @@ namespace Redshift.Simulation.Sources.Stars;
 /// <summary>Molecular absorption of cool stars.</summary>
 internal static class Molecules
 {
-    private static readonly Curve TitaniumOxide = new((2600, 3.2), (3000, 2.6), (3300, 1.6), (3500, 1.05), (3850, 0.45), (4100, 0.12), (4400, 0));
-    private static readonly Curve VanadiumOxide = new((2600, 2), (2900, 1), (3200, 0.2), (3400, 0));
+    private static readonly Curve TitaniumOxide = new((2600, 0.9), (2850, 0.75), (3200, 0.56), (3350, 0.42), (3550, 0.26), (3850, 0.11), (4100, 0.03), (4300, 0));
+    private static readonly Curve VanadiumOxide = new((2600, 1), (2900, 0.5), (3200, 0.1), (3400, 0));
     private static readonly Curve Cyanogen = new((3800, 0.55), (4300, 0.6), (5000, 0.45), (5777, 0.26), (6300, 0.08), (6800, 0));
-    private static readonly Curve Methylidyne = new((3500, 0.35), (4300, 0.7), (5000, 0.72), (5777, 0.5), (6300, 0.26), (6800, 0.08), (7200, 0));
-    private static readonly Curve Hydrides = new((2800, 1.1), (3300, 1), (3800, 0.75), (4500, 0.35), (5200, 0.08), (5777, 0.02), (6200, 0));
+    private static readonly Curve Methylidyne = new((3500, 0.15), (4300, 0.2), (5000, 0.3), (5777, 0.3), (6300, 0.2), (6800, 0.08), (7200, 0));
+    private static readonly Curve Hydrides = new((2800, 0.5), (3300, 0.5), (3800, 0.45), (4500, 0.25), (5200, 0.06), (5777, 0.02), (6200, 0));
 
     /// <summary>Draws all bands.</summary>
     public static void Absorb(Canvas canvas, StarParameters star, RandomSource random)
@@ -44,7 +44,7 @@ internal static class Molecules
 
     private static double Strength(string molecule, StarParameters star) => molecule switch
     {
-        "TiO" => TitaniumOxide.At(star.Temperature),
+        "TiO" => TitaniumOxide.At(star.Temperature) * (1 + (0.8 * star.Giantness)),
         "VO" => VanadiumOxide.At(star.Temperature),
         "CN" => Cyanogen.At(star.Temperature) * (0.7 + (0.9 * star.Giantness)),
         "CH" => Methylidyne.At(star.Temperature),

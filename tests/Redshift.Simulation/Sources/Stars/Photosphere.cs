@@ -9,9 +9,9 @@ internal static class Photosphere
 {
     // Total widths in dwarfs, index bands widened to the full wings (K18 of library stars: 0.9 at A0, 4.7 at F0, 8.3 at G2).
     private static readonly Curve CalciumK = new(
-        (2800, 14), (3500, 17), (4400, 21), (5200, 19), (5777, 16), (6550, 9.5), (7200, 6.2), (8100, 3.2), (9700, 0.9), (11500, 0.25), (15000, 0.05), (20000, 0));
+        (2800, 11), (3500, 13), (4400, 15.5), (5200, 15), (5777, 13.5), (6550, 9), (7200, 6.2), (8100, 3.2), (9700, 0.9), (11500, 0.25), (15000, 0.05), (20000, 0));
 
-    private static readonly Curve SodiumD = new((2800, 12), (3300, 9), (3850, 6), (4400, 4.2), (5100, 1.8), (5777, 0.5), (6500, 0.2), (8000, 0));
+    private static readonly Curve SodiumD = new((2800, 11), (3300, 9.5), (3850, 10), (4400, 9), (5100, 3), (5777, 0.5), (6500, 0.2), (8000, 0));
 
     private static readonly Curve CalciumTriplet = new((2800, 3.6), (3500, 5.5), (4500, 7), (5777, 6.5), (6500, 5.5), (8000, 3), (10000, 1), (13000, 0));
 
@@ -33,7 +33,7 @@ internal static class Photosphere
             return;
         var strength = new MetalStrength(star, random);
         var width = IntrinsicWidth(star);
-        foreach (var line in MetalLine.All.Where(line => canvas.Grid.Reaches(line.Vacuum, 300)))
+        foreach (var line in MetalLine.Between(canvas.Grid.Wavelength[0] * 0.999, canvas.Grid.Wavelength[^1] * 1.001))
             canvas.Absorb(line.Vacuum, width, line.SolarWidth * strength.Of(line.Species) * random.Scatter(0.15));
     }
 
@@ -52,7 +52,7 @@ internal static class Photosphere
         var k = CalciumK.At(star.Temperature) * metals * random.Scatter(0.08);
         AbsorbWinged(canvas, 3934.777, k, 0.93);
         AbsorbWinged(canvas, 3969.591, 0.75 * k, 0.92);
-        var sodium = SodiumD.At(star.Temperature) * metals * (1 - (0.4 * star.Giantness)) * random.Scatter(0.15);
+        var sodium = SodiumD.At(star.Temperature) * metals * (1 - (0.55 * Math.Min(1, star.Giantness))) * random.Scatter(0.15);
         AbsorbWinged(canvas, 5891.583, 0.55 * sodium, 0.85);
         AbsorbWinged(canvas, 5897.558, 0.45 * sodium, 0.85);
         var triplet = CalciumTriplet.At(star.Temperature) * metals * (1 + (0.35 * star.Giantness)) * random.Scatter(0.1);
