@@ -1,4 +1,7 @@
 using System.IO.Compression;
+using Redshift.Pipeline.Load;
+using Redshift.Pipeline.Observations;
+using Redshift.Pipeline.Settings;
 using Redshift.Simulation.Samples;
 using Redshift.Testing;
 using Xunit;
@@ -21,6 +24,21 @@ public class SampleNightTests
     [Fact]
     public void The_samples_stay_small() =>
         Assert.InRange(Directory.EnumerateFiles(Repository.PathOf("sample-spectra"), "*", SearchOption.AllDirectories).Sum(path => new FileInfo(path).Length), 1, 3_000_000);
+
+    [Fact]
+    public void Every_row_of_the_table_of_truths_is_read_and_nothing_else()
+    {
+        string[] told = [.. File.ReadLines(Repository.PathOf("sample-spectra", "truth.csv")).Skip(1).Select(line => string.Join(',', line.Split(',')[..2]))];
+        string[] read = [.. Outcomes().Where(outcome => outcome.Observation is not null).Select(outcome => $"{outcome.Observation!.Source},{outcome.Observation.Row}")];
+        Assert.Equal(told.Order(StringComparer.Ordinal), read.Order(StringComparer.Ordinal));
+        Assert.Equal(["slit/interrupted.fits"], Outcomes().Where(outcome => outcome.Reject is not null).Select(outcome => outcome.Reject!.Source));
+    }
+
+    private static IEnumerable<LoadOutcome> Outcomes() =>
+        from name in Files(Repository.PathOf("sample-spectra"))
+        where name != "truth.csv"
+        from outcome in SpectrumLoader.Load(Repository.PathOf("sample-spectra", name), name, new LoadSettings())
+        select outcome;
 
     private static string[] Files(string folder) =>
         [.. Directory.EnumerateFiles(folder, "*", SearchOption.AllDirectories).Select(path => Path.GetRelativePath(folder, path)).Where(path => path != "README.md").Order(StringComparer.Ordinal)];

@@ -26,7 +26,7 @@ internal static class TextLayouts
     }
 
     private static string Error(SimulatedSpectrum spectrum, int i) => spectrum.InverseVariance is not { } inverse ? ""
-        : inverse[i] > 0 ? FormattableString.Invariant($",{1 / Math.Sqrt(inverse[i]):0.000E+0}") : ",";
+        : inverse[i] > 0 ? FormattableString.Invariant($",{1 / Math.Sqrt(inverse[i]):0.000E+0}") : ",nan";
 
     private static StreamWriter Writer(Stream stream) => new(stream, new UTF8Encoding(false), leaveOpen: true);
 }
