@@ -11,7 +11,7 @@ namespace Redshift.Physics.Stars;
 /// <param name="CrossSection">Integrated cross-section of a molecule of the gas, in cm.</param>
 internal readonly record struct Band(double Origin, double Upper, double Lower, double QShare, double CrossSection)
 {
-    private const double Faintest = 0.002;
+    private const double Faintest = 0.003;
 
     /// <summary>Vacuum wavelength of the head in Å.</summary>
     public double HeadWavelength => 1e8 / Head;
@@ -21,39 +21,50 @@ internal readonly record struct Band(double Origin, double Upper, double Lower, 
     /// <summary>Origin of a band whose P or R head stands at a wavenumber.</summary>
     public static double OriginOfHead(double head, double upper, double lower) => head + ((upper + lower) * (upper + lower) / (4 * (upper - lower)));
 
-    /// <summary>Adds absorbers (per hydrogen nucleus, over the continuous opacity) times the cross-section, mean over each grid step.</summary>
-    public void Add(Span<double> ratio, LogWavelengthGrid grid, double kelvin, double absorbersOverOpacity)
+    /// <summary>
+    /// Adds absorbers (per hydrogen nucleus, over the continuous opacity) times the cross-section, mean over each grid step; returns the
+    /// first and last point that it touched.
+    /// </summary>
+    public (int First, int Last) Add(Span<double> ratio, LogWavelengthGrid grid, double kelvin, double absorbersOverOpacity)
     {
         var strength = absorbersOverOpacity * CrossSection;
         var spread = Constants.WavenumberKelvin * Lower / kelvin;
         var curvature = Upper - Lower;
         var extent = 9 / spread * Math.Abs(curvature);
         if (strength / (extent / 9) < Faintest)
-            return;
+            return (int.MaxValue, -1);
         var turn = -(Upper + Lower) / (2 * curvature);
         var far = Math.Pow(Math.Abs(turn) + (3 / Math.Sqrt(spread)), 2) * Math.Abs(curvature);
         var toRed = curvature < 0;
         var (blueEnd, redEnd) = toRed ? (Head, Head - far) : (Head + far, Head);
-        AddBranches(ratio, grid, strength, spread, curvature, turn, (blueEnd, redEnd));
+        return AddBranches(ratio, grid, strength, spread, curvature, turn, (blueEnd, redEnd));
     }
 
-    private void AddBranches(
+    private (int First, int Last) AddBranches(
         Span<double> ratio, LogWavelengthGrid grid, double strength, double spread, double curvature, double turn, (double Blue, double Red) ends)
     {
         var first = Math.Max(0, (int)Math.Floor(grid.Position(1e8 / ends.Blue)));
         var last = Math.Min(grid.Count - 1, (int)Math.Ceiling(grid.Position(1e8 / ends.Red)));
         if (first > last)
-            return;
-        var shrink = Math.Exp(-grid.LnStep);
-        var edge = 1e8 / grid.Wavelength(first - 0.5);
+            return (int.MaxValue, -1);
+        var (head, origin) = (grid.Position(HeadWavelength), grid.Position(1e8 / Origin));
+        var edges = grid.EdgeWavenumbers;
+        var edge = edges[first];
         var before = Cumulative(edge, spread, curvature, turn);
-        for (var i = first; i <= last; i++)
+        for (var i = first; i <= last;)
         {
-            var next = edge * shrink;
+            // Far from head and origin the band is smooth, so steps grow with the distance from them.
+            var length = Math.Min(Math.Max(1, (int)(Math.Min(Math.Abs(i - head), Math.Abs(i - origin)) / 24)), last - i + 1);
+            var next = edges[i + length];
             var after = Cumulative(next, spread, curvature, turn);
-            ratio[i] += strength * Math.Abs(after - before) / (edge - next);
+            var mean = strength * Math.Abs(after - before) / (edge - next);
+            foreach (ref var r in ratio.Slice(i, length))
+                r += mean;
+            i += length;
             (edge, before) = (next, after);
         }
+
+        return (first, last);
     }
 
     // Share of the band's strength between its head (or origin for the Q branch) and a wavenumber.
@@ -62,14 +73,14 @@ internal readonly record struct Band(double Origin, double Upper, double Lower, 
         var fromHead = Math.Max(0, (wavenumber - Head) / curvature);
         var x = Math.Sqrt(fromHead);
         var near = Below(turn + x, spread) - Below(turn - x, spread);
-        var q = QShare > 0 ? 1 - Math.Exp(-spread * Math.Max(0, (wavenumber - Origin) / curvature)) : 0;
+        var q = QShare > 0 ? 1 - FastExponential.OfMinus(spread * Math.Max(0, (wavenumber - Origin) / curvature)) : 0;
         return ((1 - QShare) * near) + (QShare * q);
     }
 
     // Integral of spread |m| exp(−spread m²) up to m, both branches together normalized to one.
     private static double Below(double m, double spread)
     {
-        var half = (1 - Math.Exp(-spread * m * m)) / 2;
+        var half = (1 - FastExponential.OfMinus(spread * m * m)) / 2;
         return m < 0 ? 0.5 - half : 0.5 + half;
     }
 }

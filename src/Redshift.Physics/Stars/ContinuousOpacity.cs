@@ -21,15 +21,19 @@ internal sealed class ContinuousOpacity
         (Element.Find("Ca"), 2028, 2.0e-19, 0, 1), (Element.Find("Ca"), 2930, 6.0e-18, 1.88, 9),
     ];
 
-    // Cross-section per nucleus that the countless weak lines of TiO and water add at 1e6 dyn/cm² below 3400 K: order of magnitude of published
+    // Cross-section per nucleus that the countless weak lines of TiO and water add at 1e6 dyn/cm² below 3600 K: order of magnitude of published
     // Rosseland means (Ferguson et al. 2005, ApJ 623, 585), which fall with pressure as the gaps between lines open.
-    private const double MolecularHaze = 6e-26;
+    private const double MolecularHaze = 2e-25;
+
+    // Share of it that is left at the wavelengths between the bands that are treated one by one.
+    private const double ShareBetweenBands = 0.5;
 
     private readonly Gas _gas;
     private readonly double[] _levels = new double[LastLevel + 1];
     private readonly double[] _edges = new double[MetalEdges.Length];
     private readonly double _free;
     private readonly double _haze;
+    private readonly double _wholeLevels;
     private readonly double _kT;
     private readonly double _negativeIons;
     private readonly double _logTheta;
@@ -39,11 +43,12 @@ internal sealed class ContinuousOpacity
         _gas = gas;
         _kT = Constants.BoltzmannEv * gas.Temperature;
         var theta = Constants.Theta(gas.Temperature);
-        _haze = MolecularHaze * Math.Pow(10, gas.Composition.Metallicity) * Math.Pow(gas.GasPressure / 1e6, 0.7) / (1 + Math.Exp((gas.Temperature - 3400) / 200));
+        _haze = MolecularHaze * Math.Pow(10, gas.Composition.Metallicity) * Math.Pow(gas.GasPressure / 1e6, 0.7) / (1 + Math.Exp((gas.Temperature - 3600) / 250));
         for (var n = 1; n <= LastLevel; n++)
             _levels[n] = Math.Exp(-RydbergEv * (1 - (1.0 / (n * n))) / _kT) / (n * n * n);
         _free = Math.Exp(-RydbergEv / _kT) * _kT / (2 * RydbergEv);
         _negativeIons = 4.158e-10 * gas.ElectronPressure * Math.Pow(theta, 2.5) * Math.Pow(10, 0.754 * theta);
+        _wholeLevels = 1 / Math.Pow(HydrogenLevels.FirstDissolved * HydrogenLevels.LastLine(gas.ElectronDensity), 2);
         _logTheta = Math.Log10(Math.Clamp(theta, 0.4, 2.0));
         for (var i = 0; i < MetalEdges.Length; i++)
             _edges[i] = PerThreshold(MetalEdges[i]);
@@ -56,7 +61,7 @@ internal sealed class ContinuousOpacity
         var atoms = emission * ((1.0449e-26 * Cube(wavelength) * BoundAndFree(wavelength)) + (_negativeIons * NegativeIonBoundFree(wavelength)));
         return (_gas.NeutralHydrogen * (atoms + NegativeIonFreeFree(wavelength) + Rayleigh(wavelength)))
             + (ThomsonCrossSection * _gas.ElectronsPerNucleus)
-            + _haze
+            + (ShareBetweenBands * _haze)
             + (wavelength < 4000 ? emission * Metals(wavelength) : 0);
     }
 
@@ -67,7 +72,7 @@ internal sealed class ContinuousOpacity
         for (var x = 0.9; x < 16; x *= 1.15)
         {
             var weight = x * x * x * x * x * Math.Exp(-x) / ((1 - Math.Exp(-x)) * (1 - Math.Exp(-x)));
-            sum += weight / At(Constants.SecondRadiation / (x * _gas.Temperature));
+            sum += weight / (At(Constants.SecondRadiation / (x * _gas.Temperature)) + ((1 - ShareBetweenBands) * _haze));
             weights += weight;
         }
 
@@ -88,10 +93,8 @@ internal sealed class ContinuousOpacity
     private double DissolvedShare(int lower, double wavelength)
     {
         var inverse = (1.0 / (lower * lower)) - (LymanLimit / wavelength);
-        return inverse <= 0 ? 1 : 1 - Survival(1 / Math.Sqrt(inverse));
+        return inverse <= 0 ? 1 : inverse > _wholeLevels ? 0 : 1 - HydrogenLevels.Survival(1 / Math.Sqrt(inverse), _gas.ElectronDensity);
     }
-
-    private double Survival(double level) => HydrogenLevels.Survival(level, _gas.ElectronDensity);
 
     private static double NegativeIonBoundFree(double wavelength)
     {

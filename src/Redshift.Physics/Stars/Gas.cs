@@ -54,10 +54,9 @@ internal sealed class Gas
 
     public double ElectronsPerNucleus => ElectronPressure / NucleiPressure;
 
-    /// <summary>Layer at a Rosseland optical depth of a grey atmosphere: P = g τ / κ with P and κ both set by the electron pressure.</summary>
-    public static Gas AtDepth(double effectiveTemperature, double logGravity, Composition composition, double opticalDepth)
+    /// <summary>Layer of a temperature at a Rosseland optical depth: P = g τ / κ with P and κ both set by the electron pressure.</summary>
+    public static Gas InBalance(double temperature, double logGravity, Composition composition, double opticalDepth)
     {
-        var temperature = effectiveTemperature * Math.Pow(0.75 * (opticalDepth + (2.0 / 3)), 0.25);
         var target = Math.Log(Math.Pow(10, logGravity) * opticalDepth * HydrogenMassPerNucleus * Constants.AtomicMassGram);
         Gas At(double lnPressure) => new(temperature, Math.Exp(lnPressure), composition);
         double Excess(Gas gas) => Math.Log(gas.GasPressure * new ContinuousOpacity(gas).RosselandMean()) - target;

@@ -14,12 +14,13 @@ internal static class HydrogenLines
     ];
 
     /// <summary>Adds the line-to-continuum opacity ratios of all series.</summary>
-    public static void Add(Span<double> ratio, LogWavelengthGrid grid, Gas gas, Func<double, double> continuousOpacity, double dopplerCm)
+    public static void Add(Span<double> ratio, LogWavelengthGrid grid, Layer layer)
     {
-        for (var lower = 1; lower <= 6; lower++)
+        var doppler = layer.DopplerCm(Element.Hydrogen);
+        for (var lower = 1; lower <= 5; lower++)
         {
             for (var upper = lower + 1; upper <= LastUpper; upper++)
-                AddLine(ratio, grid, new Line(lower, upper, gas, dopplerCm, grid.LnStep), continuousOpacity);
+                AddLine(ratio, grid, new Line(lower, upper, layer.Gas, doppler, grid.LnStep), layer);
         }
     }
 
@@ -52,10 +53,10 @@ internal static class HydrogenLines
 
     private static double Term(int n) => RydbergHydrogen / ((n - 7e-6) * (n - 7e-6));
 
-    private static void AddLine(Span<double> ratio, LogWavelengthGrid grid, Line line, Func<double, double> continuousOpacity)
+    private static void AddLine(Span<double> ratio, LogWavelengthGrid grid, in Line line, Layer layer)
     {
-        var strength = line.Strength / continuousOpacity(line.Center);
-        if (line.Center < 100 || strength * line.Profile(0) < FaintestRatio)
+        var strength = line.Strength / layer.ContinuousOpacityAt(Nodes.Place(Math.Log(line.Center)));
+        if (strength * line.Profile(0) < FaintestRatio)
             return;
         var reach = line.Reach(FaintestRatio / strength);
         var middle = grid.Position(line.Center);
@@ -71,12 +72,14 @@ internal static class HydrogenLines
 
     private readonly struct Line
     {
-        // S(β) = 1.5/(9.9 + β^2.5): Holtsmark wings of the ions, normalized to one over both sides. Electrons double the far wings only;
-        // where lines are half deep they mostly fill the centre (Edmonds, Schlüter & Wells 1967, MmRAS 71, 271).
-        private const double Wing = 1.5;
+        // S(β) = w/(b + β^2.5), normalized to one over both sides. Holtsmark wings of the ions have w = 1.5, doubled by electrons in the far
+        // wings only; where lines are half deep the effect of electrons is smaller (Edmonds, Schlüter & Wells 1967, MmRAS 71, 271).
+        private const double Wing = 1.9;
         private static readonly double Core = Math.Pow(2.643 * Wing, 1 / 0.6);
         private readonly double _scale;
         private readonly double _smoothing;
+        private readonly double _perScaleSquare;
+        private readonly double _starkFactor;
         private readonly double _lorentz;
 
         public Line(int lower, int upper, Gas gas, double dopplerCm, double lnStep)
@@ -84,8 +87,11 @@ internal static class HydrogenLines
             Center = Wavelength(lower, upper);
             var field = 1.25e-9 * Math.Pow(gas.ElectronDensity, 2.0 / 3);
             _scale = field * Scale(lower, upper);
-            _smoothing = Center * Math.Max(dopplerCm / Constants.LightSpeedCm, lnStep);
-            _lorentz = CollisionWidth(gas, Center, lower, upper);
+            _perScaleSquare = 1 / (_scale * _scale);
+            _starkFactor = Wing / _scale;
+            var smoothing = Center * Math.Max(dopplerCm / Constants.LightSpeedCm, lnStep);
+            _smoothing = smoothing * smoothing;
+            _lorentz = CollisionWidth(gas, Center, lower, upper) / Math.PI;
             var excitation = 13.598 * (1 - (1.0 / (lower * lower)));
             var population = gas.NeutralHydrogen * lower * lower * Math.Exp(-excitation / (Constants.BoltzmannEv * gas.Temperature));
             var emission = 1 - Math.Exp(-Constants.SecondRadiation / (Center * gas.Temperature));
@@ -99,14 +105,13 @@ internal static class HydrogenLines
 
         public double Profile(double offset)
         {
-            var square = (offset * offset) + (_smoothing * _smoothing);
-            var beta2 = square / (_scale * _scale);
-            var stark = Wing / (Core + (beta2 * Math.Sqrt(Math.Sqrt(beta2)))) / _scale;
-            return stark + (_lorentz / (Math.PI * square));
+            var square = (offset * offset) + _smoothing;
+            var beta2 = square * _perScaleSquare;
+            return (_starkFactor / (Core + (beta2 * Math.Sqrt(Math.Sqrt(beta2))))) + (_lorentz / square);
         }
 
         public double Reach(double profile) =>
-            Math.Min(0.12 * Center, Math.Pow(Wing * Math.Pow(_scale, 1.5) / profile, 0.4) + Math.Sqrt(_lorentz / (Math.PI * profile)));
+            Math.Min(0.12 * Center, Math.Pow(Wing * Math.Pow(_scale, 1.5) / profile, 0.4) + Math.Sqrt(_lorentz / profile));
 
         private static double Scale(int lower, int upper)
         {

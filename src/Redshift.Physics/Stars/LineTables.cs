@@ -6,11 +6,17 @@ namespace Redshift.Physics.Stars;
 /// <summary>The published line tables, with the strengths that they imply.</summary>
 internal static class LineTables
 {
-    private static readonly string[] Numerals = ["I", "II", "III", "IV", "V", "VI"];
-    private static readonly StellarParameters Sun = new(5772, 4.44, 0);
+    /// <summary>The Sun, whose line widths calibrate the strengths.</summary>
+    public static readonly StellarParameters Sun = new(5772, 4.44, 0);
 
-    /// <summary>Lines of the solar spectrum and of hot stars.</summary>
+    private static readonly string[] Numerals = ["I", "II", "III", "IV", "V", "VI"];
+    private static readonly List<(Element Element, int Stage)> IonList = [];
+
+    /// <summary>Lines of the solar spectrum, of hot stars and of the ultraviolet.</summary>
     public static readonly SpectralLine[] All = [.. SolarLines(), .. HotLines(), .. UltravioletLines()];
+
+    /// <summary>Ions that the lines belong to.</summary>
+    public static IReadOnlyList<(Element Element, int Stage)> Ions => IonList;
 
     private static IEnumerable<SpectralLine> SolarLines()
     {
@@ -30,27 +36,30 @@ internal static class LineTables
         }
     }
 
-    private static IEnumerable<SpectralLine> UltravioletLines() => Rows("ultraviolet-lines.csv").Select(row =>
-    {
-        var (element, stage) = Species(row[0]);
-        return new SpectralLine(element, stage, Number(row[1]), Number(row[3]), Math.Pow(10, Number(row[2])));
-    });
+    private static IEnumerable<SpectralLine> UltravioletLines() =>
+        Rows("ultraviolet-lines.csv").Select(r => new SpectralLine(Ion(r[0]), Number(r[1]), Number(r[3]), Math.Pow(10, Number(r[2]))));
 
     // The g f that gives the published width in the star in which it was measured.
     private static SpectralLine Calibrated(string[] row, Photosphere star, double widthAngstrom, double excitation)
     {
-        var (element, stage) = Species(row[0]);
+        var ion = Ion(row[0]);
         var wavelength = AirWavelength.ToVacuum(Number(row[1]));
-        var unit = new SpectralLine(element, stage, wavelength, excitation, 1);
-        var doppler = wavelength * star.Lines.DopplerCm(element) / Constants.LightSpeedCm;
-        var width = widthAngstrom / (doppler * star.StrongestDepth(wavelength));
-        return unit with { Weight = CurveOfGrowth.Invert(width, star.Lines.Damping(unit)) * star.HalfDepthRatio(wavelength) / unit.CentralRatio(star.Lines) };
+        var absorbers = new Absorbers(star.Lines, IonList[ion].Element, IonList[ion].Stage);
+        var place = Nodes.Place(Math.Log(wavelength));
+        var width = widthAngstrom / (wavelength * absorbers.Doppler * star.StrongestDepth(place));
+        var central = CurveOfGrowth.Invert(width, absorbers.Damping(wavelength)) * star.HalfDepthRatio(place) * star.Lines.ContinuousOpacityAt(place);
+        return new SpectralLine(ion, wavelength, excitation, central / absorbers.CentralOpacity(wavelength, excitation));
     }
 
-    private static (Element Element, int Stage) Species(string name)
+    private static int Ion(string name)
     {
         var parts = name.Split(' ');
-        return (Element.Find(parts[0]), Array.IndexOf(Numerals, parts[1]));
+        var species = (Element.Find(parts[0]), Array.IndexOf(Numerals, parts[1]));
+        var known = IonList.IndexOf(species);
+        if (known >= 0)
+            return known;
+        IonList.Add(species);
+        return IonList.Count - 1;
     }
 
     private static double Number(string text) => double.Parse(text, CultureInfo.InvariantCulture);

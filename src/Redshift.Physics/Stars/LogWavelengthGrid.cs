@@ -6,6 +6,8 @@ namespace Redshift.Physics.Stars;
 /// </summary>
 public sealed class LogWavelengthGrid
 {
+    private double[]? _edges;
+
     /// <summary>Creates a grid.</summary>
     /// <param name="lnStart">Natural logarithm of the first vacuum wavelength in Å.</param>
     /// <param name="lnStep">Step in ln λ, above zero; times c it is the step in velocity.</param>
@@ -49,4 +51,7 @@ public sealed class LogWavelengthGrid
     /// <param name="angstrom">Vacuum wavelength in Å.</param>
     /// <returns>The index, between points and outside the grid as well.</returns>
     public double Position(double angstrom) => (Math.Log(angstrom) - LnStart) / LnStep;
+
+    /// <summary>Vacuum wavenumbers in cm⁻¹ of the borders between points; border i lies half a step before point i.</summary>
+    internal double[] EdgeWavenumbers => _edges ??= [.. Enumerable.Range(0, Count + 1).Select(i => 1e8 / Wavelength(i - 0.5))];
 }

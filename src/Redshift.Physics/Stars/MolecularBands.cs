@@ -14,15 +14,20 @@ internal static class MolecularBands
 
     private static void AddSystem(Span<double> ratio, double[] scratch, LogWavelengthGrid grid, Layer layer, BandSystem system, double abundance)
     {
-        Array.Clear(scratch);
+        var (first, last) = (scratch.Length, -1);
         foreach (var band in system.Bands(layer.Gas.Temperature))
-            band.Add(scratch, grid, layer.Gas.Temperature, abundance / layer.ContinuousOpacityAt(band.HeadWavelength));
-        for (var i = 0; i < scratch.Length; i++)
+        {
+            var absorbers = abundance / layer.ContinuousOpacityAt(Nodes.Place(Math.Log(band.HeadWavelength)));
+            var (from, to) = band.Add(scratch, grid, layer.Gas.Temperature, absorbers);
+            (first, last) = (Math.Min(first, from), Math.Max(last, to));
+        }
+
+        for (var i = first; i <= last; i++)
         {
             // Separate saturated lines let light through between them: mean of a random band (Goody 1952) with the system's ratio
             // of line spacing to Doppler width.
-            if (scratch[i] > 0)
-                ratio[i] += scratch[i] / Math.Sqrt(1 + (system.SpacingOverWidth * scratch[i]));
+            ratio[i] += scratch[i] / Math.Sqrt(1 + (system.SpacingOverWidth * scratch[i]));
+            scratch[i] = 0;
         }
     }
 
@@ -35,7 +40,7 @@ internal static class MolecularBands
     {
         foreach (var (center, sigma, strength) in WaterBands)
         {
-            var peak = abundance * strength / (sigma * Math.Sqrt(2 * Math.PI)) / layer.ContinuousOpacityAt(1e8 / center);
+            var peak = abundance * strength / (sigma * Math.Sqrt(2 * Math.PI)) / layer.ContinuousOpacityAt(Nodes.Place(Math.Log(1e8 / center)));
             if (peak < 1e-3)
                 continue;
             var first = Math.Max(0, (int)grid.Position(1e8 / (center + (4 * sigma))));

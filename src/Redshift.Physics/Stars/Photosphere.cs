@@ -4,57 +4,84 @@ namespace Redshift.Physics.Stars;
 internal sealed class Photosphere
 {
     private const double ContinuumDepth = 2.0 / 3;
+
+    // Rosseland depths of the layers that stand for the formation of each kind of feature.
     private const double ContinuumLayerDepth = 0.35;
     private const double LineDepth = 0.1;
+    private const double MolecularDepth = 0.03;
     private const double HydrogenDepth = 0.7;
 
-    // Line cores come from above the grey surface temperature of 0.81 T: measured cores of strong lines in the Sun and in A stars.
-    private const double SurfaceTemperature = 0.66;
-    private readonly Layer _continuum;
+    // Molecules cool the outer layers of giants below the grey temperature: per unit of log g, in effective temperatures.
+    private const double MolecularCooling = 0.012;
+    private readonly double[] _flux = new double[Nodes.Count];
+    private readonly double[] _strongest = new double[Nodes.Count];
+    private readonly double[] _half = new double[Nodes.Count];
 
     public Photosphere(StellarParameters star)
     {
         Star = star;
         var composition = Composition.Of(star);
-        Layer At(double depth) => new(Gas.AtDepth(star.TemperatureK, star.LogGravity, composition, depth), star);
-        _continuum = At(ContinuumLayerDepth);
+        Layer At(double depth, double cooling = 0) =>
+            new(Gas.InBalance(GreyTemperature(depth) - (cooling * star.TemperatureK), star.LogGravity, composition, depth), star);
         Lines = At(LineDepth);
+        Molecules = At(MolecularDepth, MolecularCooling * Math.Max(0, 4.5 - star.LogGravity));
         Hydrogen = At(HydrogenDepth);
+        Tabulate(At(ContinuumLayerDepth));
     }
 
     public StellarParameters Star { get; }
 
-    /// <summary>Where metal lines and molecular bands form.</summary>
+    /// <summary>Where metal lines form.</summary>
     public Layer Lines { get; }
+
+    /// <summary>Where molecular bands form.</summary>
+    public Layer Molecules { get; }
 
     /// <summary>Where the wings of hydrogen lines form.</summary>
     public Layer Hydrogen { get; }
 
-    /// <summary>Continuum flux F_λ in arbitrary units.</summary>
-    public double ContinuumFlux(double wavelength) => Planck(wavelength, ContinuumTemperature(wavelength));
-
-    /// <summary>Depth that an infinitely strong line would have at a wavelength, 0 to 1.</summary>
-    public double StrongestDepth(double wavelength) =>
-        1 - (Planck(wavelength, SurfaceTemperature * Star.TemperatureK) / ContinuumFlux(wavelength));
-
-    /// <summary>
-    /// Opacity ratio at which half of the strongest depth is reached: weak lines feel the slope of the grey temperature where the
-    /// continuum forms, d ln B/dη = −(G/4) τ/(τ + 2/3) with G = d ln B/d ln T, strong ones its whole range.
-    /// </summary>
-    public double HalfDepthRatio(double wavelength)
+    // Cores of strong lines come from layers cooler than the grey surface at 0.84 T: from measured cores in the Sun, of Balmer lines in A stars, and in
+    // hot stars, where scattering deepens them.
+    private double SurfaceTemperature
     {
-        var x = Constants.SecondRadiation / (wavelength * ContinuumTemperature(wavelength));
-        var depth = ContinuumDepthAt(wavelength);
-        return StrongestDepth(wavelength) * 4 * (1 + (2.0 / 3 / depth)) * (1 - Math.Exp(-x)) / x;
+        get
+        {
+            var warm = Math.Clamp((Star.TemperatureK - 6500) / 1500, 0, 1);
+            var hot = Math.Clamp((Star.TemperatureK - 11000) / 11000, 0, 1);
+            return Star.TemperatureK * (0.70 + (0.07 * warm) - (0.13 * hot));
+        }
     }
+
+    /// <summary>Continuum flux F_λ in arbitrary units at a place between nodes.</summary>
+    public double ContinuumFlux(double place) => Nodes.At(_flux, place);
+
+    /// <summary>Depth that an infinitely strong line would have at a place between nodes, 0 to 1.</summary>
+    public double StrongestDepth(double place) => Nodes.At(_strongest, place);
+
+    /// <summary>Opacity ratio at which half of the strongest depth is reached, at a place between nodes.</summary>
+    public double HalfDepthRatio(double place) => Nodes.At(_half, place);
 
     private static double Planck(double wavelength, double kelvin) =>
         Math.Pow(wavelength / 5500, -5) / (Math.Exp(Constants.SecondRadiation / (wavelength * kelvin)) - 1);
 
-    private double ContinuumTemperature(double wavelength) =>
-        Star.TemperatureK * Math.Pow(0.75 * (ContinuumDepthAt(wavelength) + (2.0 / 3)), 0.25);
+    private void Tabulate(Layer continuum)
+    {
+        for (var i = 0; i < Nodes.Count; i++)
+        {
+            // Opacity grows inwards, which keeps transparent wavelengths from very deep layers.
+            var depth = Math.Min(3, ContinuumDepth * continuum.RosselandMean / continuum.ContinuousOpacityAtNode(i));
+            var wavelength = Nodes.Wavelength(i);
+            var temperature = GreyTemperature(depth);
+            _flux[i] = Planck(wavelength, temperature);
+            _strongest[i] = 1 - (Planck(wavelength, SurfaceTemperature) / _flux[i]);
+            _half[i] = _strongest[i] / InitialSlope(depth, Constants.SecondRadiation / (wavelength * temperature));
+        }
+    }
 
-    // Rosseland depth at which the continuum forms. Opacity grows inwards, which keeps transparent wavelengths from very deep layers.
-    private double ContinuumDepthAt(double wavelength) =>
-        Math.Min(3, ContinuumDepth * _continuum.RosselandMean / _continuum.ContinuousOpacityAt(wavelength));
+    // Depth of a weak line over its opacity ratio, from the slope of the grey temperature where the continuum forms:
+    // −d ln B/dη = (G/4) τ/(τ + 2/3), G = d ln B/d ln T.
+    private static double InitialSlope(double depth, double photonOverKT) =>
+        photonOverKT / (1 - Math.Exp(-photonOverKT)) / 4 * depth / (depth + (2.0 / 3));
+
+    private double GreyTemperature(double depth) => Star.TemperatureK * Math.Pow(0.75 * (depth + (2.0 / 3)), 0.25);
 }

@@ -7,6 +7,7 @@ internal sealed class SpectrumBuilder(Photosphere star, LogWavelengthGrid grid)
 {
     private const double FaintestWing = 0.01;
     private const double FaintestWidth = 0.002;
+    private const double HottestMolecules = 6800;
     private const int ProfileReach = 4;
     private static readonly double[][] Gaussians = [.. Enumerable.Range(0, 33).Select(i => Gaussian((i - 16) / 32.0))];
     private readonly double[] _ratio = new double[grid.Count];
@@ -15,11 +16,12 @@ internal sealed class SpectrumBuilder(Photosphere star, LogWavelengthGrid grid)
 
     public StellarSpectrum Build()
     {
-        AddHydrogen();
-        foreach (var line in LineTables.All)
-            AddLine(line);
-        if (star.Star.TemperatureK < 6800)
-            MolecularBands.Add(_ratio, grid, star.Lines);
+        if (star.Star.Variant != StellarVariant.WhiteDwarfDB)
+            HydrogenLines.Add(_ratio, grid, star.Hydrogen);
+        AddLines();
+        if (star.Star.TemperatureK < HottestMolecules)
+            MolecularBands.Add(_ratio, grid, star.Molecules);
+        LineHaze.Add(_ratio, grid, star);
         ChromosphericEmission.Add(_emission, grid, star.Star);
         return Transfer();
     }
@@ -27,32 +29,33 @@ internal sealed class SpectrumBuilder(Photosphere star, LogWavelengthGrid grid)
     private static double[] Gaussian(double offset) =>
         [.. Enumerable.Range(-ProfileReach, (2 * ProfileReach) + 1).Select(i => Math.Exp(-0.5 * (i - offset) * (i - offset)) / Math.Sqrt(2 * Math.PI))];
 
-    private void AddHydrogen()
+    private void AddLines()
     {
-        if (star.Star.Variant == StellarVariant.WhiteDwarfDB)
-            return;
-        var layer = star.Hydrogen;
-        HydrogenLines.Add(_ratio, grid, layer.Gas, layer.ContinuousOpacityAt, layer.DopplerCm(Element.Hydrogen));
+        var lines = LineTables.All;
+        var ions = LineTables.Ions.Select(i => new Absorbers(star.Lines, i.Element, i.Stage)).ToArray();
+        foreach (ref readonly var line in lines.AsSpan())
+            AddLine(line, ions[line.Ion]);
     }
 
-    private void AddLine(SpectralLine line)
+    private void AddLine(in SpectralLine line, in Absorbers ion)
     {
-        var position = grid.Position(line.Wavelength);
+        var position = (line.LnWavelength - grid.LnStart) / grid.LnStep;
         if (position < 0 || position > grid.Count - 1)
             return;
-        var layer = star.Lines;
-        var central = line.CentralRatio(layer) / star.HalfDepthRatio(line.Wavelength);
-        var doppler = layer.DopplerCm(line.Element) / Constants.LightSpeedCm / grid.LnStep;
+        var place = Nodes.Place(line.LnWavelength);
+        var half = star.HalfDepthRatio(place);
+        var central = line.Weight * ion.CentralOpacity(line.Wavelength, line.Excitation) / (star.Lines.ContinuousOpacityAt(place) * half);
+        var doppler = ion.Doppler / grid.LnStep;
         if (central * doppler < FaintestWidth)
             return;
-        var damping = layer.Damping(line);
+        var damping = ion.Damping(line.Wavelength);
         var k = CurveOfGrowth.WingStrength(central, damping);
         var width = CurveOfGrowth.CoreInsideWings(central, damping);
         if (Math.Sqrt(k) * doppler < 0.7)
             width += CurveOfGrowth.Wings(central, damping);
         else
-            AddWings(position, k * doppler * doppler * star.HalfDepthRatio(line.Wavelength), CurveOfGrowth.WingStart * doppler);
-        AddNarrow(position, width * doppler * star.StrongestDepth(line.Wavelength));
+            AddWings(position, k * doppler * doppler * half, CurveOfGrowth.WingStart * doppler);
+        AddNarrow(position, width * doppler * star.StrongestDepth(place));
     }
 
     // Strength and start in units of grid steps.
@@ -76,29 +79,29 @@ internal sealed class SpectrumBuilder(Photosphere star, LogWavelengthGrid grid)
 
     private StellarSpectrum Transfer()
     {
-        const int node = 16;
+        const int block = 16;
         var relative = new float[grid.Count];
         var continuum = new float[grid.Count];
-        var unit = star.ContinuumFlux(5500);
-        for (var first = 0; first < grid.Count; first += node)
+        var unit = star.ContinuumFlux(Nodes.Place(Math.Log(5500)));
+        for (var first = 0; first < grid.Count; first += block)
         {
-            var (here, next) = (At(first, unit), At(first + node, unit));
-            var step = (next - here) * (1f / node);
-            for (var i = first; i < Math.Min(first + node, grid.Count); i++, here += step)
+            var (here, next) = (At(first, unit), At(first + block, unit));
+            var step = (next - here) * (1f / block);
+            for (var i = first; i < Math.Min(first + block, grid.Count); i++, here += step)
             {
                 continuum[i] = here.X;
                 relative[i] = (float)(Residual(_ratio[i] / here.Z, here.Y, _narrow[i]) + _emission[i]);
             }
         }
 
-        return new StellarSpectrum(star.Star, relative, continuum);
+        return new StellarSpectrum(star.Star, Rotation.Broaden(relative, Rotation.SigmaSteps(star.Star, grid)), continuum);
     }
 
     // Continuum, strongest depth and half-depth ratio, smooth enough to be interpolated.
     private Vector3 At(int index, double unit)
     {
-        var wavelength = grid.Wavelength(index);
-        return new((float)(star.ContinuumFlux(wavelength) / unit), (float)star.StrongestDepth(wavelength), (float)star.HalfDepthRatio(wavelength));
+        var place = Nodes.Place(grid.LnStart + (index * grid.LnStep));
+        return new((float)(star.ContinuumFlux(place) / unit), (float)star.StrongestDepth(place), (float)star.HalfDepthRatio(place));
     }
 
     // Narrow lines lose contrast where wings or bands have already taken the light away.

@@ -1,0 +1,33 @@
+namespace Redshift.Physics.Stars;
+
+/// <summary>
+/// The smooth part of line blanketing: weak lines of neutral iron-peak atoms below the limit of the tables, crowded in the blue and
+/// ultraviolet.
+/// </summary>
+internal static class LineHaze
+{
+    // Opacity ratio in the Sun at 4000 Å and the wavelength over which it falls by e: what the listed lines leave of the blocked light of Allen 1973,
+    // Astrophysical Quantities, section 80.
+    private const double SolarRatio = 0.10;
+    private const double ScaleLength = 600;
+    private const double Excitation = 2.8;
+    private const double LastWavelength = 6500;
+    private const int Block = 32;
+    private static readonly Element Iron = Element.Find("Fe");
+    private static readonly double SolarOpacityRatio = OpacityRatio(new Photosphere(LineTables.Sun).Lines, 4000);
+
+    public static void Add(Span<double> ratio, LogWavelengthGrid grid, Photosphere star)
+    {
+        var last = Math.Min(ratio.Length - Block, (int)grid.Position(LastWavelength));
+        for (var i = Math.Max(0, (int)grid.Position(1900)); i < last; i += Block)
+        {
+            var wavelength = grid.Wavelength(i + (Block / 2));
+            var haze = SolarRatio * Math.Exp((4000 - Math.Max(wavelength, 2700)) / ScaleLength) * OpacityRatio(star.Lines, wavelength) / SolarOpacityRatio;
+            foreach (ref var r in ratio.Slice(i, Block))
+                r += haze;
+        }
+    }
+
+    private static double OpacityRatio(Layer layer, double wavelength) =>
+        new Absorbers(layer, Iron, 0).CentralOpacity(wavelength, Excitation) / layer.ContinuousOpacityAt(Nodes.Place(Math.Log(wavelength)));
+}
