@@ -12,11 +12,11 @@ internal readonly struct Absorbers
     {
         var gas = layer.Gas;
         var doppler = layer.DopplerCm(element);
-        Doppler = doppler / Constants.LightSpeedCm;
-        _kT = Constants.BoltzmannEv * gas.Temperature;
-        _radiation = Constants.SecondRadiation / gas.Temperature;
+        Doppler = doppler / Cgs.LightSpeed;
+        _kT = Cgs.BoltzmannEv * gas.Temperature;
+        _radiation = Cgs.SecondRadiation / gas.Temperature;
         _perWeight = gas.AbundanceOf(element) * gas.Fraction(element, stage) / element.Partition[stage]
-            * Constants.ClassicalCrossSection * Constants.LightSpeedCm * 1e-8 / (Math.Sqrt(Math.PI) * doppler);
+            * Cgs.ClassicalCrossSection * Cgs.LightSpeed * 1e-8 / (Math.Sqrt(Math.PI) * doppler);
         _damping = DampingRate(gas, element, stage) * 1e-8 / (4 * Math.PI * doppler);
     }
 

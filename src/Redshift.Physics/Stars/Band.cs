@@ -13,8 +13,8 @@ internal readonly record struct Band(double Origin, double Upper, double Lower, 
 {
     private const double Faintest = 0.003;
 
-    /// <summary>Vacuum wavelength of the head in Å.</summary>
-    public double HeadWavelength => 1e8 / Head;
+    /// <summary>Vacuum wavelength of the origin in Å.</summary>
+    public double Wavelength => 1e8 / Origin;
 
     private double Head => Origin - ((Upper + Lower) * (Upper + Lower) / (4 * (Upper - Lower)));
 
@@ -28,16 +28,23 @@ internal readonly record struct Band(double Origin, double Upper, double Lower, 
     public (int First, int Last) Add(Span<double> ratio, LogWavelengthGrid grid, double kelvin, double absorbersOverOpacity)
     {
         var strength = absorbersOverOpacity * CrossSection;
-        var spread = Constants.WavenumberKelvin * Lower / kelvin;
+        var spread = Cgs.WavenumberKelvin * Lower / kelvin;
         var curvature = Upper - Lower;
-        var extent = 9 / spread * Math.Abs(curvature);
-        if (strength / (extent / 9) < Faintest)
+        var extent = Math.Abs(curvature) / spread;
+        if (strength < Faintest * extent)
             return (int.MaxValue, -1);
         var turn = -(Upper + Lower) / (2 * curvature);
-        var far = Math.Pow(Math.Abs(turn) + (3 / Math.Sqrt(spread)), 2) * Math.Abs(curvature);
-        var toRed = curvature < 0;
-        var (blueEnd, redEnd) = toRed ? (Head, Head - far) : (Head + far, Head);
-        return AddBranches(ratio, grid, strength, spread, curvature, turn, (blueEnd, redEnd));
+        return AddBranches(ratio, grid, strength, spread, curvature, turn, Ends(3 / Math.Sqrt(spread), curvature, turn));
+    }
+
+    // Highest and lowest wavenumber of the lines with |m| up to a last one; the head counts only if it is among them.
+    private (double Blue, double Red) Ends(double last, double curvature, double turn)
+    {
+        var (p, r) = (Origin - ((Upper + Lower) * last) + (curvature * last * last), Origin + ((Upper + Lower) * last) + (curvature * last * last));
+        var (blue, red) = (Math.Max(p, r), Math.Min(p, r));
+        if (Math.Abs(turn) < last)
+            (blue, red) = (Math.Max(blue, Head), Math.Min(red, Head));
+        return (blue, Math.Max(red, Origin / 2));
     }
 
     private (int First, int Last) AddBranches(
@@ -47,7 +54,7 @@ internal readonly record struct Band(double Origin, double Upper, double Lower, 
         var last = Math.Min(grid.Count - 1, (int)Math.Ceiling(grid.Position(1e8 / ends.Red)));
         if (first > last)
             return (int.MaxValue, -1);
-        var (head, origin) = (grid.Position(HeadWavelength), grid.Position(1e8 / Origin));
+        var (head, origin) = (grid.Position(1e8 / Math.Clamp(Head, Origin / 2, 2 * Origin)), grid.Position(1e8 / Origin));
         var edges = grid.EdgeWavenumbers;
         var edge = edges[first];
         var before = Cumulative(edge, spread, curvature, turn);

@@ -1,3 +1,5 @@
+using Redshift.Physics.Air;
+
 namespace Redshift.Physics.Stars;
 
 /// <summary>Electronic state of a molecule, constants in cm⁻¹.</summary>
@@ -35,6 +37,7 @@ internal sealed record BandSystem(
 {
     private const int LastVibration = 7;
     private const double FaintestShare = 0.004;
+    private const double LowestOrigin = 3000;
 
     // The one-layer model makes bands of metal oxides too strong: published oscillator strengths are scaled by this.
     private const double Oxide = 0.17;
@@ -82,7 +85,7 @@ internal sealed record BandSystem(
     {
         var population = LowerWeight / Molecule.VibrationalPartition(kelvin);
         foreach (var (band, term) in AllBands)
-            yield return band with { CrossSection = band.CrossSection * population * Math.Exp(-Constants.WavenumberKelvin * term / kelvin) };
+            yield return band with { CrossSection = band.CrossSection * population * Math.Exp(-Cgs.WavenumberKelvin * term / kelvin) };
     }
 
     private IEnumerable<(Band Band, double LowerTerm)> ComputeBands()
@@ -91,11 +94,12 @@ internal sealed record BandSystem(
         {
             for (var upper = 0; upper <= LastVibration; upper++)
             {
-                var strength = OscillatorStrength * Constants.ClassicalCrossSection * FranckCondon(upper, lower);
+                var strength = OscillatorStrength * Cgs.ClassicalCrossSection * FranckCondon(upper, lower);
                 foreach (var (air, share) in Marks)
                 {
-                    if (strength > FaintestShare * OscillatorStrength * Constants.ClassicalCrossSection)
-                        yield return (BandAt(air, upper, lower, strength * share), LowerEnergy + Lower.Term(lower));
+                    var band = BandAt(air, upper, lower, strength * share);
+                    if (strength > FaintestShare * OscillatorStrength * Cgs.ClassicalCrossSection && band.Origin > LowestOrigin)
+                        yield return (band, LowerEnergy + Lower.Term(lower));
                 }
             }
         }
@@ -103,13 +107,15 @@ internal sealed record BandSystem(
 
     private Band BandAt(double markAir, int upper, int lower, double crossSection)
     {
-        var mark = 1e8 / AirWavelength.ToVacuum(markAir);
+        var mark = 1e8 / AirRefraction.ToVacuum(markAir);
         var origin = (AtOrigin ? mark : Band.OriginOfHead(mark, Upper.RotationAt(0), Lower.RotationAt(0))) + Upper.Term(upper) - Lower.Term(lower);
         return new Band(origin, Upper.RotationAt(upper), Lower.RotationAt(lower), QShare, crossSection);
     }
 
-    // Overlap of two displaced harmonic oscillators: exp(−S) S^|d| n!/(n + |d|)! L_n^|d|(S)², S from the bond lengths r ∝ (μB)^(−1/2).
-    private double FranckCondon(int upper, int lower)
+    /// <summary>
+    /// Overlap of two displaced harmonic oscillators: exp(−S) S^|d| n!/(n + |d|)! L_n^|d|(S)², S from the bond lengths r ∝ (μB)^(−1/2).
+    /// </summary>
+    public double FranckCondon(int upper, int lower)
     {
         const double lengthSquare = 16.857629;
         var mass = Molecule.ReducedMass;

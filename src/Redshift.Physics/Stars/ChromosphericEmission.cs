@@ -1,10 +1,11 @@
+using Redshift.Physics.Constants;
+using Redshift.Physics.Hydrogen;
+
 namespace Redshift.Physics.Stars;
 
 /// <summary>Emission lines of stars with a disc or an active chromosphere, as Gaussians of given equivalent widths.</summary>
 internal static class ChromosphericEmission
 {
-    private const double SpeedOfLight = 299792.458;
-
     // Equivalent widths of H alpha, beta, gamma, delta, epsilon in Å: Be stars have steep decrements, flare stars flat ones
     // (Gray & Corbally 2009; Gizis, Reid & Hawley 2002, AJ 123, 3356 for dMe).
     private static readonly double[] Disc = [32, 4.5, 1.5, 0.6, 0.3];
@@ -26,12 +27,12 @@ internal static class ChromosphericEmission
     private static void AddBalmer(Span<double> emission, LogWavelengthGrid grid, double[] widths, double sigmaKms)
     {
         for (var i = 0; i < widths.Length; i++)
-            AddLine(emission, grid, HydrogenLines.Wavelength(2, 3 + i), widths[i], sigmaKms);
+            AddLine(emission, grid, HydrogenSeries.Balmer.Line(3 + i).VacuumAngstrom, widths[i], sigmaKms);
     }
 
     private static void AddLine(Span<double> emission, LogWavelengthGrid grid, double wavelength, double width, double sigmaKms)
     {
-        var sigma = Math.Max(sigmaKms / SpeedOfLight / grid.LnStep, 1);
+        var sigma = Math.Max(sigmaKms / Codata2022.SpeedOfLightKmS / grid.LnStep, 1);
         var peak = width / (wavelength * grid.LnStep * sigma * Math.Sqrt(2 * Math.PI));
         var position = grid.Position(wavelength);
         var last = Math.Min(grid.Count - 1, (int)(position + (5 * sigma)));

@@ -41,8 +41,8 @@ internal sealed class ContinuousOpacity
     public ContinuousOpacity(Gas gas)
     {
         _gas = gas;
-        _kT = Constants.BoltzmannEv * gas.Temperature;
-        var theta = Constants.Theta(gas.Temperature);
+        _kT = Cgs.BoltzmannEv * gas.Temperature;
+        var theta = Cgs.Theta(gas.Temperature);
         _haze = MolecularHaze * Math.Pow(10, gas.Composition.Metallicity) * Math.Pow(gas.GasPressure / 1e6, 0.7) / (1 + Math.Exp((gas.Temperature - 3600) / 250));
         for (var n = 1; n <= LastLevel; n++)
             _levels[n] = Math.Exp(-RydbergEv * (1 - (1.0 / (n * n))) / _kT) / (n * n * n);
@@ -57,7 +57,7 @@ internal sealed class ContinuousOpacity
     /// <summary>Opacity at a vacuum wavelength in Å.</summary>
     public double At(double wavelength)
     {
-        var emission = 1 - Math.Exp(-Constants.SecondRadiation / (wavelength * _gas.Temperature));
+        var emission = 1 - Math.Exp(-Cgs.SecondRadiation / (wavelength * _gas.Temperature));
         var atoms = emission * ((1.0449e-26 * Cube(wavelength) * BoundAndFree(wavelength)) + (_negativeIons * NegativeIonBoundFree(wavelength)));
         return (_gas.NeutralHydrogen * (atoms + NegativeIonFreeFree(wavelength) + Rayleigh(wavelength)))
             + (ThomsonCrossSection * _gas.ElectronsPerNucleus)
@@ -72,7 +72,7 @@ internal sealed class ContinuousOpacity
         for (var x = 0.9; x < 16; x *= 1.15)
         {
             var weight = x * x * x * x * x * Math.Exp(-x) / ((1 - Math.Exp(-x)) * (1 - Math.Exp(-x)));
-            sum += weight / (At(Constants.SecondRadiation / (x * _gas.Temperature)) + ((1 - ShareBetweenBands) * _haze));
+            sum += weight / (At(Cgs.SecondRadiation / (x * _gas.Temperature)) + ((1 - ShareBetweenBands) * _haze));
             weights += weight;
         }
 

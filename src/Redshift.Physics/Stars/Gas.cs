@@ -47,17 +47,17 @@ internal sealed class Gas
     public double MoleculePressure => AtomicHydrogenPressure * AtomicHydrogenPressure / HydrogenMoleculeConstant(Temperature);
 
     /// <summary>Electrons per cm³.</summary>
-    public double ElectronDensity => ElectronPressure / (Constants.BoltzmannErg * Temperature);
+    public double ElectronDensity => ElectronPressure / (Cgs.Boltzmann * Temperature);
 
     /// <summary>Neutral hydrogen atoms per cm³, which damp lines by collisions.</summary>
-    public double NeutralHydrogenDensity => AtomicHydrogenPressure / (Constants.BoltzmannErg * Temperature);
+    public double NeutralHydrogenDensity => AtomicHydrogenPressure / (Cgs.Boltzmann * Temperature);
 
     public double ElectronsPerNucleus => ElectronPressure / NucleiPressure;
 
     /// <summary>Layer of a temperature at a Rosseland optical depth: P = g τ / κ with P and κ both set by the electron pressure.</summary>
     public static Gas InBalance(double temperature, double logGravity, Composition composition, double opticalDepth)
     {
-        var target = Math.Log(Math.Pow(10, logGravity) * opticalDepth * HydrogenMassPerNucleus * Constants.AtomicMassGram);
+        var target = Math.Log(Math.Pow(10, logGravity) * opticalDepth * HydrogenMassPerNucleus * Cgs.AtomicMass);
         Gas At(double lnPressure) => new(temperature, Math.Exp(lnPressure), composition);
         double Excess(Gas gas) => Math.Log(gas.GasPressure * new ContinuousOpacity(gas).RosselandMean()) - target;
         double before = 2, here = 4, excessBefore = Excess(At(before));
@@ -85,14 +85,16 @@ internal sealed class Gas
             : _stages[element.Index][stage];
 
     /// <summary>N(stage + 1)/N(stage): Saha equation in the form of Gray 2005, eq. 1.20: Φ(T)/P_e, Φ = 0.6665 (U₁/U₀) T^(5/2) 10^(−θI).</summary>
-    public double SahaRatio(Element element, int stage) =>
-        0.6665 * element.Partition[stage + 1] / element.Partition[stage] * Math.Pow(Temperature, 2.5)
-        * Math.Pow(10, -Constants.Theta(Temperature) * element.Ionization[stage]) / ElectronPressure;
+    public static double SahaRatio(Element element, int stage, double kelvin, double electronPressure) =>
+        0.6665 * element.Partition[stage + 1] / element.Partition[stage] * kelvin * kelvin * Math.Sqrt(kelvin)
+        * Math.Exp(-element.Ionization[stage] / (Cgs.BoltzmannEv * kelvin)) / electronPressure;
 
-    // log K(H2) in dyn/cm²: Tsuji 1973, A&A 23, 411.
-    private static double HydrogenMoleculeConstant(double kelvin)
+    private double SahaRatio(Element element, int stage) => SahaRatio(element, stage, Temperature, ElectronPressure);
+
+    /// <summary>p(H)²/p(H2) in dyn/cm²: Tsuji 1973, A&amp;A 23, 411.</summary>
+    public static double HydrogenMoleculeConstant(double kelvin)
     {
-        var theta = Constants.Theta(kelvin);
+        var theta = Cgs.Theta(kelvin);
         return Math.Pow(10, 12.533505 - (4.9251644 * theta) + (0.056191273 * theta * theta) - (0.0032687661 * theta * theta * theta));
     }
 

@@ -30,7 +30,7 @@ internal sealed class Layer
 
     /// <summary>Most probable speed of the absorbers, thermal and turbulent, in cm/s.</summary>
     public double DopplerCm(Element element) =>
-        Math.Sqrt((2 * Constants.BoltzmannErg * Gas.Temperature / (element.Mass * Constants.AtomicMassGram)) + (Turbulence * Turbulence));
+        Math.Sqrt((2 * Cgs.Boltzmann * Gas.Temperature / (element.Mass * Cgs.AtomicMass)) + (Turbulence * Turbulence));
 
     // km/s: 1.1 in dwarfs like the Sun, growing to giants; 2 to 3 in A stars, 4 and more in the hottest (Gray & Corbally 2009).
     private static double MicroTurbulence(StellarParameters star)

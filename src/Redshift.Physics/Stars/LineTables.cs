@@ -1,5 +1,5 @@
 using System.Globalization;
-using System.Reflection;
+using Redshift.Physics.Air;
 
 namespace Redshift.Physics.Stars;
 
@@ -13,18 +13,18 @@ internal static class LineTables
     private static readonly List<(Element Element, int Stage)> IonList = [];
 
     /// <summary>Lines of the solar spectrum, of hot stars and of the ultraviolet.</summary>
-    public static readonly SpectralLine[] All = [.. SolarLines(), .. HotLines(), .. UltravioletLines()];
+    public static readonly AtomicLine[] All = [.. SolarLines(), .. HotLines(), .. UltravioletLines()];
 
     /// <summary>Ions that the lines belong to.</summary>
     public static IReadOnlyList<(Element Element, int Stage)> Ions => IonList;
 
-    private static IEnumerable<SpectralLine> SolarLines()
+    private static IEnumerable<AtomicLine> SolarLines()
     {
         var sun = new Photosphere(Sun);
         return Rows("solar-lines.csv").Select(r => Calibrated(r, sun, 1e-3 * Number(r[2]), Number(r[3])));
     }
 
-    private static IEnumerable<SpectralLine> HotLines()
+    private static IEnumerable<AtomicLine> HotLines()
     {
         var stars = new Dictionary<double, Photosphere>();
         foreach (var row in Rows("hot-lines.csv"))
@@ -36,19 +36,19 @@ internal static class LineTables
         }
     }
 
-    private static IEnumerable<SpectralLine> UltravioletLines() =>
-        Rows("ultraviolet-lines.csv").Select(r => new SpectralLine(Ion(r[0]), Number(r[1]), Number(r[3]), Math.Pow(10, Number(r[2]))));
+    private static IEnumerable<AtomicLine> UltravioletLines() =>
+        Rows("ultraviolet-lines.csv").Select(r => new AtomicLine(Ion(r[0]), Number(r[1]), Number(r[3]), Math.Pow(10, Number(r[2]))));
 
     // The g f that gives the published width in the star in which it was measured.
-    private static SpectralLine Calibrated(string[] row, Photosphere star, double widthAngstrom, double excitation)
+    private static AtomicLine Calibrated(string[] row, Photosphere star, double widthAngstrom, double excitation)
     {
         var ion = Ion(row[0]);
-        var wavelength = AirWavelength.ToVacuum(Number(row[1]));
+        var wavelength = AirRefraction.ToVacuum(Number(row[1]));
         var absorbers = new Absorbers(star.Lines, IonList[ion].Element, IonList[ion].Stage);
         var place = Nodes.Place(Math.Log(wavelength));
         var width = widthAngstrom / (wavelength * absorbers.Doppler * star.StrongestDepth(place));
         var central = CurveOfGrowth.Invert(width, absorbers.Damping(wavelength)) * star.HalfDepthRatio(place) * star.Lines.ContinuousOpacityAt(place);
-        return new SpectralLine(ion, wavelength, excitation, central / absorbers.CentralOpacity(wavelength, excitation));
+        return new AtomicLine(ion, wavelength, excitation, central / absorbers.CentralOpacity(wavelength, excitation));
     }
 
     private static int Ion(string name)
@@ -66,7 +66,7 @@ internal static class LineTables
 
     private static IEnumerable<string[]> Rows(string table)
     {
-        using var stream = Assembly.GetExecutingAssembly().GetManifestResourceStream("Redshift.Physics.Stars." + table)
+        using var stream = typeof(LineTables).Assembly.GetManifestResourceStream("Redshift.Physics.Stars." + table)
             ?? throw new InvalidOperationException($"table {table} is missing from the assembly");
         using var reader = new StreamReader(stream);
         var lines = new List<string>();

@@ -1,3 +1,5 @@
+using Redshift.Physics.Constants;
+
 namespace Redshift.Physics.Stars;
 
 /// <summary>
@@ -38,7 +40,7 @@ public sealed class LogWavelengthGrid
     /// <returns>The grid.</returns>
     public static LogWavelengthGrid Covering(double firstAngstrom, double lastAngstrom, double stepKmPerSecond)
     {
-        var step = stepKmPerSecond / 299792.458;
+        var step = stepKmPerSecond / Codata2022.SpeedOfLightKmS;
         return new LogWavelengthGrid(Math.Log(firstAngstrom), step, 1 + (int)(Math.Log(lastAngstrom / firstAngstrom) / step));
     }
 

@@ -17,7 +17,7 @@ internal static class MolecularBands
         var (first, last) = (scratch.Length, -1);
         foreach (var band in system.Bands(layer.Gas.Temperature))
         {
-            var absorbers = abundance / layer.ContinuousOpacityAt(Nodes.Place(Math.Log(band.HeadWavelength)));
+            var absorbers = abundance / layer.ContinuousOpacityAt(Nodes.Place(Math.Log(band.Wavelength)));
             var (from, to) = band.Add(scratch, grid, layer.Gas.Temperature, absorbers);
             (first, last) = (Math.Min(first, from), Math.Max(last, to));
         }

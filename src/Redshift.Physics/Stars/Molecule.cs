@@ -28,16 +28,15 @@ internal sealed record Molecule(Element First, Element Second, double Dissociati
     public double ReducedMass => First.Mass * Second.Mass / (First.Mass + Second.Mass);
 
     /// <summary>Vibrational partition function of the ground state, harmonic.</summary>
-    public double VibrationalPartition(double kelvin) => 1 / (1 - Math.Exp(-Constants.WavenumberKelvin * Vibration / kelvin));
+    public double VibrationalPartition(double kelvin) => 1 / (1 - Math.Exp(-Cgs.WavenumberKelvin * Vibration / kelvin));
 
     /// <summary>p(A) p(B)/p(AB) in dyn/cm²: law of mass action with rigid-rotator and harmonic partition functions.</summary>
     public double DissociationConstant(double kelvin)
     {
-        const double planck = 6.62607015e-27;
-        var motion = Math.Pow(2 * Math.PI * ReducedMass * Constants.AtomicMassGram * Constants.BoltzmannErg * kelvin / (planck * planck), 1.5);
-        var internalStates = Weight * kelvin / (Constants.WavenumberKelvin * Rotation) * VibrationalPartition(kelvin);
-        return motion * Constants.BoltzmannErg * kelvin * First.Partition[0] * Second.Partition[0] / internalStates
-            * Math.Exp(-Dissociation / (Constants.BoltzmannEv * kelvin));
+        var motion = Math.Pow(2 * Math.PI * ReducedMass * Cgs.AtomicMass * Cgs.Boltzmann * kelvin / (Cgs.Planck * Cgs.Planck), 1.5);
+        var internalStates = Weight * kelvin / (Cgs.WavenumberKelvin * Rotation) * VibrationalPartition(kelvin);
+        return motion * Cgs.Boltzmann * kelvin * First.Partition[0] * Second.Partition[0] / internalStates
+            * Math.Exp(-Dissociation / (Cgs.BoltzmannEv * kelvin));
     }
 
     private static Molecule Of(string first, string second, double dissociation, double rotation, double vibration, double weight) =>

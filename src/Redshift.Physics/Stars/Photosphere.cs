@@ -62,7 +62,7 @@ internal sealed class Photosphere
     public double HalfDepthRatio(double place) => Nodes.At(_half, place);
 
     private static double Planck(double wavelength, double kelvin) =>
-        Math.Pow(wavelength / 5500, -5) / (Math.Exp(Constants.SecondRadiation / (wavelength * kelvin)) - 1);
+        Math.Pow(wavelength / 5500, -5) / (Math.Exp(Cgs.SecondRadiation / (wavelength * kelvin)) - 1);
 
     private void Tabulate(Layer continuum)
     {
@@ -74,7 +74,7 @@ internal sealed class Photosphere
             var temperature = GreyTemperature(depth);
             _flux[i] = Planck(wavelength, temperature);
             _strongest[i] = 1 - (Planck(wavelength, SurfaceTemperature) / _flux[i]);
-            _half[i] = _strongest[i] / InitialSlope(depth, Constants.SecondRadiation / (wavelength * temperature));
+            _half[i] = _strongest[i] / InitialSlope(depth, Cgs.SecondRadiation / (wavelength * temperature));
         }
     }
 

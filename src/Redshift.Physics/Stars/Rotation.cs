@@ -1,12 +1,11 @@
 using System.Numerics;
+using Redshift.Physics.Constants;
 
 namespace Redshift.Physics.Stars;
 
 /// <summary>Rotational broadening that is typical of a kind of star.</summary>
 internal static class Rotation
 {
-    private const double SpeedOfLight = 299792.458;
-
     /// <summary>
     /// Standard deviation of the broadening in km/s: early-type dwarfs turn at v sin i of 100 to 150 km/s, stars cooler than F5 and white
     /// dwarfs slowly (Fukuda 1982, PASP 94, 271). A rotation profile of limb darkening 0.6 has a standard deviation of 0.47 v sin i.
@@ -36,7 +35,7 @@ internal static class Rotation
     }
 
     /// <summary>Broadening of a star in steps of a grid.</summary>
-    public static double SigmaSteps(StellarParameters star, LogWavelengthGrid grid) => Sigma(star) / SpeedOfLight / grid.LnStep;
+    public static double SigmaSteps(StellarParameters star, LogWavelengthGrid grid) => Sigma(star) / Codata2022.SpeedOfLightKmS / grid.LnStep;
 
     private static void AddScaled(Span<float> sum, ReadOnlySpan<float> values, float factor)
     {

@@ -37,7 +37,7 @@ internal sealed class SpectrumBuilder(Photosphere star, LogWavelengthGrid grid)
             AddLine(line, ions[line.Ion]);
     }
 
-    private void AddLine(in SpectralLine line, in Absorbers ion)
+    private void AddLine(in AtomicLine line, in Absorbers ion)
     {
         var position = (line.LnWavelength - grid.LnStart) / grid.LnStep;
         if (position < 0 || position > grid.Count - 1)

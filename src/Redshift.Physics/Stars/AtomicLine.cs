@@ -5,7 +5,7 @@ namespace Redshift.Physics.Stars;
 /// <param name="Wavelength">Vacuum wavelength in Å.</param>
 /// <param name="Excitation">Energy of the lower level in eV.</param>
 /// <param name="Weight">Statistical weight of the lower level times oscillator strength, g f.</param>
-internal readonly record struct SpectralLine(int Ion, double Wavelength, double Excitation, double Weight)
+internal readonly record struct AtomicLine(int Ion, double Wavelength, double Excitation, double Weight)
 {
     /// <summary>Natural logarithm of the wavelength.</summary>
     public double LnWavelength { get; } = Math.Log(Wavelength);
