@@ -16,7 +16,8 @@ public static class LayoutDescription
         var toml = new StringBuilder("[[load]]\n");
         if (observation.Instrument.Length > 0) toml.Append("when = { INSTRUME = ").Append(Quoted(observation.Instrument)).Append(" }\n");
         foreach (var note in observation.Notes)
-            if (RuleKeys.Contains(note.Role) && note.Choice is not ("none" or "unknown" or "")) toml.Append(note.Role).Append(" = ").Append(Quoted(note.Choice)).Append('\n');
+            if (RuleKeys.Contains(note.Role) && note.Choice is not ("none" or "unknown" or ""))
+                toml.Append(note.Role).Append(" = ").Append(Quoted(note.Choice)).Append('\n');
         return toml.ToString();
     }
 

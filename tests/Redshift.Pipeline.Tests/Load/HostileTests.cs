@@ -14,7 +14,8 @@ public sealed class HostileTests : IDisposable
     public void Dispose() => _bench.Dispose();
 
     [Fact]
-    public void File_that_is_not_there_is_refused() => Assert.Equal("file", LoadBench.Refused(_bench.Path(_bench.FileIn("none.fits"))).Place);
+    public void File_that_is_not_there_is_refused() =>
+        Assert.Equal("file", LoadBench.Refused(_bench.Path(_bench.FileIn("none.fits"))).Place);
 
     [Fact]
     public void Folder_is_refused() => Assert.Equal("a folder", LoadBench.Refused(_bench.Path(_bench.Folder)).Found);
@@ -23,7 +24,8 @@ public sealed class HostileTests : IDisposable
     public void Empty_file_is_refused() => Assert.Equal("nothing: it is empty", LoadBench.Refused(_bench.Bytes("empty.fits", [])).Found);
 
     [Fact]
-    public void Binary_that_is_not_FITS_is_refused() => Assert.Equal("line 1", LoadBench.Refused(_bench.Bytes("fork.fits", [0, 5, 0x16, 7, 0, 2, 0, 0, .. "Mac OS X"u8])).Place);
+    public void Binary_that_is_not_FITS_is_refused() =>
+        Assert.Equal("line 1", LoadBench.Refused(_bench.Bytes("fork.fits", [0, 5, 0x16, 7, 0, 2, 0, 0, .. "Mac OS X"u8])).Place);
 
     [Fact]
     public void Header_without_data_is_refused_with_what_was_found()
@@ -43,10 +45,12 @@ public sealed class HostileTests : IDisposable
     }
 
     [Fact]
-    public void Flux_that_is_nowhere_finite_is_refused() => Assert.Equal("fewer than 16 usable pixels", Refuse(LoadBench.Constant(double.NaN)).Found);
+    public void Flux_that_is_nowhere_finite_is_refused() =>
+        Assert.Equal("fewer than 16 usable pixels", Refuse(LoadBench.Constant(double.NaN)).Found);
 
     [Fact]
-    public void Flux_that_is_the_same_everywhere_is_refused() => Assert.Equal("fewer than 16 usable pixels", Refuse(LoadBench.Constant(3)).Found);
+    public void Flux_that_is_the_same_everywhere_is_refused() =>
+        Assert.Equal("fewer than 16 usable pixels", Refuse(LoadBench.Constant(3)).Found);
 
     [Fact]
     public void Three_pixels_are_refused() => Assert.Equal("an image of 3", Refuse([1, 2, 3]).Found);
@@ -56,7 +60,8 @@ public sealed class HostileTests : IDisposable
         writer.WriteImage("", new double[16 * 2 * 2 * 2], [16, 2, 2, 2], LoadBench.Axis(5000, 1)))).Expected);
 
     [Fact]
-    public void Table_without_a_flux_is_refused_with_its_columns() => Assert.Contains("MAGNITUDE", LoadBench.Refused(_bench.Fits(static writer =>
+    public void Table_without_a_flux_is_refused_with_its_columns() =>
+        Assert.Contains("MAGNITUDE", LoadBench.Refused(_bench.Fits(static writer =>
         writer.WriteTable("CATALOG", LoadBench.Pixels, [ColumnDefinition.Doubles("MAGNITUDE", LoadBench.Flux())]))).Found, StringComparison.Ordinal);
 
     [Fact]
@@ -126,7 +131,8 @@ public sealed class HostileTests : IDisposable
         ColumnDefinition.Doubles("ERR", LoadBench.Constant(0.5, 2 * LoadBench.Pixels), LoadBench.Pixels),
     ], [Card.Of("DATE-OBS", "2022-10-14T21:34:00"), Card.Of("SPECSYS", "BARYCENT"), Card.Of("RA", "12:30:00"), Card.Of("DEC", "-05:15:00")]));
 
-    private static byte[] Image() => Written(static writer => writer.WriteImage("", [.. LoadBench.Flux(), .. LoadBench.Flux()], [LoadBench.Pixels, 2],
+    private static byte[] Image() =>
+        Written(static writer => writer.WriteImage("", [.. LoadBench.Flux(), .. LoadBench.Flux()], [LoadBench.Pixels, 2],
     [
         Card.Of("WAT2_001", "wtype=multispec spec1 = \"1 31 0 5800. 3. 64 0. 1. 8.\" spec2 = \"2 30 2 60"), Card.Of("WAT2_002", "00. 4.7 64 0. 1. 8. 1. 0. 3 2 1. 64. 6150. 150. 1 2 3\""),
         Card.Of("CTYPE1", "MULTISPE"), Card.Of("APNUM1", "1 1"), Card.Of("CRVAL1", 1.0), Card.Of("CD1_1", 1.0),

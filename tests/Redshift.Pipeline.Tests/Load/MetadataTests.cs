@@ -25,7 +25,8 @@ public sealed class MetadataTests : IDisposable
     }
 
     [Fact]
-    public void Hours_in_a_unit_comment_are_hours() => Assert.Equal(187.5, Observe(Card.Of("RA", 12.5, "[hours]"), Card.Of("DEC", 1.0)).RaDeg!.Value, 1e-9);
+    public void Hours_in_a_unit_comment_are_hours() =>
+        Assert.Equal(187.5, Observe(Card.Of("RA", 12.5, "[hours]"), Card.Of("DEC", 1.0)).RaDeg!.Value, 1e-9);
 
     [Fact]
     public void Position_of_the_target_wins_over_the_telescope() =>
@@ -49,7 +50,8 @@ public sealed class MetadataTests : IDisposable
         Observe(Card.Of("DATE-OBS", "2022-10-14T21:30:00"), Card.Of("DATE-END", "2022-10-14T22:00:00"), Card.Of("EXPTIME", 600.0)).MidTimeUtc);
 
     [Fact]
-    public void Stated_middle_wins() => Assert.Equal(new DateTime(2017, 12, 26, 12, 0, 0, DateTimeKind.Utc), Observe(Card.Of("DATE-OBS", "2017-12-26T08:00:01"), Card.Of("TMID", 58113.5)).MidTimeUtc);
+    public void Stated_middle_wins() =>
+        Assert.Equal(new DateTime(2017, 12, 26, 12, 0, 0, DateTimeKind.Utc), Observe(Card.Of("DATE-OBS", "2017-12-26T08:00:01"), Card.Of("TMID", 58113.5)).MidTimeUtc);
 
     // 2011-10-09 00:00:34 TAI is midnight UTC, since TAI - UTC was 34 s (IERS Bulletin C 36); MJD 55843.
     [Fact]
@@ -80,7 +82,8 @@ public sealed class MetadataTests : IDisposable
         Assert.Equal(expected, Observe(Card.Of("BSS_VHEL", applied)).Frame);
 
     [Fact]
-    public void Value_of_a_correction_alone_says_nothing() => Assert.Equal(VelocityFrame.Unknown, Observe(Card.Of("BERV", 12.3), Card.Of("VHELIO", 12.3)).Frame);
+    public void Value_of_a_correction_alone_says_nothing() =>
+        Assert.Equal(VelocityFrame.Unknown, Observe(Card.Of("BERV", 12.3), Card.Of("VHELIO", 12.3)).Frame);
 
     [Theory]
     [InlineData("AIRORVAC", "vac", WavelengthMedium.Vacuum)]
@@ -104,7 +107,7 @@ public sealed class MetadataTests : IDisposable
 
     [Theory]
     [InlineData(5000, 1, 0, WavelengthMedium.Air)]
-    [InlineData(1150, 1, 0, WavelengthMedium.Vacuum)]
+    [InlineData(1150, 50, 0, WavelengthMedium.Vacuum)]
     [InlineData(11000, 5, 0, WavelengthMedium.Vacuum)]
     [InlineData(3.58, 1e-4, 1, WavelengthMedium.Vacuum)]
     public void Medium_that_nobody_states_follows_the_default_with_a_caution(double crval, double cdelt, long flag, WavelengthMedium expected)
@@ -112,6 +115,14 @@ public sealed class MetadataTests : IDisposable
         var observation = _bench.One(writer => writer.WriteImage("", LoadBench.Flux(), [LoadBench.Pixels], LoadBench.Axis(crval, cdelt, Card.Of("DC-FLAG", flag))));
         Assert.Equal((expected, true), (observation.Medium, observation.MediumAssumed));
         Assert.Contains("check-medium", observation.Cautions);
+    }
+
+    [Fact]
+    public void Spectrum_below_2000_angstrom_is_in_vacuum_by_convention()
+    {
+        var observation = _bench.One(static writer => writer.WriteImage("", LoadBench.Flux(), [LoadBench.Pixels], LoadBench.Axis(1150, 1)));
+        Assert.Equal((WavelengthMedium.Vacuum, false), (observation.Medium, observation.MediumAssumed));
+        Assert.Equal(1150, observation.Spectra[0].Wavelength[0]);
     }
 
     [Theory]
@@ -139,5 +150,6 @@ public sealed class MetadataTests : IDisposable
         Assert.Equal(("night/spectrum.fits", 0), (observation.Source, observation.Row));
     }
 
-    private Observation Observe(params Card[] cards) => _bench.One(writer => writer.WriteImage("", LoadBench.Flux(), [LoadBench.Pixels], LoadBench.Axis(5000, 1, cards)));
+    private Observation Observe(params Card[] cards) =>
+        _bench.One(writer => writer.WriteImage("", LoadBench.Flux(), [LoadBench.Pixels], LoadBench.Axis(5000, 1, cards)));
 }

@@ -144,6 +144,7 @@ public sealed class UnitTests : IDisposable
 
     private Spectrum Read(string name, double[] wavelengths, string unit) => Assert.Single(Observe(name, wavelengths, unit).Spectra);
 
-    private Observation Observe(string name, double[] wavelengths, string unit) => _bench.One(writer => writer.WriteTable("", LoadBench.Pixels,
+    private Observation Observe(string name, double[] wavelengths, string unit) =>
+        _bench.One(writer => writer.WriteTable("", LoadBench.Pixels,
         [ColumnDefinition.Doubles(name, wavelengths) with { Unit = unit }, ColumnDefinition.Doubles("FLUX", LoadBench.Flux())], [Card.Of("VACUUM", true)]));
 }

@@ -28,7 +28,7 @@ internal readonly partial record struct FluxUnit(string Text, double? ErgPerSeco
         if (JanskyPattern().Match(unit) is { Success: true } match) return factor * Prefix(match.Groups[1].Value) * Jansky;
         if (lower is "fnu") return 1;
         // W/m2/Hz is 1000 erg/s/cm2/Hz.
-        return lower.Contains("hz", StringComparison.Ordinal) && !lower.Contains("ang", StringComparison.Ordinal)
+        return lower.ContainsAny("hz") && !lower.ContainsAny("ang")
             ? factor * (WattPattern().IsMatch(unit) ? 1e3 : 1)
             : null;
     }

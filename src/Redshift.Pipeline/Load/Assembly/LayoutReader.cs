@@ -33,7 +33,13 @@ internal sealed class LayoutReader
         var normalised = IsNormalised(layout);
         _builders = [.. layout.Spectra.Select(sources => new SpectrumBuilder(sources, _medium.Value, resolution, normalised))];
         _cautions = [.. Cautions()];
-        _notes = [.. ReadingNotes.Of(layout), new("medium", Words.Of(_medium.Value), _medium.Why), new("frame", Words.Of(_frame.Value), _frame.Why), .. ReadingNotes.OfResolution(layout, resolution)];
+        _notes =
+        [
+            .. ReadingNotes.Of(layout),
+            new("medium", Words.Of(_medium.Value), _medium.Why),
+            new("frame", Words.Of(_frame.Value), _frame.Why),
+            .. ReadingNotes.OfResolution(layout, resolution),
+        ];
     }
 
     /// <summary>Reads one observation.</summary>
@@ -76,12 +82,14 @@ internal sealed class LayoutReader
         foreach (var caution in _layout.Cautions) yield return caution;
     }
 
-    private LoadException Unusable() =>
-        new(_layout.Spectra[0].Flux.Place, $"fewer than {WavelengthGrid.ShortestRun} usable pixels", $"at least {WavelengthGrid.ShortestRun} pixels with a wavelength and a finite flux that is not the same everywhere");
+    private LoadException Unusable() => new(
+        _layout.Spectra[0].Flux.Place,
+        $"fewer than {WavelengthGrid.ShortestRun} usable pixels",
+        $"at least {WavelengthGrid.ShortestRun} pixels with a wavelength and a finite flux that is not the same everywhere");
 
     // A flux divided by the continuum keeps no unit, whatever its column says.
     private static bool IsNormalised(Layout layout) =>
         layout.Header.Flag("CONTNORM") == true
-        || layout.Header.Text("FLUX_CAL", "FLUXCAL")?.StartsWith("NORMALI", StringComparison.OrdinalIgnoreCase) == true
+        || layout.Header.Text("FLUX_CAL", "FLUXCAL")?.BeginsWithAny("NORMALI") == true
         || layout.Spectra[0].Flux.Label.Words.Any(static word => word is "nor" or "norm" or "normalized" or "normalised" or "normflux" or "nflux");
 }

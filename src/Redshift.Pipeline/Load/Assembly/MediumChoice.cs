@@ -22,17 +22,25 @@ internal static class MediumChoice
 
     private static Setting<WavelengthMedium> Default(Layout layout)
     {
-        var shortest = layout.Spectra.Min(static spectrum => Shortest(spectrum));
-        var logarithmic = layout.Spectra[0].Wavelength.Unit.StartsWith("log", StringComparison.Ordinal);
+        var (shortest, longest) = Range(layout);
+        if (longest < MediumFinder.AirBegins) return new(WavelengthMedium.Vacuum, false, "the convention below 2000 A");
+        var logarithmic = layout.Spectra[0].Wavelength.Unit.BeginsWithAny("log");
         var (medium, why) = MediumFinder.Default(shortest, logarithmic, layout.ListsWavelengths);
         return new(medium, true, why);
     }
 
-    private static double Shortest(SpectrumSources spectrum)
+    private static (double Shortest, double Longest) Range(Layout layout)
     {
-        var shortest = double.PositiveInfinity;
-        foreach (var angstrom in spectrum.Wavelength.Angstroms(0, spectrum.Flux.Length))
-            if (angstrom > 0 && angstrom < shortest) shortest = angstrom;
-        return shortest;
+        double shortest = double.PositiveInfinity, longest = 0;
+        foreach (var spectrum in layout.Spectra)
+        {
+            foreach (var angstrom in spectrum.Wavelength.Angstroms(0, spectrum.Flux.Length))
+            {
+                if (!(angstrom > 0)) continue;
+                shortest = Math.Min(shortest, angstrom);
+                longest = Math.Max(longest, angstrom);
+            }
+        }
+        return (shortest, longest);
     }
 }

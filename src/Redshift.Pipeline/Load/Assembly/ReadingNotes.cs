@@ -18,15 +18,18 @@ internal static class ReadingNotes
         else yield return new("error", "none", "nothing in the file is one");
         if (spectrum.Mask is { } mask) yield return new("mask", mask.Place, mask.Why);
         if (layout is { Rows: > 1, Targets: { } targets }) yield return new("targets", targets.Place, "a row for each spectrum");
-        if (layout.Spectra.Count > 1) yield return new("spectra of the object", string.Join(", ", layout.Spectra.Select(static one => one.Label)), "all of one observation");
+        if (layout.Spectra.Count > 1)
+            yield return new("spectra of the object", string.Join(", ", layout.Spectra.Select(static one => one.Label)), "all of one observation");
         foreach (var note in layout.Notes) yield return note;
     }
 
     /// <summary>The note on the resolution.</summary>
     public static IEnumerable<ReadingNote> OfResolution(Layout layout, StatedResolution? resolution)
     {
-        if (layout.Spectra[0].Width is { } width && resolution is not { From: ResolutionSource.Pipeline }) yield return new("resolution", width.Place, "a value for each pixel");
-        else if (resolution is { } stated) yield return new("resolution", stated.Power is { } power ? $"{power:0.#}" : $"{stated.FwhmA:0.###} A", stated.Where);
+        if (layout.Spectra[0].Width is { } width && resolution is not { From: ResolutionSource.Pipeline })
+            yield return new("resolution", width.Place, "a value for each pixel");
+        else if (resolution is { } stated)
+            yield return new("resolution", stated.Power is { } power ? $"{power:0.#}" : $"{stated.FwhmA:0.###} A", stated.Where);
         else yield return new("resolution", "none", "nobody states it: it is estimated");
     }
 

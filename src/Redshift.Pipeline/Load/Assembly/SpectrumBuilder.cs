@@ -26,13 +26,16 @@ internal sealed class SpectrumBuilder(SpectrumSources sources, WavelengthMedium 
         var flux = sources.Flux.Read(row);
         var grid = GridFor(row, flux.Length);
         if (grid.Angstroms.Length != flux.Length)
-            throw new LoadException(sources.Wavelength.Place, $"{grid.Angstroms.Length} wavelengths for {flux.Length} fluxes", "as many of one as of the other");
+            throw Unequal(sources.Wavelength, grid.Angstroms.Length, flux.Length);
         var inverseVariance = InverseVariance(row, flux, out var hasErrors);
         var fwhm = Overridden ? null : sources.Width?.FwhmKmS(row, grid.Angstroms);
         return [.. grid.Runs
             .Select((run, i) => Build(run, Label(i, grid.Runs.Count), flux, inverseVariance, hasErrors, fwhm))
             .Where(IsUsable)];
     }
+
+    private static LoadException Unequal(WavelengthSource wavelength, int wavelengths, int fluxes) =>
+        new(wavelength.Place, $"{wavelengths} wavelengths for {fluxes} fluxes", "as many of one as of the other");
 
     // A flux that is the same everywhere is a fibre without light or an array that was never filled.
     private static bool IsUsable(Spectrum spectrum)
@@ -79,7 +82,8 @@ internal sealed class SpectrumBuilder(SpectrumSources sources, WavelengthMedium 
         if (sources.Noise is { } noise)
         {
             var values = noise.Values.Read(row);
-            if (values.Length != count) throw new LoadException(noise.Values.Place, $"{values.Length} values for {count} fluxes", "one a pixel");
+            if (values.Length != count)
+                throw new LoadException(noise.Values.Place, $"{values.Length} values for {count} fluxes", "one a pixel");
             hasErrors = NoiseReader.ToInverseVariance(noise.Role, values);
             if (hasErrors) return values;
         }

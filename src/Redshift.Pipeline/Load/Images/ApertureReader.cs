@@ -23,7 +23,9 @@ internal static class ApertureReader
         {
             Wavelength = new ApertureWavelengths(axes, family.Flux.Index),
             Flux = Rows(family, length, rows, 0),
-            Noise = ErrorBand(family, bands) is { } band ? (Role.Error, Rows(family, length, rows, band)) : ImageReader.NoiseOf(family, length, rows),
+            Noise = ErrorBand(family, bands) is { } band
+                ? (Role.Error, Rows(family, length, rows, band))
+                : ImageReader.NoiseOf(family, length, rows),
         };
         return AreOrders(axes, rows, length)
             ? new([.. Enumerable.Range(0, rows).Select(row => all.AtRow(row, rows == 1 ? "" : $"order {axes[row].Beam}"))], 1)

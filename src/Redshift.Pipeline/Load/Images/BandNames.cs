@@ -29,7 +29,8 @@ internal static class BandNames
     private static List<string>? Listed(HeaderScope header, int count)
     {
         foreach (var keyword in (ReadOnlySpan<string>)["EXTEN0", "BANDS", "ROWS", "ROWNAMES"])
-            if (header.Text(keyword)?.Split([' ', ','], StringSplitOptions.RemoveEmptyEntries) is { } words && words.Length == count) return [.. words];
+            if (header.Text(keyword)?.Split([' ', ','], StringSplitOptions.RemoveEmptyEntries) is { } words && words.Length == count)
+                return [.. words];
         return null;
     }
 }

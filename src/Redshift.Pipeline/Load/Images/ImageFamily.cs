@@ -57,7 +57,9 @@ internal sealed class ImageFamily
 
     /// <summary>The only other image of the same shape, where it has no name.</summary>
     public ImageHdu? UnnamedTwin() =>
-        File.Hdus.OfType<ImageHdu>().Where(hdu => hdu != Flux && hdu.Shape.SequenceEqual(Flux.Shape)).ToList() is [var only] && LabelOf(only).Name.Length == 0 ? only : null;
+        File.Hdus.OfType<ImageHdu>().Where(IsTwin).ToList() is [var only] && LabelOf(only).Name.Length == 0 ? only : null;
+
+    private bool IsTwin(ImageHdu hdu) => hdu != Flux && hdu.Shape.SequenceEqual(Flux.Shape);
 
     private ImageHdu? Sibling(Role role, int length)
     {
@@ -78,5 +80,6 @@ internal sealed class ImageFamily
         return new ImageArray(hdu, elements, rows, 0, elements) { Place = place, Label = LabelOf(hdu) };
     }
 
-    private static HashSet<string> Qualifiers(Label label) => [.. RoleGuesser.Qualifiers(label.Words).Where(static word => word != "resolution" && word != "resol")];
+    private static HashSet<string> Qualifiers(Label label) =>
+        [.. RoleGuesser.Qualifiers(label.Words).Where(static word => word != "resolution" && word != "resol")];
 }

@@ -37,9 +37,12 @@ internal static class ImageReader
     {
         if (length <= MostBands && rows >= 100) return SidewaysTable(family, length);
         if (BandNames.Read(family.Header, rows) is { } names) return BandReader.Named(family, length, names);
-        if (ApertureAxis.ReadAll(family.Header) is { Count: > 0 } apertures && apertures.Count >= rows) return ApertureReader.Read(family, length, rows, 1, apertures);
+        if (ApertureAxis.ReadAll(family.Header) is { Count: > 0 } apertures && apertures.Count >= rows)
+            return ApertureReader.Read(family, length, rows, 1, apertures);
         if (IsStack(family, length, rows)) return Stack(family, length, rows);
-        return rows <= MostBands ? BandReader.Unnamed(family, length, rows) : throw Unfit(family, "a stack with a table of its rows, named bands, or a [[load]] rule");
+        return rows <= MostBands
+            ? BandReader.Unnamed(family, length, rows)
+            : throw Unfit(family, "a stack with a table of its rows, named bands, or a [[load]] rule");
     }
 
     private static UnitContent ThreeAxes(ImageFamily family, int length, int apertures, int bands)
@@ -60,7 +63,7 @@ internal static class ImageReader
         var apertureCards = family.Header.Has("APNUM1") && family.Header.Has(HeaderScope.Indexed("APNUM", rows));
         var type = family.Header.Text("CTYPE2")?.ToUpperInvariant() ?? "";
         return apertureCards
-            || type.Contains("FIB", StringComparison.Ordinal) || type.Contains("SPEC", StringComparison.Ordinal) || type.Contains("APER", StringComparison.Ordinal)
+            || type.ContainsAny("FIB", "SPEC", "APER")
             || HasNoiseOfItsRows(family, length, rows);
     }
 
@@ -105,7 +108,9 @@ internal static class ImageReader
     {
         if (AxisReader.IsForeign(family.Header, 1)) throw Unfit(family, "a spectral first axis");
         var axis = AxisReader.Read(family.Header, 1, length, family.File);
-        return axis is null ? throw new LoadException(PlaceOf(family), "neither CRVAL1 with CDELT1 or CD1_1 nor an array of wavelengths", "wavelengths") : new(axis, family.Flux.Index);
+        return axis is null
+            ? throw new LoadException(PlaceOf(family), "neither CRVAL1 with CDELT1 or CD1_1 nor an array of wavelengths", "wavelengths")
+            : new(axis, family.Flux.Index);
     }
 
     private static UnitContent SidewaysTable(ImageFamily family, int columns)

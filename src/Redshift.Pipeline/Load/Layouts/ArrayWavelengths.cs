@@ -37,7 +37,8 @@ internal sealed class ArrayWavelengths : WavelengthSource
     public override bool IsShared => _array.Rows == 1;
 
     /// <inheritdoc/>
-    public override bool IsUnitAssumed => _stated is null && Judged is not { Quantity: SpectralQuantity.Wavelength, Factor: 1, Scale: AxisScale.Linear };
+    public override bool IsUnitAssumed =>
+        _stated is null && Judged is not { Quantity: SpectralQuantity.Wavelength, Factor: 1, Scale: AxisScale.Linear };
 
     /// <inheritdoc/>
     public override WavelengthSource In(SpectralUnit unit, HeaderScope header) => new ArrayWavelengths(_array, unit);
@@ -50,7 +51,9 @@ internal sealed class ArrayWavelengths : WavelengthSource
         var values = _array.Read(row);
         var unit = Suited(values);
         for (var i = 0; i < values.Length; i++)
-            values[i] = double.IsFinite(values[i]) && (values[i] > 0 || unit.Scale != AxisScale.Linear) ? unit.ToAngstrom(values[i]) : double.NaN;
+            values[i] = double.IsFinite(values[i]) && (values[i] > 0 || unit.Scale != AxisScale.Linear)
+                ? unit.ToAngstrom(values[i])
+                : double.NaN;
         return values;
     }
 
@@ -83,7 +86,7 @@ internal sealed class ArrayWavelengths : WavelengthSource
 
     private static SpectralUnit? UnitOf(Label label)
     {
-        var logarithmic = label.Words.Any(static word => word.StartsWith("log", StringComparison.Ordinal));
+        var logarithmic = label.Words.Any(static word => word.BeginsWithAny("log"));
         var unit = SpectralUnit.Parse(label.Unit) ?? (logarithmic ? SpectralUnit.Angstrom : UnitInName(label));
         return unit is { Scale: AxisScale.Linear } plain && logarithmic ? plain.On(AxisScale.Log10) : unit;
     }
@@ -100,10 +103,10 @@ internal sealed class ArrayWavelengths : WavelengthSource
     {
         if (label.Words.Any(static word => word is "awav" or "air" or "airwave" or "waveair")) return WavelengthMedium.Air;
         if (label.Words.Any(static word => word is "vac" or "vacuum" or "vacwave" or "wavevac")) return WavelengthMedium.Vacuum;
-        if (label.Ucd.Contains("obs.atmos", StringComparison.OrdinalIgnoreCase)) return WavelengthMedium.Air;
+        if (label.Ucd.ContainsAny("obs.atmos")) return WavelengthMedium.Air;
         var remark = label.Comment + " " + label.Unit;
-        if (remark.Contains("vacuum", StringComparison.OrdinalIgnoreCase)) return WavelengthMedium.Vacuum;
-        return remark.Contains("in air", StringComparison.OrdinalIgnoreCase) || remark.Contains("air wavelength", StringComparison.OrdinalIgnoreCase)
+        if (remark.ContainsAny("vacuum")) return WavelengthMedium.Vacuum;
+        return remark.ContainsAny("in air", "air wavelength")
             ? WavelengthMedium.Air
             : null;
     }

@@ -29,7 +29,8 @@ internal static class FitsLayouts
         var best = units.GroupBy(static unit => unit.Arm)
             .SelectMany(static arm => arm.Where(unit => unit.Rank == arm.Min(static other => other.Rank)))
             .OrderBy(static unit => unit.Hdu.Index).ToList();
-        if (best.Exists(static unit => unit.Arm.Length > 0) && units.Min(static unit => unit.Rank) < 0) best = [.. best.Where(static unit => unit.Rank < 0)];
+        if (best.Exists(static unit => unit.Arm.Length > 0) && units.Min(static unit => unit.Rank) < 0)
+            best = [.. best.Where(static unit => unit.Rank < 0)];
         aside = [.. units.Except(best)];
         return best;
     }
@@ -62,7 +63,10 @@ internal static class FitsLayouts
         var contents = units.Select(static unit => (unit.Arm, Content: unit.Read())).ToList();
         var rows = contents[0].Content.Rows;
         if (contents.Exists(arm => arm.Content.Rows != rows))
-            throw new LoadException(Places(units), $"{string.Join(", ", contents.Select(static arm => arm.Content.Rows))} rows", "as many in each arm");
+        {
+            var counts = string.Join(", ", contents.Select(static arm => arm.Content.Rows));
+            throw new LoadException(Places(units), $"{counts} rows", "as many in each arm");
+        }
         return Single(units[0], file) with
         {
             Spectra = [.. contents.SelectMany(static arm => arm.Content.Labelled(arm.Arm))],
@@ -97,12 +101,13 @@ internal static class FitsLayouts
         var covers = layouts.Skip(1).Select(Range).All(range => range.Low > low * 0.999 && range.High < high * 1.001);
         if ((!covers && !IsFirstAmongAlike(units)) || layouts[0].Rows != 1)
             throw new LoadException(Places(units), $"{units.Count} units with spectra of equal standing", "one, or a [[load]] rule that names it");
-        return layouts[0] with { Notes = [.. layouts[0].Notes, new("spectrum", units[0].Place, $"the sum of {Places(units.Skip(1))}, which are parts or exposures")] };
+        var sum = new ReadingNote("spectrum", units[0].Place, $"the sum of {Places(units.Skip(1))}, which are parts or exposures");
+        return layouts[0] with { Notes = [.. layouts[0].Notes, sum] };
     }
 
     private static bool IsFirstAmongAlike(List<SpectrumUnit> units)
     {
-        var columns = units.Select(static unit => unit.Hdu is TableHdu table ? string.Join(' ', table.Columns.Select(static column => column.Name)) : "").ToList();
+        var columns = units.Select(static unit => unit.Hdu is TableHdu table ? Names(table, int.MaxValue) : "").ToList();
         return columns.Count > 2 && columns[0] != columns[1] && columns.Skip(1).Distinct().Count() == 1;
     }
 
@@ -114,21 +119,26 @@ internal static class FitsLayouts
     }
 
     /// <summary>The headers that speak of a unit.</summary>
-    public static HeaderScope ScopeOf(Hdu hdu, FitsFile file) => hdu.Index == 0 ? new([hdu.Header]) : new([hdu.Header, file.Hdus[0].Header]);
+    public static HeaderScope ScopeOf(Hdu hdu, FitsFile file) =>
+        hdu.Index == 0 ? new([hdu.Header]) : new([hdu.Header, file.Hdus[0].Header]);
 
     private static string Places(IEnumerable<SpectrumUnit> units) => string.Join(", ", units.Select(static unit => unit.Place));
 
-    private static ReadingNote Aside(IReadOnlyList<SpectrumUnit> aside) => new("left aside", Places(aside), "other forms of the same spectrum");
+    private static ReadingNote Aside(IReadOnlyList<SpectrumUnit> aside) =>
+        new("left aside", Places(aside), "other forms of the same spectrum");
 
     private static LoadException NothingFound(FitsFile file) =>
         file.Damage is { } damage
             ? new("file", damage.Message, "a complete FITS file")
             : new("file", Describe(file), "a spectrum: an image or a table with flux and wavelengths");
 
+    private static string Names(TableHdu table, int most) =>
+        string.Join(", ", table.Columns.Take(most).Select(static column => column.Name));
+
     private static string Describe(FitsFile file) => string.Join("; ", file.Hdus.Select(static hdu => hdu switch
     {
         ImageHdu { Count: > 0 } image => $"HDU {hdu.Index} {hdu.Name} image {string.Join(" x ", image.Shape)}",
-        TableHdu table => $"HDU {hdu.Index} {hdu.Name} table of {table.RowCount} rows with {string.Join(", ", table.Columns.Take(12).Select(static column => column.Name))}",
+        TableHdu table => $"HDU {hdu.Index} {hdu.Name} table of {table.RowCount} rows with {Names(table, 12)}",
         _ => $"HDU {hdu.Index} {hdu.Name} without data",
     }));
 }

@@ -53,7 +53,11 @@ internal sealed class RoleChoice
     public WidthSource? WidthOf(NumberArray flux)
     {
         foreach (var role in (ReadOnlySpan<Role>)[Role.Fwhm, Role.Sigma, Role.Resolution])
-            if (Belonging(role, flux) is { } array && new WidthSource(array, role) is var width && width.Fits(flux.Length) && width.IsSpectral) return width;
+        {
+            if (Belonging(role, flux) is not { } array) continue;
+            var width = new WidthSource(array, role);
+            if (width.Fits(flux.Length) && width.IsSpectral) return width;
+        }
         return null;
     }
 
@@ -61,9 +65,11 @@ internal sealed class RoleChoice
     public MaskSource? MaskOf(NumberArray flux) =>
         Belonging(Role.Mask, flux) is { } mask && mask.Length == flux.Length ? new(mask) : null;
 
-    /// <summary>Reading notes on what was left aside.</summary>
-    public IEnumerable<string> Unused(IReadOnlyCollection<NumberArray> used) =>
-        _candidates.Where(candidate => candidate.Guess.Role != Role.Other && !used.Contains(candidate.Array)).Select(static candidate => candidate.Array.Label.Name);
+    /// <summary>Names of the arrays that have a role but do not fill it.</summary>
+    /// <param name="usedPlaces">Places of those that do.</param>
+    public IEnumerable<string> Unused(IReadOnlyCollection<string> usedPlaces) => _candidates
+        .Where(candidate => candidate.Guess.Role != Role.Other && !usedPlaces.Contains(candidate.Array.Place))
+        .Select(static candidate => candidate.Array.Label.Name);
 
     // Errors in other units than the flux, as of counts beside a calibrated flux, are not its own.
     private static bool Serves(NumberArray noise, NumberArray flux)
@@ -88,6 +94,7 @@ internal sealed class RoleChoice
     private LoadException Ambiguous(Role role, List<(NumberArray Array, RoleGuess Guess)> ordered)
     {
         var equal = ordered.Where(candidate => candidate.Guess.Rank == ordered[0].Guess.Rank).Select(static candidate => candidate.Array.Label.Name);
-        return new(_place, $"several candidates for the {role.ToString().ToLowerInvariant()}: {string.Join(", ", equal)}", "one, or a [[load]] rule that names it");
+        var found = $"several candidates for the {role.ToString().ToLowerInvariant()}: {string.Join(", ", equal)}";
+        return new(_place, found, "one, or a [[load]] rule that names it");
     }
 }

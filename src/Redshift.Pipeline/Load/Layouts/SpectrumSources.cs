@@ -23,6 +23,10 @@ internal sealed record SpectrumSources
     /// <summary>Resolution of each pixel.</summary>
     public WidthSource? Width { get; init; }
 
+    /// <summary>The places of all that is used.</summary>
+    public IEnumerable<string> Places =>
+        new[] { Wavelength.Place, Flux.Place, Noise?.Values.Place, Mask?.Place, Width?.Place }.OfType<string>();
+
     /// <summary>One row of many as a spectrum of its own.</summary>
     public SpectrumSources AtRow(int row, string label) => this with
     {

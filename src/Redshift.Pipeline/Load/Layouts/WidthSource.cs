@@ -12,6 +12,14 @@ internal sealed class WidthSource(NumberArray values, Role role)
     // Narrower than a third of a pixel or wider than a third of the wavelength is not a resolution.
     private const double SmallestPart = 1.0 / 3;
 
+    // A "resolution" above this is a resolving power, below it a width in Å.
+    private const double LowestPower = 20;
+
+    private readonly SpectralUnit? _unit = SpectralUnit.Parse(values.Label.Unit);
+
+    private readonly bool _inPixels = values.Label.Unit.BeginsWithAny("pix")
+        || (role == Role.Sigma && !values.Label.Words.Contains("wresl"));
+
     /// <summary>Where it is.</summary>
     public string Place => values.Place;
 
@@ -22,7 +30,8 @@ internal sealed class WidthSource(NumberArray values, Role role)
     public bool IsSpectral => role != Role.Fwhm || values.Label.Unit.Length > 0;
 
     /// <summary>Whether it can describe spectra of this length.</summary>
-    public bool Fits(int count) => values.Length == count || (role == Role.Resolution && values.Length > count && values.Length % count == 0);
+    public bool Fits(int count) =>
+        values.Length == count || (role == Role.Resolution && values.Length > count && values.Length % count == 0);
 
     /// <summary>FWHM in km/s of each pixel in the order of the file, or null where most of the values make no sense.</summary>
     /// <param name="row">Which spectrum.</param>
@@ -49,7 +58,7 @@ internal sealed class WidthSource(NumberArray values, Role role)
     private double InAngstrom(double value, double angstrom, double step)
     {
         var perSigma = role == Role.Sigma ? FwhmPerSigma : 1;
-        if (SpectralUnit.Parse(values.Label.Unit) is { } unit)
+        if (_unit is { } unit)
         {
             return unit.Quantity switch
             {
@@ -58,9 +67,8 @@ internal sealed class WidthSource(NumberArray values, Role role)
                 _ => double.NaN,
             };
         }
-        if (role == Role.Resolution) return value > 20 ? angstrom / value : value;
-        var inPixels = role == Role.Sigma && !values.Label.Words.Contains("wresl");
-        return perSigma * value * (inPixels || values.Label.Unit.StartsWith("pix", StringComparison.OrdinalIgnoreCase) ? step : 1);
+        if (role == Role.Resolution) return value > LowestPower ? angstrom / value : value;
+        return perSigma * value * (_inPixels ? step : 1);
     }
 
     private static double Step(double[] angstroms, int i)

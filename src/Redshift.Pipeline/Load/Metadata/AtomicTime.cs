@@ -4,10 +4,9 @@ namespace Redshift.Pipeline.Load.Metadata;
 internal static class AtomicTime
 {
     // TAI - UTC from each date on (IERS Bulletin C).
-    private static readonly (DateTime From, int Seconds)[] LeapSeconds =
+    private static readonly (DateOnly From, int Seconds)[] LeapSeconds =
     [
-        (new(2017, 1, 1, 0, 0, 0, DateTimeKind.Utc), 37), (new(2015, 7, 1, 0, 0, 0, DateTimeKind.Utc), 36), (new(2012, 7, 1, 0, 0, 0, DateTimeKind.Utc), 35),
-        (new(2009, 1, 1, 0, 0, 0, DateTimeKind.Utc), 34), (new(2006, 1, 1, 0, 0, 0, DateTimeKind.Utc), 33), (new(1999, 1, 1, 0, 0, 0, DateTimeKind.Utc), 32),
+        (new(2017, 1, 1), 37), (new(2015, 7, 1), 36), (new(2012, 7, 1), 35), (new(2009, 1, 1), 34), (new(2006, 1, 1), 33), (new(1999, 1, 1), 32),
     ];
 
     /// <summary>UTC of a time in seconds; null before 1999 or in the far future.</summary>
@@ -16,7 +15,7 @@ internal static class AtomicTime
         if (seconds is not (> 4e9 and < 8e9)) return null;
         var atomic = new DateTime(1858, 11, 17, 0, 0, 0, DateTimeKind.Utc).AddSeconds(seconds);
         foreach (var (from, leap) in LeapSeconds)
-            if (atomic >= from) return atomic.AddSeconds(-leap);
+            if (DateOnly.FromDateTime(atomic) >= from) return atomic.AddSeconds(-leap);
         return null;
     }
 }

@@ -5,12 +5,16 @@ namespace Redshift.Pipeline.Load.Metadata;
 /// <summary>Exposure time and the middle of the exposure.</summary>
 internal static class ExposureTime
 {
+    private static readonly string[] ExposureKeywords =
+        ["EXPTIME", "EXPOSURE", "EXP_TIME", "ITIME", "TEXPTIME", "EXPOSED", "TELAPSE", "XPOSURE", "EXPTOT"];
+
     private static readonly DateTime ModifiedJulianZero = new(1858, 11, 17, 0, 0, 0, DateTimeKind.Utc);
+    private const DateTimeStyles Universal = DateTimeStyles.AssumeUniversal | DateTimeStyles.AdjustToUniversal;
     private const double JulianDateOfModifiedZero = 2400000.5;
 
     /// <summary>Exposure time in seconds.</summary>
     public static double? Seconds(HeaderScope header) =>
-        header.Number("EXPTIME", "EXPOSURE", "EXP_TIME", "ITIME", "TEXPTIME", "EXPOSED", "TELAPSE", "XPOSURE", "EXPTOT") is { } seconds && seconds is > 0 and < 1e7 ? seconds : null;
+        header.Number(ExposureKeywords) is { } seconds and > 0 and < 1e7 ? seconds : null;
 
     /// <summary>Middle of the exposure in UTC: stated, between beginning and end, or half the exposure behind the beginning.</summary>
     public static DateTime? Middle(HeaderScope header)
@@ -25,9 +29,12 @@ internal static class ExposureTime
 
     private static DateTime? Stated(HeaderScope header)
     {
-        if (header.Number("MJD-AVG", "MJD-MID", "MJD_MID", "MJDMID", "TMID", "MJDMEAN") is { } mjd && FromModifiedJulian(mjd) is { } byMjd) return byMjd;
-        if (header.Number("JD-MID", "JD_MID", "JDMID") is { } jd && FromModifiedJulian(jd - JulianDateOfModifiedZero) is { } byJd) return byJd;
-        if (header.Number("TAI-BEG") is { } begin && header.Number("TAI-END") is { } end && AtomicTime.ToUtc((begin + end) / 2) is { } byTai) return byTai;
+        if (header.Number("MJD-AVG", "MJD-MID", "MJD_MID", "MJDMID", "TMID", "MJDMEAN") is { } mjd && FromModifiedJulian(mjd) is { } byMjd)
+            return byMjd;
+        if (header.Number("JD-MID", "JD_MID", "JDMID") is { } jd && FromModifiedJulian(jd - JulianDateOfModifiedZero) is { } byJd)
+            return byJd;
+        if (header.Number("TAI-BEG") is { } begin && header.Number("TAI-END") is { } end && AtomicTime.ToUtc((begin + end) / 2) is { } byTai)
+            return byTai;
         return Date(header.Text("DATE-AVG", "DATE-MID", "DATEMID", "BAS_MEX"));
     }
 
@@ -36,17 +43,19 @@ internal static class ExposureTime
         var date = header.Text("DATE-OBS", "DATE_OBS", "DATEOBS", "DATE-BEG", "UTDATE", "UT-DATE");
         if (date is not null && HasTime(date) && Date(date) is { } full) return full;
         if (header.Number("MJD-OBS", "MJD_OBS", "MJD-BEG") is { } mjd && FromModifiedJulian(mjd) is { } byMjd) return byMjd;
-        if (Date(date) is not { } day) return header.Number("JD", "JD-OBS") is { } jd ? FromModifiedJulian(jd - JulianDateOfModifiedZero) : null;
+        if (Date(date) is not { } day)
+            return header.Number("JD", "JD-OBS") is { } jd ? FromModifiedJulian(jd - JulianDateOfModifiedZero) : null;
         var time = header.Text("UTSTART", "TIME-OBS", "UT-START", "UTC-OBS", "UT", "UTC", "TIME-BEG", "UTOBS");
         return TimeOfDay(time) is { } ofDay ? day + ofDay : day;
     }
 
     private static bool MeansMiddle(string? comment) =>
-        comment is not null && (comment.Contains("mid", StringComparison.OrdinalIgnoreCase) || comment.Contains("median", StringComparison.OrdinalIgnoreCase) || comment.Contains("mean", StringComparison.OrdinalIgnoreCase));
+        comment is not null && comment.ContainsAny("mid", "median", "mean");
 
-    private static bool MeansLocal(string? comment) => comment?.Contains("local", StringComparison.OrdinalIgnoreCase) == true;
+    private static bool MeansLocal(string? comment) => comment?.ContainsAny("local") == true;
 
-    private static bool HasTime(string date) => date.Contains('T', StringComparison.Ordinal) || date.Contains(':', StringComparison.Ordinal);
+    private static bool HasTime(string date) =>
+        date.Contains('T', StringComparison.Ordinal) || date.Contains(':', StringComparison.Ordinal);
 
     private static DateTime? FromModifiedJulian(double mjd) => mjd is > 1 and < 100_000 ? ModifiedJulianZero.AddDays(mjd) : null;
 
@@ -55,9 +64,11 @@ internal static class ExposureTime
     {
         if (text is null) return null;
         if (text.Length == 8 && text[2] == '/' && DateTime.TryParseExact(text, "dd/MM/yy", CultureInfo.InvariantCulture, DateTimeStyles.None, out _))
-            return DateTime.ParseExact(text[..6] + "19" + text[6..], "dd/MM/yyyy", CultureInfo.InvariantCulture, DateTimeStyles.AssumeUniversal | DateTimeStyles.AdjustToUniversal);
+            return DateTime.ParseExact(text[..6] + "19" + text[6..], "dd/MM/yyyy", CultureInfo.InvariantCulture, Universal);
         var (day, time) = text.IndexOfAny(['T', ' ']) is > 0 and var at ? (text[..at], text[(at + 1)..]) : (text, "");
-        if (!DateTime.TryParseExact(day.Replace('/', '-'), ["yyyy-M-d"], CultureInfo.InvariantCulture, DateTimeStyles.AssumeUniversal | DateTimeStyles.AdjustToUniversal, out var date) || date.Year is < 1800 or > 2200) return null;
+        if (!DateTime.TryParseExact(day.Replace('/', '-'), ["yyyy-M-d"], CultureInfo.InvariantCulture, Universal, out var date))
+            return null;
+        if (date.Year is < 1800 or > 2200) return null;
         return date + (TimeOfDay(time) ?? TimeSpan.Zero);
     }
 

@@ -19,12 +19,12 @@ internal static partial class FrameFinder
     /// <summary>A frame by the names of the FITS Standard 4.0, table 27, also when written out.</summary>
     public static VelocityFrame? FromName(string name)
     {
-        var upper = name.ToUpperInvariant();
-        if (upper.StartsWith("TOPO", StringComparison.Ordinal) || upper.StartsWith("GEOC", StringComparison.Ordinal) || upper.StartsWith("OBSERVATORY", StringComparison.Ordinal)) return VelocityFrame.Topocentric;
-        if (upper.StartsWith("BARY", StringComparison.Ordinal)) return VelocityFrame.Barycentric;
-        if (upper.StartsWith("HELIO", StringComparison.Ordinal)) return VelocityFrame.Heliocentric;
-        if (upper.StartsWith("LSR", StringComparison.Ordinal)) return VelocityFrame.LocalStandardOfRest;
-        return upper.StartsWith("SOURCE", StringComparison.Ordinal) ? VelocityFrame.Rest : null;
+        if (name.BeginsWithAny("TOPO", "GEOC", "OBSERVATORY"))
+            return VelocityFrame.Topocentric;
+        if (name.BeginsWithAny("BARY")) return VelocityFrame.Barycentric;
+        if (name.BeginsWithAny("HELIO")) return VelocityFrame.Heliocentric;
+        if (name.BeginsWithAny("LSR")) return VelocityFrame.LocalStandardOfRest;
+        return name.BeginsWithAny("SOURCE") ? VelocityFrame.Rest : null;
     }
 
     private static (VelocityFrame, string)? FromFlags(HeaderScope header)
@@ -33,10 +33,13 @@ internal static partial class FrameFinder
         // Written by survey pipelines beside the coefficients of an axis that contains the correction.
         if (header.Number("HELIO_RV") is not null && header.Has("VACUUM")) return (VelocityFrame.Heliocentric, "keyword HELIO_RV");
         // Amateur archives define it as the correction that has been applied, 0 where none was.
-        if (header.Number("BSS_VHEL") is { } applied) return (applied == 0 ? VelocityFrame.Topocentric : VelocityFrame.Heliocentric, "keyword BSS_VHEL");
-        if (header.Text("DOPCOR01") is not null && header.Number("VHELIO") is not null) return (VelocityFrame.Heliocentric, "keywords DOPCOR01 and VHELIO");
+        if (header.Number("BSS_VHEL") is { } applied)
+            return (applied == 0 ? VelocityFrame.Topocentric : VelocityFrame.Heliocentric, "keyword BSS_VHEL");
+        if (header.Text("DOPCOR01") is not null && header.Number("VHELIO") is not null)
+            return (VelocityFrame.Heliocentric, "keywords DOPCOR01 and VHELIO");
         foreach (var keyword in (ReadOnlySpan<string>)["BARYCORR", "HELCORR", "BERVCORR", "HELIOCOR", "BARY_COR"])
-            if (header.Text(keyword)?.ToUpperInvariant() is "T" or "PERFORM" or "COMPLETE" or "DONE" or "APPLIED") return (keyword.StartsWith("HEL", StringComparison.Ordinal) ? VelocityFrame.Heliocentric : VelocityFrame.Barycentric, $"keyword {keyword}");
+            if (header.Text(keyword)?.ToUpperInvariant() is "T" or "PERFORM" or "COMPLETE" or "DONE" or "APPLIED")
+                return (keyword.BeginsWithAny("HEL") ? VelocityFrame.Heliocentric : VelocityFrame.Barycentric, $"keyword {keyword}");
         return null;
     }
 
@@ -54,9 +57,10 @@ internal static partial class FrameFinder
     /// <summary>What a line of free text says of the frame.</summary>
     public static VelocityFrame? FromText(string text)
     {
-        if (!text.Contains("centric", StringComparison.OrdinalIgnoreCase) && !text.Contains("center", StringComparison.OrdinalIgnoreCase) && !text.Contains("centre", StringComparison.OrdinalIgnoreCase)) return null;
+        if (!text.ContainsAny("centric", "center", "centre"))
+            return null;
         if (AppliedPattern().Match(text) is not { Success: true } match || DeniedPattern().IsMatch(text)) return null;
-        return match.Value.Contains("helio", StringComparison.OrdinalIgnoreCase) ? VelocityFrame.Heliocentric : VelocityFrame.Barycentric;
+        return match.Value.ContainsAny("helio") ? VelocityFrame.Heliocentric : VelocityFrame.Barycentric;
     }
 
     [GeneratedRegex(@"(corrected (to|for)|in|converted to|shifted to|wavelengths? (are|is)?)[^.;]{0,30}\b(helio|bary)cent|\b(helio|bary)centric (wavelength|correction (was |is |has been )?applied|corrected|frame|vacuum)|(vacuum|air)[ -](helio|bary)centric",

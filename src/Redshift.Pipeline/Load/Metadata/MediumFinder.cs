@@ -7,8 +7,8 @@ namespace Redshift.Pipeline.Load.Metadata;
 /// <summary>The medium of wavelengths: what the header says, or the documented default.</summary>
 internal static partial class MediumFinder
 {
-    // Spectroscopists give wavelengths below 2000 Å in vacuum, and whoever observes there is above the air.
-    private const double AirBegins = 2000;
+    /// <summary>Spectroscopists give wavelengths below these 2000 Å in vacuum, and whoever observes there is above the air.</summary>
+    public const double AirBegins = 2000;
 
     // Sky lines and lamps beyond 9500 Å are tabulated in vacuum by most infrared pipelines.
     private const double InfraredBegins = 9500;
@@ -41,8 +41,8 @@ internal static partial class MediumFinder
 
     private static WavelengthMedium? FromWord(string text)
     {
-        if (text.StartsWith("vac", StringComparison.OrdinalIgnoreCase)) return WavelengthMedium.Vacuum;
-        return text.StartsWith("air", StringComparison.OrdinalIgnoreCase) ? WavelengthMedium.Air : null;
+        if (text.BeginsWithAny("vac")) return WavelengthMedium.Vacuum;
+        return text.BeginsWithAny("air") ? WavelengthMedium.Air : null;
     }
 
     private static (WavelengthMedium Medium, string Where)? FromRemarks(IEnumerable<Card> cards)
@@ -58,8 +58,8 @@ internal static partial class MediumFinder
     /// <summary>What a line of free text says of the medium.</summary>
     public static WavelengthMedium? FromText(string text)
     {
-        var vacuum = text.Contains("vac", StringComparison.OrdinalIgnoreCase) && VacuumPattern().IsMatch(text);
-        var air = text.Contains("air", StringComparison.OrdinalIgnoreCase) && AirPattern().IsMatch(text);
+        var vacuum = text.ContainsAny("vac") && VacuumPattern().IsMatch(text);
+        var air = text.ContainsAny("air") && AirPattern().IsMatch(text);
         return vacuum == air ? null : vacuum ? WavelengthMedium.Vacuum : WavelengthMedium.Air;
     }
 

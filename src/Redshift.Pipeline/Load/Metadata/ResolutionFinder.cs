@@ -36,9 +36,9 @@ internal static class ResolutionFinder
     // One-letter keywords mean anything, and a "resolution" in Å or pixels is no power.
     private static bool IsPower(double power, Card card) =>
         power is >= 30 and <= 400_000
-        && (card.Keyword != "R" || card.Comment.Contains("resol", StringComparison.OrdinalIgnoreCase))
-        && !card.Comment.Contains("[nm]", StringComparison.OrdinalIgnoreCase)
-        && !card.Comment.Contains("m/s", StringComparison.OrdinalIgnoreCase);
+        && (card.Keyword != "R" || card.Comment.ContainsAny("resol"))
+        && !card.Comment.ContainsAny("[nm]")
+        && !card.Comment.ContainsAny("m/s");
 
     private static StatedResolution? FromWidth(HeaderScope header)
     {

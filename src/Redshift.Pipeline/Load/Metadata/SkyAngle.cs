@@ -28,7 +28,7 @@ internal static class SkyAngle
     {
         if (IsRadian(unit)) return 180 / Math.PI;
         var lower = unit.Trim().ToLowerInvariant();
-        return lower is "h" or "hr" or "hrs" or "hour" or "hours" || lower.Contains("[h", StringComparison.Ordinal) || lower.Contains("decimal hour", StringComparison.Ordinal) ? 15 : 1;
+        return lower is "h" or "hr" or "hrs" or "hour" or "hours" || lower.ContainsAny("[h", "decimal hour") ? 15 : 1;
     }
 
     private static bool IsRadian(string unit) => unit.Trim().ToLowerInvariant() is "rad" or "radian" or "radians";
@@ -52,7 +52,8 @@ internal static class SkyAngle
         var parts = new List<double>(3);
         foreach (var word in words)
         {
-            if (!double.TryParse(word, NumberStyles.Float, CultureInfo.InvariantCulture, out var part) || !double.IsFinite(part)) return null;
+            if (!double.TryParse(word, NumberStyles.Float, CultureInfo.InvariantCulture, out var part) || !double.IsFinite(part))
+                return null;
             parts.Add(parts.Count == 0 ? Math.Abs(part) : part);
         }
         return parts.Skip(1).All(static part => part is >= 0 and <= 60) ? parts : null;

@@ -6,6 +6,24 @@ namespace Redshift.Pipeline.Load.Metadata;
 /// <summary>A table with one row a spectrum that names the targets: a fibre table, or the table of the spectra itself.</summary>
 internal sealed class TargetTable
 {
+    private static readonly string[] NameColumns =
+    [
+        "TARGETID", "TARGET", "OBJECT", "NAME", "OBJNAME", "TARGNAME", "CNAME", "OBJID", "SOURCE_ID", "DESIGNATION", "ID", "TARGID",
+        "FIBREID", "FIBERID",
+    ];
+
+    private static readonly string[] RaColumns =
+    [
+        "TARGET_RA", "RA", "PLUG_RA", "TARGRA", "RA_TARG", "RAJ2000", "RA_ICRS", "OBJ_RA", "FIBRERA", "FIBER_RA", "RAOBJ", "ALPHA",
+        "ALPHA_J2000",
+    ];
+
+    private static readonly string[] DecColumns =
+    [
+        "TARGET_DEC", "DEC", "PLUG_DEC", "TARGDEC", "DEC_TARG", "DEJ2000", "DECJ2000", "DE_ICRS", "OBJ_DEC", "FIBREDEC", "FIBER_DEC",
+        "DECOBJ", "DELTA", "DELTA_J2000",
+    ];
+
     private readonly TableHdu _table;
     private readonly TableColumn? _name;
     private readonly TableColumn? _ra;
@@ -18,9 +36,9 @@ internal sealed class TargetTable
     public TargetTable(TableHdu table)
     {
         _table = table;
-        _name = Column("TARGETID", "TARGET", "OBJECT", "NAME", "OBJNAME", "TARGNAME", "CNAME", "OBJID", "SOURCE_ID", "DESIGNATION", "ID", "TARGID", "FIBREID", "FIBERID");
-        _ra = Column("TARGET_RA", "RA", "PLUG_RA", "TARGRA", "RA_TARG", "RAJ2000", "RA_ICRS", "OBJ_RA", "FIBRERA", "FIBER_RA", "RAOBJ", "ALPHA", "ALPHA_J2000");
-        _dec = Column("TARGET_DEC", "DEC", "PLUG_DEC", "TARGDEC", "DEC_TARG", "DEJ2000", "DECJ2000", "DE_ICRS", "OBJ_DEC", "FIBREDEC", "FIBER_DEC", "DECOBJ", "DELTA", "DELTA_J2000");
+        _name = Column(NameColumns);
+        _ra = Column(RaColumns);
+        _dec = Column(DecColumns);
         _type = Column("TYPE", "OBJTYPE", "FIBERTYPE", "FIBRETYPE", "TARGUSE", "TARGET_TYPE", "FIBTYPE");
         _status = Column("STATUS", "FIBSTATUS", "FIBRE_STATUS");
         _angleUnit = AngleUnit();
@@ -72,9 +90,13 @@ internal sealed class TargetTable
     private static FibreState FromName(string name)
     {
         var upper = name.ToUpperInvariant();
-        if (upper.Contains("PARKED", StringComparison.Ordinal) || upper.Contains("UNALLOC", StringComparison.Ordinal)) return FibreState.Parked;
-        if (upper.Contains("BROKEN", StringComparison.Ordinal) || upper.StartsWith("DEAD", StringComparison.Ordinal)) return FibreState.Broken;
-        return upper == "SKY" || upper.StartsWith("SKY_", StringComparison.Ordinal) || upper.StartsWith("SKY ", StringComparison.Ordinal) ? FibreState.Sky : FibreState.Object;
+        if (upper.ContainsAny("PARKED", "UNALLOC"))
+            return FibreState.Parked;
+        if (upper.ContainsAny("BROKEN") || upper.BeginsWithAny("DEAD"))
+            return FibreState.Broken;
+        return upper == "SKY" || upper.BeginsWithAny("SKY_", "SKY ")
+            ? FibreState.Sky
+            : FibreState.Object;
     }
 
     private TableColumn? Column(params ReadOnlySpan<string> names)
@@ -97,7 +119,8 @@ internal sealed class TargetTable
     {
         var largest = 0.0;
         for (var row = 0; row < Math.Min(_table.RowCount, 2000); row++)
-            if (double.TryParse(Text(column, row), CultureInfo.InvariantCulture, out var value)) largest = Math.Max(largest, Math.Abs(value));
+            if (double.TryParse(Text(column, row), CultureInfo.InvariantCulture, out var value))
+                largest = Math.Max(largest, Math.Abs(value));
         return largest;
     }
 

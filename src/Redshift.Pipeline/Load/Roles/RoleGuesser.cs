@@ -14,8 +14,8 @@ internal static class RoleGuesser
         var byName = ByName(label);
         if (Declared(label) is not { } declared) return byName;
         var rank = byName.Role == declared.Role ? byName.Rank : VariantPenalty;
-        if (label.Ucd.Contains("uncalib", StringComparison.OrdinalIgnoreCase)) rank += UncalibratedPenalty;
-        if (label.Utype.StartsWith("eso:", StringComparison.OrdinalIgnoreCase)) rank += UncalibratedPenalty;
+        if (label.Ucd.ContainsAny("uncalib")) rank += UncalibratedPenalty;
+        if (label.Utype.BeginsWithAny("eso:")) rank += UncalibratedPenalty;
         return declared with { Rank = rank };
     }
 
@@ -31,20 +31,23 @@ internal static class RoleGuesser
         if (utype.EndsWith("spectralaxis.value", StringComparison.Ordinal)) return Role.Wavelength;
         if (utype.EndsWith("fluxaxis.value", StringComparison.Ordinal)) return Role.Flux;
         if (utype.EndsWith("fluxaxis.accuracy.staterror", StringComparison.Ordinal)) return Role.Error;
-        if (utype.EndsWith("fluxaxis.quality", StringComparison.Ordinal) || utype.EndsWith("accuracy.qualitystatus", StringComparison.Ordinal)) return Role.Mask;
+        if (utype.EndsWith("fluxaxis.quality", StringComparison.Ordinal) || utype.EndsWith("accuracy.qualitystatus", StringComparison.Ordinal))
+            return Role.Mask;
         return utype.EndsWith("backgroundmodel.value", StringComparison.Ordinal) ? Role.Sky : null;
     }
 
     private static Role? ByUcd(string ucd)
     {
         if (ucd.Length == 0) return null;
-        if (ucd.Contains("stat.snr", StringComparison.Ordinal)) return Role.Other;
-        if (ucd.Contains("stat.error", StringComparison.Ordinal)) return ucd.Contains("phot", StringComparison.Ordinal) ? Role.Error : Role.Other;
-        if (ucd.Contains("background", StringComparison.Ordinal) || ucd.Contains(".sky", StringComparison.Ordinal)) return Role.Sky;
-        if (ucd.StartsWith("em.wl", StringComparison.Ordinal) || ucd.StartsWith("em.freq", StringComparison.Ordinal)
-            || ucd.StartsWith("em.energy", StringComparison.Ordinal) || ucd.StartsWith("em.wavenumber", StringComparison.Ordinal)) return Role.Wavelength;
-        if (ucd.StartsWith("meta.code", StringComparison.Ordinal)) return Role.Mask;
-        return ucd.StartsWith("phot.flux", StringComparison.Ordinal) || ucd.StartsWith("phot.count", StringComparison.Ordinal) ? Role.Flux : null;
+        if (ucd.ContainsAny("stat.snr")) return Role.Other;
+        if (ucd.ContainsAny("stat.error"))
+            return ucd.ContainsAny("phot") ? Role.Error : Role.Other;
+        if (ucd.ContainsAny("background", ".sky")) return Role.Sky;
+        if (ucd.BeginsWithAny("em.wl", "em.freq", "em.energy", "em.wavenumber")) return Role.Wavelength;
+        if (ucd.BeginsWithAny("meta.code")) return Role.Mask;
+        return ucd.BeginsWithAny("phot.flux", "phot.count")
+            ? Role.Flux
+            : null;
     }
 
     private static RoleGuess ByName(Label label)
@@ -69,7 +72,8 @@ internal static class RoleGuesser
         if (foreign) return Role.Other;
         if (Any(Vocabulary.Mask)) return Role.Mask;
         var isWavelength = Any(Vocabulary.Wavelength);
-        if (words.Any(Vocabulary.Flux.ContainsKey)) return isWavelength && !words.Contains("flux") && !words.Contains("f") ? Role.Wavelength : Role.Flux;
+        if (words.Any(Vocabulary.Flux.ContainsKey))
+            return isWavelength && !words.Contains("flux") && !words.Contains("f") ? Role.Wavelength : Role.Flux;
         return isWavelength ? Role.Wavelength : Role.Other;
     }
 

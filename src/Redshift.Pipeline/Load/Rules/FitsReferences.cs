@@ -17,7 +17,8 @@ internal sealed class FitsReferences(FitsFile file, string? defaultHdu)
     {
         var reference = ArrayReference.Parse(text);
         // A single word may be a column of the rule's unit or the name of another unit.
-        if (reference is { Hdu: null, Column: { } word } && Named(word) is { } named && !HasColumn(Default(), word)) return (Whole(named, null), named);
+        if (reference is { Hdu: null, Column: { } word } && Named(word) is { } named && !HasColumn(Default(), word))
+            return (Whole(named, null), named);
         var hdu = HduOf(reference, Default());
         return hdu switch
         {
@@ -43,7 +44,8 @@ internal sealed class FitsReferences(FitsFile file, string? defaultHdu)
     private static bool HasColumn(Hdu hdu, string name) => hdu is TableHdu table && table.Find(name) is not null;
 
     private static NumberArray Column(TableHdu table, string name) =>
-        TableUnits.Form(table)?.FirstOrDefault(array => array.Label.Name.Equals(name, StringComparison.OrdinalIgnoreCase)) ?? throw Missing($"HDU {table.Index} column {name}");
+        TableUnits.Form(table)?.FirstOrDefault(array => array.Label.Name.Equals(name, StringComparison.OrdinalIgnoreCase))
+        ?? throw Missing($"HDU {table.Index} column {name}");
 
     private static ImageArray Whole(Hdu hdu, int? row)
     {
@@ -57,5 +59,6 @@ internal sealed class FitsReferences(FitsFile file, string? defaultHdu)
             : new(image, length, (int)rows, 0, length) { Place = $"HDU {hdu.Index}", Label = label };
     }
 
-    private static LoadException Missing(string what) => new("pipeline file, [[load]]", $"{what}, which the file does not have", "the places of arrays in the file");
+    private static LoadException Missing(string what) =>
+        new("pipeline file, [[load]]", $"{what}, which the file does not have", "the places of arrays in the file");
 }

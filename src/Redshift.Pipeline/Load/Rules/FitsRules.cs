@@ -24,7 +24,13 @@ internal static class FitsRules
         var (flux, hdu) = arrays.Resolve(rule.Flux!);
         var header = FitsLayouts.ScopeOf(hdu, file);
         var spectrum = new SpectrumSources { Flux = flux, Wavelength = Wavelength(arrays, rule, file, hdu, flux.Length) };
-        return new() { Spectra = [WithNoise(spectrum, arrays, rule)], Rows = flux.Rows, Header = header, Targets = flux.Rows > 1 ? TargetTable.For(file, flux.Rows) : null };
+        return new()
+        {
+            Spectra = [WithNoise(spectrum, arrays, rule)],
+            Rows = flux.Rows,
+            Header = header,
+            Targets = flux.Rows > 1 ? TargetTable.For(file, flux.Rows) : null,
+        };
     }
 
     private static Layout Override(Layout layout, FitsFile file, LoadRule rule)
@@ -53,15 +59,22 @@ internal static class FitsRules
     private static WavelengthSource Wavelength(FitsReferences arrays, LoadRule rule, FitsFile file, Hdu fluxHdu, int length)
     {
         var unit = UnitOf(rule);
-        if (rule.Wavelength is { } place && !ArrayReference.Parse(place).IsAxis) return new ArrayWavelengths(arrays.Resolve(place).Array, unit);
+        if (rule.Wavelength is { } place && !ArrayReference.Parse(place).IsAxis)
+            return new ArrayWavelengths(arrays.Resolve(place).Array, unit);
         var hdu = rule.Wavelength is { } axis ? arrays.HduOf(ArrayReference.Parse(axis), fluxHdu) : fluxHdu;
         var header = FitsLayouts.ScopeOf(hdu, file);
         var found = unit is { } stated && AxisReader.LinearPart(header, 1) is { } pixels
             ? new LinearAxis(pixels, stated, null) { Why = "the unit of the pipeline file" }
             : AxisReader.Read(header, 1, length, file);
-        return found is null ? throw new LoadException($"HDU {hdu.Index}", "no axis", "CRVAL1 with CDELT1 or CD1_1") : new AxisWavelengths(found, hdu.Index);
+        return found is null
+            ? throw new LoadException($"HDU {hdu.Index}", "no axis", "CRVAL1 with CDELT1 or CD1_1")
+            : new AxisWavelengths(found, hdu.Index);
     }
 
-    private static SpectralUnit? UnitOf(LoadRule rule) => rule.WavelengthUnit is not { } text ? null
-        : SpectralUnit.Parse(text) ?? throw new LoadException("pipeline file, wavelength_unit", $"'{text}'", "a unit such as Angstrom, nm or log10(Angstrom)");
+    private static SpectralUnit? UnitOf(LoadRule rule)
+    {
+        if (rule.WavelengthUnit is not { } text) return null;
+        return SpectralUnit.Parse(text)
+            ?? throw new LoadException("pipeline file, wavelength_unit", $"'{text}'", "a unit such as Angstrom, nm or log10(Angstrom)");
+    }
 }

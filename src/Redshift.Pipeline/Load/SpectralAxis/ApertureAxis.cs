@@ -44,7 +44,7 @@ internal sealed partial class ApertureAxis : PixelAxis
     public static IReadOnlyList<ApertureAxis> ReadAll(HeaderScope header)
     {
         var text = Attributes(header);
-        if (!text.Contains("multispec", StringComparison.OrdinalIgnoreCase)) return [];
+        if (!text.ContainsAny("multispec")) return [];
         return [.. SpecPattern().Matches(text).Select(match => Parse(match.Groups[2].Value)).OfType<ApertureAxis>()];
     }
 

@@ -21,7 +21,9 @@ internal static class AxisReader
         var type = TypeOf(header, axis);
         if (type is { } known && IsTable(known.Code)) return TableAxisReader.Read(header, axis, known.Variable, file);
         if (LinearPart(header, axis) is not { } pixels) return LogarithmCards(header);
-        return type is { } standard ? Standard(header, axis, standard.Variable, standard.Code, pixels, length) : LegacyAxis.Read(header, axis, pixels, length);
+        return type is { } standard
+            ? Standard(header, axis, standard.Variable, standard.Code, pixels, length)
+            : LegacyAxis.Read(header, axis, pixels, length);
     }
 
     /// <summary>Whether CTYPE names a celestial, time or other axis that is not spectral.</summary>

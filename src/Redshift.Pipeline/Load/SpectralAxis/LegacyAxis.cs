@@ -15,7 +15,10 @@ internal static class LegacyAxis
         var stated = UnitText.Find(header, axis);
         var logarithm = LogarithmOf(header, axis, pixels, low, high, stated?.Unit);
         if (logarithm != AxisScale.Linear)
-            return new LinearAxis(pixels, SpectralUnit.Angstrom.On(logarithm), null) { Why = $"a {logarithm.ToString().ToLowerInvariant()} axis by {LogarithmWitness(header, pixels)}" };
+        {
+            var why = $"a {logarithm.ToString().ToLowerInvariant()} axis by {LogarithmWitness(header, pixels)}";
+            return new LinearAxis(pixels, SpectralUnit.Angstrom.On(logarithm), null) { Why = why };
+        }
         if (stated is { } found && IsPlausible(found.Unit, low, high))
             return new LinearAxis(pixels, found.Unit, null) { Why = $"unit from {found.Where}" };
         return new LinearAxis(pixels, WavelengthGuess.Unit(low, high), null) { Why = GuessedWhy };
@@ -27,7 +30,7 @@ internal static class LegacyAxis
     /// <summary>Whether cards say that the axis is log10 of wavelength.</summary>
     public static bool IsFlaggedLogarithmic(HeaderScope header, LinearPixels pixels) =>
         header.Number("DC-FLAG") == 1 || IsCoefficientPair(header, pixels)
-        || (header.Text("WFITTYPE") ?? "").Contains("LOG", StringComparison.OrdinalIgnoreCase);
+        || (header.Text("WFITTYPE") ?? "").ContainsAny("LOG");
 
     private static bool IsCoefficientPair(HeaderScope header, LinearPixels pixels) =>
         header.Number("COEFF0") is { } zero && Math.Abs(zero - pixels.ReferenceValue) < 1e-6 * Math.Abs(zero);
@@ -41,9 +44,10 @@ internal static class LegacyAxis
     {
         if (unit is { Scale: not AxisScale.Linear } said) return said.Scale;
         var type = header.Text(HeaderScope.Indexed("CTYPE", axis))?.ToUpperInvariant() ?? "";
-        var named = type.Contains("LOG", StringComparison.Ordinal) || IsFlaggedLogarithmic(header, pixels);
+        var named = type.ContainsAny("LOG") || IsFlaggedLogarithmic(header, pixels);
         if (named && IsPlausible(SpectralUnit.Angstrom.On(AxisScale.Log10), low, high)) return AxisScale.Log10;
-        if ((named || type is "LN" or "LNLAMBDA" or "LN-WAVE") && IsPlausible(SpectralUnit.Angstrom.On(AxisScale.Ln), low, high)) return AxisScale.Ln;
+        if ((named || type is "LN" or "LNLAMBDA" or "LN-WAVE") && IsPlausible(SpectralUnit.Angstrom.On(AxisScale.Ln), low, high))
+            return AxisScale.Ln;
         var fitsAngstroms = unit is null or { Quantity: SpectralQuantity.Wavelength, Factor: 1 };
         return fitsAngstroms && WavelengthGuess.LooksLogarithmic(low, high) ? AxisScale.Log10 : AxisScale.Linear;
     }

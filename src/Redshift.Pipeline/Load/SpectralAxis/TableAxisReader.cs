@@ -39,7 +39,8 @@ internal static class TableAxisReader
 
     private static double[] InAngstrom(double[] coordinates, SpectralUnit unit, SpectralVariable variable)
     {
-        if (SpectralScale.NeedsRest(variable)) throw new LoadException("coordinate table", "velocities", "wavelengths, frequencies, wavenumbers or energies");
+        if (SpectralScale.NeedsRest(variable))
+            throw new LoadException("coordinate table", "velocities", "wavelengths, frequencies, wavenumbers or energies");
         return Array.ConvertAll(coordinates, unit.ToAngstrom);
     }
 

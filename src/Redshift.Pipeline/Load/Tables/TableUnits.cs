@@ -12,7 +12,8 @@ internal static class TableUnits
 {
     private const int FewestPixels = 16;
 
-    private static readonly string[] OrderColumns = ["SPORDER", "ORDER", "ORDERS", "ECH_ORDER", "SEGMENT", "ARM", "CHIP", "CAMERA", "CHANNEL", "APERTURE"];
+    private static readonly string[] OrderColumns =
+        ["SPORDER", "ORDER", "ORDERS", "ECH_ORDER", "SEGMENT", "ARM", "CHIP", "CAMERA", "CHANNEL", "APERTURE"];
 
     private static readonly string[] StepColumns = ["DELTAW", "DELTA", "STEP", "DW", "DLAMBDA", "DELTA_WAVE", "WAVESTEP", "CDELT"];
 
@@ -29,11 +30,15 @@ internal static class TableUnits
     {
         var numeric = table.Columns.Where(static column => column.IsNumeric).ToList();
         var vectors = numeric.Where(column => CellLength(column) >= FewestPixels).ToList();
-        if (vectors.Count > 0) return [.. vectors.Select(column => new CellArray(column, CellLength(column), Rows(table)) { Place = Place(table, column), Label = LabelOf(column) })];
+        if (vectors.Count > 0)
+            return [.. vectors.Select(column => Cells(table, column))];
         if (table.RowCount < FewestPixels || table.RowCount > Array.MaxLength) return null;
         return [.. numeric.Where(static column => !column.IsVariableLength && column.Repeat == 1)
             .Select(column => new ColumnArray(column, Rows(table)) { Place = Place(table, column), Label = LabelOf(column) })];
     }
+
+    private static CellArray Cells(TableHdu table, TableColumn column) =>
+        new(column, CellLength(column), Rows(table)) { Place = Place(table, column), Label = LabelOf(column) };
 
     private static int Rows(TableHdu table) => (int)Math.Min(table.RowCount, int.MaxValue);
 
@@ -47,7 +52,9 @@ internal static class TableUnits
     private static bool HoldsSpectra(IReadOnlyList<NumberArray> arrays, TableHdu table, FitsFile file)
     {
         var roles = new RoleChoice(arrays, Name(table));
-        return roles.Has(Role.Flux) && (roles.Has(Role.Wavelength) || (arrays[0] is CellArray && (Steps(table) is not null || Axis(table, arrays[0].Length, file) is not null)));
+        if (!roles.Has(Role.Flux)) return false;
+        if (roles.Has(Role.Wavelength)) return true;
+        return arrays[0] is CellArray && (Steps(table) is not null || Axis(table, arrays[0].Length, file) is not null);
     }
 
     private static string Name(TableHdu table) => $"HDU {table.Index} {table.Name}".TrimEnd();
@@ -56,7 +63,9 @@ internal static class TableUnits
     {
         var roles = new RoleChoice(arrays, Name(table));
         var flux = roles.Single(Role.Flux)!;
-        WavelengthSource wavelength = roles.Has(Role.Wavelength) ? new ArrayWavelengths(WavelengthOf(roles, flux)) : (WavelengthSource?)Steps(table) ?? Axis(table, flux.Length, file)!;
+        WavelengthSource wavelength = roles.Has(Role.Wavelength)
+            ? new ArrayWavelengths(WavelengthOf(roles, flux))
+            : (WavelengthSource?)Steps(table) ?? Axis(table, flux.Length, file)!;
         var sources = new SpectrumSources
         {
             Wavelength = wavelength,
@@ -101,11 +110,7 @@ internal static class TableUnits
 
     private static IReadOnlyList<ReadingNote> Notes(RoleChoice roles, SpectrumSources sources)
     {
-        var unused = string.Join(", ", roles.Unused([sources.Flux]).Where(name => !UsedNames(sources).Contains(name)));
+        var unused = string.Join(", ", roles.Unused([.. sources.Places]));
         return unused.Length == 0 ? [] : [new("left aside", unused, "other forms of the same, or not needed")];
     }
-
-    private static IEnumerable<string> UsedNames(SpectrumSources sources) =>
-        new[] { sources.Wavelength.Place, sources.Noise?.Values.Place, sources.Mask?.Place, sources.Width?.Place }
-            .OfType<string>().Select(static place => place[(place.LastIndexOf(' ') + 1)..]);
 }

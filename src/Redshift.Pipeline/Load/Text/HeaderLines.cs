@@ -41,7 +41,8 @@ internal static partial class HeaderLines
     {
         if (column != 0) return "";
         foreach (var remark in remarks)
-            if (WavelengthUnitPattern().Match(remark) is { Success: true } match && SpectralUnit.Parse(match.Groups[1].Value) is not null) return match.Groups[1].Value;
+            if (WavelengthUnitPattern().Match(remark) is { Success: true } match && SpectralUnit.Parse(match.Groups[1].Value) is not null)
+                return match.Groups[1].Value;
         return "";
     }
 

@@ -17,6 +17,20 @@ internal static partial class NumberLine
         return line.Split(Blanks, StringSplitOptions.RemoveEmptyEntries);
     }
 
+    /// <summary>The numbers of a line that holds nothing but plain numbers between blanks; false for any other line.</summary>
+    public static bool TryReadPlain(ReadOnlySpan<char> line, List<double> into)
+    {
+        into.Clear();
+        foreach (var range in line.SplitAny(Blanks))
+        {
+            var field = line[range];
+            if (field.IsEmpty) continue;
+            if (!double.TryParse(field, NumberStyles.Float, CultureInfo.InvariantCulture, out var number)) return false;
+            into.Add(number);
+        }
+        return into.Count > 0;
+    }
+
     /// <summary>The numbers of a line into a list; false where one of its fields is none.</summary>
     /// <remarks>Two numbers run together at a minus sign are taken apart: "5000.00-0.12" has one reading only.</remarks>
     public static bool TryRead(string[] fields, List<double> into)

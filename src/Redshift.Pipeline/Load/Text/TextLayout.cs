@@ -60,7 +60,8 @@ internal static class TextLayout
             if (values[i] > values[i - 1]) rising++;
             if (values[i] < values[i - 1]) falling++;
         }
-        if (values.Any(static value => value <= 0) || Math.Min(rising, falling) * 10 > values.Length || Math.Max(rising, falling) * 2 < values.Length)
+        var isOrdered = Math.Min(rising, falling) * 10 <= values.Length && Math.Max(rising, falling) * 2 >= values.Length;
+        if (!isOrdered || values.Any(static value => value <= 0))
             throw new LoadException("column 1", "numbers that are not in order or not positive", "wavelengths");
     }
 
@@ -76,5 +77,8 @@ internal static class TextLayout
     }
 
     private static IReadOnlyList<ReadingNote> Notes(TextTable table) =>
-        [new("columns", table.Names.Any(static name => name.Length > 0) ? string.Join(", ", table.Names) : $"{table.Columns.Count} without names", "the lines above the numbers")];
+        [new("columns", Described(table), "the lines above the numbers")];
+
+    private static string Described(TextTable table) =>
+        table.Names.Any(static name => name.Length > 0) ? string.Join(", ", table.Names) : $"{table.Columns.Count} without names";
 }
