@@ -12,10 +12,10 @@ public sealed class FitsReadOptions
     public long MaxExpandedBytes { get; init; } = 4L << 30;
 
     /// <summary>
-    /// Most bytes that one compressed byte may stand for once the expansion passes 64 MiB. Default 250: gzip reaches 1032 at
-    /// best, on nothing but zeros.
+    /// Most bytes that one compressed byte may stand for once the expansion passes 64 MiB. Default 1000: gzip reaches 1032 at
+    /// best, on nothing but zeros, and blank images in tiles some hundreds.
     /// </summary>
-    public int MaxExpansionRatio { get; init; } = 250;
+    public int MaxExpansionRatio { get; init; } = 1000;
 
     // Small files may compress as well as they like.
     private const long AlwaysAllowed = 64L << 20;

@@ -13,14 +13,14 @@ public sealed class TableColumn
     private readonly TableHdu _table;
     private readonly ColumnShape _shape;
     private readonly ColumnCells _cells;
-    private readonly bool _isExact;
+    private readonly Scaling _scaling;
 
-    internal TableColumn(TableHdu table, int index, ColumnShape shape, ColumnCells cells, bool isExact)
+    internal TableColumn(TableHdu table, int index, ColumnShape shape, ColumnCells cells, Scaling scaling)
     {
         _table = table;
         _shape = shape;
         _cells = cells;
-        _isExact = isExact;
+        _scaling = scaling;
         Index = index;
         Name = Text("TTYPE") ?? "";
         var axes = Fits.Dimensions.TryParse(Text("TDIM"));
@@ -64,7 +64,7 @@ public sealed class TableColumn
     public bool IsText => Type == ColumnType.Text;
 
     /// <summary>Whether all numbers are integers that <see cref="ReadIntegers"/> gives exactly.</summary>
-    public bool IsInteger => IsNumeric && Type is not (ColumnType.Single or ColumnType.Double) && _isExact;
+    public bool IsInteger => IsNumeric && Type is not (ColumnType.Single or ColumnType.Double) && _scaling.IsExact;
 
     /// <summary>Number of elements in a cell.</summary>
     /// <exception cref="FitsIntegrityException">The cell points outside the heap.</exception>
@@ -171,7 +171,7 @@ public sealed class TableColumn
         var parts = new double[2 * _cells.LengthAt(row)];
         _cells.ReadDoubles(row, parts);
         var values = new Complex[parts.Length / 2];
-        for (var i = 0; i < values.Length; i++) values[i] = new Complex(parts[2 * i], parts[2 * i + 1]);
+        for (var i = 0; i < values.Length; i++) values[i] = new Complex(_scaling.Zero + parts[2 * i], parts[2 * i + 1]);
         return values;
     }
 

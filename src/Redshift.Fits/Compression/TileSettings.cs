@@ -4,7 +4,8 @@ namespace Redshift.Fits;
 internal sealed record TileSettings(
     TileMethod Method, Quantization Quantization, long Seed, int BlockSize, int BytePix, bool Smooth, double? Scale, double? Zero, long? Blank)
 {
-    private const int LargestBlock = 1 << 20;
+    // The standard knows 16 and 32.
+    private const int LargestBlock = 1024;
 
     public static TileSettings Read(Header header, FitsLocation where) => new(
         ReadMethod(header, where),

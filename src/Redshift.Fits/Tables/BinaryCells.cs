@@ -9,6 +9,9 @@ internal sealed class BinaryCells(TableRows rows, BinaryFormat format, int offse
     // Rows of a long table are fetched in pieces of about this size.
     private const int PieceLength = 1 << 20;
 
+    // Of longer rows only the number itself is fetched.
+    private const int LongRow = 1 << 13;
+
     private readonly Bitpix _bitpix = format.Type.ToBitpix();
 
     public override int LengthAt(long row) => Locate(row).Count;
@@ -39,7 +42,7 @@ internal sealed class BinaryCells(TableRows rows, BinaryFormat format, int offse
 
     public override void ReadColumn(long firstRow, Span<double> into)
     {
-        var most = Math.Max(1, PieceLength / rows.RowLength);
+        var most = rows.RowLength > LongRow ? 1 : PieceLength / rows.RowLength;
         for (var done = 0; done < into.Length; done += most)
         {
             var part = into[done..Math.Min(done + most, into.Length)];

@@ -27,9 +27,10 @@ internal static class ColumnReader
         offset += format.Width;
         RequireInside(table.Rows, offset, where);
         var scaling = ReadScaling(table.Header, index, table.Header.GetInteger(Keywords.Indexed("TNULL", index + 1)));
-        var cells = new BinaryCells(table.Rows, format, (int)start, scaling, where);
+        // What is added to a complex number is real: the column adds it to the first of the two parts.
+        var cells = new BinaryCells(table.Rows, format, (int)start, format.Type.IsComplex() ? scaling with { Zero = 0 } : scaling, where);
         var shape = new ColumnShape(format.Type, format.Repeat, format.IsVariable, format.SubstringLength);
-        return new TableColumn(table, index, shape, cells, scaling.IsExact);
+        return new TableColumn(table, index, shape, cells, scaling);
     }
 
     private static TableColumn ReadAscii(TableHdu table, int index)
@@ -41,7 +42,7 @@ internal static class ColumnReader
         var scaling = ReadScaling(table.Header, index, null);
         var nullText = table.Header.GetString(Keywords.Indexed("TNULL", index + 1));
         var cells = new AsciiCells(table.Rows, format, (int)start, scaling, nullText, where);
-        return new TableColumn(table, index, new ColumnShape(format.Type, 1, false, 0), cells, scaling.IsExact);
+        return new TableColumn(table, index, new ColumnShape(format.Type, 1, false, 0), cells, scaling);
     }
 
     private static (string Text, FitsLocation Where) FormatOf(TableHdu table, int index)

@@ -81,6 +81,7 @@ for repeat in [1, 3]:
         add(f"{form}{repeat}", f"{repeat}{form}", rng.normal(0, 1, shape).astype(kind), "D")
     for form, kind in [("C", "c8"), ("M", "c16")]:
         add(f"{form}{repeat}", f"{repeat}{form}", (rng.normal(0, 1, shape) + 1j * rng.normal(0, 1, shape)).astype(kind), "C")
+    add(f"SC{repeat}", f"{repeat}C", (rng.normal(0, 1, shape) + 1j * rng.normal(0, 1, shape)).astype("c8"), "Y")
     add(f"L{repeat}", f"{repeat}L", rng.integers(0, 2, shape).astype(bool), "L")
     add(f"S{repeat}", f"{repeat}I", rng.integers(0, 9, shape).astype("i2"), "Z")
 add("X11", "11X", rng.integers(0, 2, (ROWS, 11)).astype(bool), "X")
@@ -102,6 +103,8 @@ number = len(units) - 1
 for index, (column, code, *_) in enumerate(columns, 1):
     if code == "Z":
         table.header[f"XSCAL{index}"], table.header[f"XZERO{index}"], table.header[f"XNULL{index}"] = 0.25, 1.5, 7
+    if code == "Y":
+        table.header[f"XSCAL{index}"], table.header[f"XZERO{index}"] = 0.25, 1.5
     if code == "G":
         table.header[f"XZERO{index}"] = -128
 for column, code, array, more in columns:
@@ -118,6 +121,9 @@ for column, code, array, more in columns:
             lines.append(f"D {number} {column.name} {row} {doubles(cell)}")
         elif code == "C":
             lines.append(f"C {number} {column.name} {row} {doubles([part for v in cell for part in (v.real, v.imag)])}")
+        elif code == "Y":
+            parts = [part for v in cell for part in (1.5 + 0.25 * float(v.real), 0.25 * float(v.imag))]
+            lines.append(f"C {number} {column.name} {row} {doubles(parts)}")
         elif code in "LX":
             lines.append(f"{code} {number} {column.name} {row} {' '.join(str(int(v)) for v in cell)}")
         elif code == "S":
