@@ -26,11 +26,11 @@ internal sealed class Matcher(MatchSettings settings)
         var runs = observation.Spectra.Select(s => PixelRun.Binned(s, Cells.Step)).ToList();
         var peaks = Search(observation, ModelError.Uniform);
         if (peaks.Count == 0) return null;
-        var error = Learn(peaks, runs);
-        if (error.Greatest > SearchAgain) peaks.AddRange(Search(observation, error));
+        var (error, leaders) = Learn(peaks, runs);
+        if (error.Greatest > SearchAgain) leaders.AddRange(Search(observation, error));
         var pixels = FitPixels.Build(runs, error, Cells.Step);
         var fit = new ModelFit(pixels);
-        var refined = Climb(fit, peaks);
+        var refined = Climb(fit, leaders);
         var best = refined.MaxBy(r => r.LnEvidence)!;
         fit.LnEvidence(best.Model, best.LnShift);
         var excess = ResidualExcess.Measure(pixels, fit.Curves().Model);
@@ -43,25 +43,29 @@ internal sealed class Matcher(MatchSettings settings)
     private List<Peak> Search(NormalizedObservation observation, ModelError error) =>
         new GridSearch(Cells.Build(observation.Spectra, error), settings).Peaks();
 
-    /// <summary>Measures the model error on the best model of a first round.</summary>
-    private static ModelError Learn(List<Peak> peaks, List<PixelRun> runs)
+    /// <summary>Measures the model error on the best model of a first round, and keeps the peaks that are worth a second.</summary>
+    private static (ModelError Error, List<Peak> Leaders) Learn(List<Peak> peaks, List<PixelRun> runs)
     {
         var pixels = FitPixels.Build(runs, ModelError.Uniform, Cells.Step);
         var fit = new ModelFit(pixels);
-        var best = peaks.MaxBy(p => fit.LnEvidence(p.Model, p.LnShift));
+        var exact = peaks.ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) });
+        var best = exact.MaxBy(p => p.LnEvidence);
         var climbed = Refinement.Climb(fit, best.Model, best.LnShift, 0.5 * Cells.Step);
         fit.LnEvidence(climbed.Model, climbed.LnShift);
-        return ModelError.Measure(pixels, runs, fit.Curves().Model);
+        return (ModelError.Measure(pixels, runs, fit.Curves().Model), Leaders(exact));
     }
 
-    private static List<Refined> Climb(ModelFit fit, List<Peak> peaks)
+    private static List<Peak> Leaders(List<Peak> peaks)
     {
-        var first = peaks.ConvertAll(p => (Peak: p, LnEvidence: fit.LnEvidence(p.Model, p.LnShift)));
-        var best = first.Max(f => f.LnEvidence);
+        var best = peaks.Max(p => p.LnEvidence);
         var floor = best - Hopeless - HopelessShare * Math.Abs(best);
-        var leaders = first.GroupBy(f => f.Peak.Model.Kind).SelectMany(g => g.OrderByDescending(f => f.LnEvidence).Take(AlwaysClimbed)).ToHashSet();
-        return [.. first.Where(f => f.LnEvidence > floor || leaders.Contains(f)).Select(f => Refinement.Climb(fit, f.Peak.Model, f.Peak.LnShift, 0.5 * Cells.Step))];
+        var always = peaks.GroupBy(p => p.Model.Kind).SelectMany(g => g.OrderByDescending(p => p.LnEvidence).Take(AlwaysClimbed)).ToHashSet();
+        return peaks.FindAll(p => p.LnEvidence > floor || always.Contains(p));
     }
+
+    private static List<Refined> Climb(ModelFit fit, List<Peak> peaks) =>
+        Leaders(peaks.ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) }))
+            .ConvertAll(p => Refinement.Climb(fit, p.Model, p.LnShift, 0.5 * Cells.Step));
 }
 
 /// <summary>What matching gives.</summary>

@@ -19,7 +19,10 @@ internal sealed class FitPixels
         Continuum = new float[count];
         Level = new byte[count];
         SplineFirst = new int[count];
-        Spline = new float[4 * count];
+        Spline = new float[4][];
+        for (var j = 0; j < 4; j++) Spline[j] = new float[count];
+        SplinePairs = new float[10][];
+        for (var j = 0; j < 10; j++) SplinePairs[j] = new float[count];
         PriorMatrix = new double[coefficients * (BandedCholesky.Band + 1)];
     }
 
@@ -43,8 +46,14 @@ internal sealed class FitPixels
     /// <summary>First spline coefficient of a pixel.</summary>
     public int[] SplineFirst { get; }
 
-    /// <summary>Four basis values a pixel, times the baseline.</summary>
-    public float[] Spline { get; }
+    /// <summary>The four basis values at each pixel, times the baseline.</summary>
+    public float[][] Spline { get; }
+
+    /// <summary>Products of the basis values, (j, k) with k ≤ j at j(j+1)/2 + k.</summary>
+    public float[][] SplinePairs { get; }
+
+    /// <summary>Stretches of pixels that share their four coefficients.</summary>
+    public List<(int Start, int End)> Intervals { get; } = [];
 
     /// <summary>Smoothness prior of all splines.</summary>
     public double[] PriorMatrix { get; }
@@ -76,6 +85,7 @@ internal sealed class FitPixels
 
     private void Fill(PixelRun run, CubicBSpline spline, int at, int coefficient, ModelError modelError, double errorWidth)
     {
+        Span<float> four = stackalloc float[4];
         for (var i = 0; i < run.Flux.Length; i++)
         {
             var p = at + i;
@@ -86,10 +96,24 @@ internal sealed class FitPixels
             SigmaLn[p] = run.SigmaLn[i];
             Level[p] = (byte)LineSpreadLevels.Nearest(run.SigmaLn[i]);
             Continuum[p] = Math.Max(run.Continuum[i], 0.5f * run.Baseline[i]);
-            SplineFirst[p] = coefficient + spline.Evaluate(run.LnWavelength[i], Spline.AsSpan(4 * p, 4));
-            for (var j = 0; j < 4; j++) Spline[4 * p + j] *= run.Baseline[i];
+            SplineFirst[p] = coefficient + spline.Evaluate(run.LnWavelength[i], four);
+            for (var j = 0; j < 4; j++) Spline[j][p] = four[j] * run.Baseline[i];
+            for (var j = 0; j < 4; j++)
+                for (var k = 0; k <= j; k++) SplinePairs[j * (j + 1) / 2 + k][p] = Spline[j][p] * Spline[k][p];
         }
 
+        AddIntervals(at, at + run.Flux.Length);
+
         SmoothFit.AddPrior(PriorMatrix, coefficient, spline.Count);
+    }
+
+    private void AddIntervals(int start, int end)
+    {
+        for (var p = start + 1; p <= end; p++)
+        {
+            if (p < end && SplineFirst[p] == SplineFirst[start]) continue;
+            Intervals.Add((start, p));
+            start = p;
+        }
     }
 }

@@ -24,6 +24,8 @@ internal sealed class ModelFit
     private readonly FitPixels _pixels;
     private readonly float[] _template;
     private readonly float[] _weight;
+    private readonly float[] _weighted;
+    private readonly float[] _product;
     private readonly double[] _matrix;
     private readonly double[] _right;
     private readonly BandedCholesky _cholesky = new();
@@ -36,6 +38,8 @@ internal sealed class ModelFit
         _pixels = pixels;
         _template = new float[pixels.Count];
         _weight = (float[])pixels.Weight.Clone();
+        _weighted = new float[pixels.Count];
+        _product = new float[pixels.Count];
         _matrix = new double[pixels.PriorMatrix.Length];
         _right = new double[pixels.Coefficients];
         Array.Fill(_template, 1f);
@@ -157,26 +161,22 @@ internal sealed class ModelFit
     {
         _pixels.PriorMatrix.CopyTo(_matrix, 0);
         Array.Clear(_right);
-        var spline = _pixels.Spline;
-        for (var p = 0; p < _template.Length; p++)
+        Kernels.Multiply(_weight, _template, _weighted);
+        Kernels.Multiply(_weighted, _pixels.Flux, _product);
+        AddBasisProducts(_product, _right);
+        Kernels.Multiply(_weighted, _template, _product);
+        foreach (var (start, end) in _pixels.Intervals)
         {
-            double t = _template[p], w = _weight[p] * t;
-            var first = _pixels.SplineFirst[p];
-            var wf = w * _pixels.Flux[p];
-            var wt = w * t;
+            var first = _pixels.SplineFirst[start];
+            var values = _product.AsSpan(start, end - start);
             for (var j = 0; j < 4; j++)
-            {
-                double b = spline[4 * p + j];
-                _right[first + j] += wf * b;
-                var wtb = wt * b;
-                var row = (first + j) * Row + j;
-                for (var k = 0; k <= j; k++) _matrix[row - k] += wtb * spline[4 * p + k];
-            }
+                for (var k = 0; k <= j; k++)
+                    _matrix[(first + j) * Row + (j - k)] += Kernels.Dot(values, _pixels.SplinePairs[j * (j + 1) / 2 + k].AsSpan(start, end - start));
         }
 
         _cholesky.Factor(_matrix, _pixels.Coefficients);
         _cholesky.Forward(_right);
-        return 0.5 * Dot(_right, _right) - _cholesky.HalfLogDeterminant;
+        return 0.5 * Kernels.Dot(_right, _right) - _cholesky.HalfLogDeterminant;
     }
 
     /// <summary>Columns smooth × (partner − template), and smooth × (template − 1) for the contrast, with the smooth part just found.</summary>
@@ -218,11 +218,22 @@ internal sealed class ModelFit
         {
             var first = _pixels.SplineFirst[p];
             double sum = 0;
-            for (var j = 0; j < 4; j++) sum += _pixels.Spline[4 * p + j] * coefficients[first + j];
+            for (var j = 0; j < 4; j++) sum += _pixels.Spline[j][p] * coefficients[first + j];
             smooth[p] = (float)sum;
         }
 
         return smooth;
+    }
+
+    /// <summary>Adds Σ values·basis to each coefficient.</summary>
+    private void AddBasisProducts(float[] values, double[] sums)
+    {
+        foreach (var (start, end) in _pixels.Intervals)
+        {
+            var first = _pixels.SplineFirst[start];
+            for (var j = 0; j < 4; j++)
+                sums[first + j] += Kernels.Dot(values.AsSpan(start, end - start), _pixels.Spline[j].AsSpan(start, end - start));
+        }
     }
 
     private void AddColumn(FitModel model, EmissionGroup group, double lnShift)
@@ -279,9 +290,9 @@ internal sealed class ModelFit
         {
             var column = _columns[g];
             column.Index = g;
-            column.Gradient -= Dot(column.Projected, _right);
+            column.Gradient -= Kernels.Dot(column.Projected, _right);
             column.Products = new double[_columns.Count];
-            for (var h = 0; h <= g; h++) column.Products[h] = Overlap(column, _columns[h]) - Dot(column.Projected, _columns[h].Projected);
+            for (var h = 0; h <= g; h++) column.Products[h] = Overlap(column, _columns[h]) - Kernels.Dot(column.Projected, _columns[h].Projected);
         }
 
         for (var g = 0; g < _columns.Count; g++)
@@ -291,6 +302,22 @@ internal sealed class ModelFit
     private void Project(Column column)
     {
         column.Projected = new double[_pixels.Coefficients];
+        if (column.Group is null) ProjectDense(column);
+        else ProjectSegments(column);
+        _cholesky.Forward(column.Projected);
+    }
+
+    private void ProjectDense(Column column)
+    {
+        column.Weighted = new float[_pixels.Count];
+        Kernels.Multiply(_weight, column.Segments[0].Values, column.Weighted);
+        column.Gradient = Kernels.Dot(column.Weighted, _pixels.Flux);
+        Kernels.Multiply(column.Weighted, _template, _product);
+        AddBasisProducts(_product, column.Projected);
+    }
+
+    private void ProjectSegments(Column column)
+    {
         foreach (var segment in column.Segments)
         {
             for (var i = 0; i < segment.Values.Length; i++)
@@ -300,16 +327,20 @@ internal sealed class ModelFit
                 column.Gradient += we * _pixels.Flux[p];
                 var wet = we * _template[p];
                 var first = _pixels.SplineFirst[p];
-                for (var j = 0; j < 4; j++) column.Projected[first + j] += wet * _pixels.Spline[4 * p + j];
+                for (var j = 0; j < 4; j++) column.Projected[first + j] += wet * _pixels.Spline[j][p];
             }
         }
-
-        _cholesky.Forward(column.Projected);
     }
 
     private double Overlap(Column a, Column b)
     {
         double sum = 0;
+        if (b.Group is null)
+        {
+            foreach (var s in a.Segments) sum += Kernels.Dot(s.Values, b.Weighted.AsSpan(s.Start, s.Values.Length));
+            return sum;
+        }
+
         foreach (var s in a.Segments)
             foreach (var t in b.Segments)
                 for (int p = Math.Max(s.Start, t.Start), end = Math.Min(s.End, t.End); p < end; p++)
@@ -386,13 +417,6 @@ internal sealed class ModelFit
         return found >= 0 ? found : ~found;
     }
 
-    private static double Dot(double[] a, double[] b)
-    {
-        double sum = 0;
-        for (var i = 0; i < a.Length; i++) sum += a[i] * b[i];
-        return sum;
-    }
-
     private sealed record Segment(int Start, float[] Values)
     {
         public int End => Start + Values.Length;
@@ -402,6 +426,9 @@ internal sealed class ModelFit
     {
         /// <summary>The group; null for a mixture.</summary>
         public EmissionGroup? Group { get; } = group;
+
+        /// <summary>Weight times value, of a mixture.</summary>
+        public float[] Weighted { get; set; } = [];
 
         /// <summary>Prior σ of a mixture.</summary>
         public double Spread { get; init; }

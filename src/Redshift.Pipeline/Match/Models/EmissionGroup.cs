@@ -24,4 +24,7 @@ internal sealed class EmissionGroup
 
     /// <summary>Whether the lines have the broad width of the model.</summary>
     public bool Broad { get; init; }
+
+    /// <summary>The tabulated evidence of this group.</summary>
+    public GroupEvidence Evidence => field ??= new GroupEvidence(this);
 }

@@ -25,6 +25,10 @@ internal static class Forest
         return Math.Exp(-tau);
     }
 
+    /// <summary>Redshift ranges within which one depth of the forest serves the search: where they begin, in ln(1+z), and the redshift of the depth.</summary>
+    public static IReadOnlyList<(double From, double To, double Middle)> Ranges { get; } =
+        [(Math.Log(3.0), Math.Log(4.2), Math.Log(3.7)), (Math.Log(4.2), Math.Log(5.6), Math.Log(5.0)), (Math.Log(5.6), Math.Log(9.0), Math.Log(6.6))];
+
     /// <summary>
     /// Scatter of the transmission about its mean in pixels of some 100 km/s: the forest is a random process, between dark and clear.
     /// A two-state process has √(F(1−F)); real forests, with the instrument's smoothing, have about half of that (common practice).

@@ -17,7 +17,7 @@ internal sealed class ModelLibrary
         Stars = WithEqualShares(WithPartners(StellarModel.StandardGrid.Select(p => (p, Star(p))).ToList()));
         var mixes = StellarMix.Ages.ToDictionary(m => m.Name, m => m.Compute(StarFlux));
         Galaxies = WithEqualShares(WithPartners([.. GalaxyTemplates(mixes).Select(t => Galaxy(t.Template, t.GreatestZ))]));
-        Quasars = WithEqualShares(QuasarTemplates(mixes).SelectMany(t => Widths.Select(w => Quasar(t, w))).ToList());
+        Quasars = WithEqualShares(QuasarTemplates(mixes).SelectMany(t => Widths.SelectMany(w => QuasarLines.Winds.Select(v => Quasar(t, w, v)))));
         Nebulae = WithEqualShares([new FitModel { Kind = ObjectKind.Nebula, Name = "ionised gas", Groups = NebulaLines.All, NarrowKmS = 15 }]);
     }
 
@@ -41,20 +41,29 @@ internal sealed class ModelLibrary
         return new() { Kind = ObjectKind.Star, Name = name, Template = new Template(name, ObjectKind.Star, StarFlux(parameters), star.SpectralType) };
     }
 
-    /// <summary>A star's partners: the next hotter and cooler of its kind and gravity, and itself spun up, for hot stars rotate.</summary>
+    /// <summary>
+    /// A star's partners: the next hotter and cooler of its sort, the nearest of other gravity and of other metallicity,
+    /// and itself spun up, for hot stars rotate.
+    /// </summary>
     private static IEnumerable<FitModel> WithPartners(List<(StellarParameters Parameters, FitModel Model)> stars)
     {
-        foreach (var (parameters, model) in stars)
+        foreach (var (own, model) in stars)
         {
-            var peers = stars.FindAll(s => s.Parameters.Variant == parameters.Variant && s.Parameters.TemperatureK != parameters.TemperatureK
-                && Math.Abs(s.Parameters.LogGravity - parameters.LogGravity) < 0.8 && Math.Abs(s.Parameters.Metallicity - parameters.Metallicity) < 0.3);
-            var hotter = peers.FindAll(s => s.Parameters.TemperatureK > parameters.TemperatureK).OrderBy(s => s.Parameters.TemperatureK).FirstOrDefault().Model;
-            var cooler = peers.FindAll(s => s.Parameters.TemperatureK < parameters.TemperatureK).OrderByDescending(s => s.Parameters.TemperatureK).FirstOrDefault().Model;
-            var partners = new List<Template>();
-            if (hotter is not null) partners.Add(hotter.Template!);
-            if (cooler is not null) partners.Add(cooler.Template!);
-            if (parameters.TemperatureK > 6500 && parameters.LogGravity < 5) partners.Add(model.Template!.Spun(120));
-            yield return model with { Partners = partners };
+            var sort = stars.FindAll(s => s.Parameters.Variant == own.Variant && s.Parameters != own);
+            bool SameGravity(StellarParameters p) => Math.Abs(p.LogGravity - own.LogGravity) < 0.8;
+            bool SameMetals(StellarParameters p) => Math.Abs(p.Metallicity - own.Metallicity) < 0.3;
+            FitModel? Nearest(Func<StellarParameters, bool> wanted) =>
+                sort.Where(s => wanted(s.Parameters)).OrderBy(s => Math.Abs(Math.Log(s.Parameters.TemperatureK / own.TemperatureK))).FirstOrDefault().Model;
+            FitModel?[] partners =
+            [
+                Nearest(p => SameGravity(p) && SameMetals(p) && p.TemperatureK > own.TemperatureK),
+                Nearest(p => SameGravity(p) && SameMetals(p) && p.TemperatureK < own.TemperatureK),
+                Nearest(p => !SameGravity(p) && SameMetals(p)),
+                Nearest(p => SameGravity(p) && !SameMetals(p)),
+            ];
+            var templates = partners.Where(p => p is not null).Select(p => p!.Template!);
+            if (own.TemperatureK > 6500 && own.LogGravity < 5) templates = templates.Append(model.Template!.Spun(120));
+            yield return model with { Partners = [.. templates] };
         }
     }
 
@@ -99,11 +108,14 @@ internal sealed class ModelLibrary
     private static IEnumerable<Template?> QuasarTemplates(Dictionary<string, float[]> mixes)
     {
         yield return null;
-        yield return Blend("with its galaxy", mixes["5 Gyr"], Flat, 0.5);
+        yield return Blend("with its galaxy", mixes["5 Gyr"], FlatFlux, 0.5);
         yield return BroadAbsorption.Template;
     }
 
-    private static float[] Flat
+    /// <summary>A featureless continuum.</summary>
+    public static Template Flat { get; } = new("featureless", ObjectKind.Unknown, FlatFlux);
+
+    private static float[] FlatFlux
     {
         get
         {
@@ -137,13 +149,13 @@ internal sealed class ModelLibrary
         GreatestLnShift = Math.Log(1 + greatestZ),
     };
 
-    private static FitModel Quasar(Template? template, double broad) => new()
+    private static FitModel Quasar(Template? template, double broad, (string Name, IReadOnlyList<EmissionGroup> Groups) wind) => new()
     {
         Kind = ObjectKind.Quasar,
-        Name = $"{template?.Name ?? "quasar"}, broad lines {2.355 * broad:F0} km/s",
+        Name = $"{template?.Name ?? "quasar"}, broad lines {2.355 * broad:F0} km/s, {wind.Name}",
         Template = template,
         Forest = true,
-        Groups = QuasarLines.All,
+        Groups = wind.Groups,
         BroadKmS = broad,
         NarrowKmS = 200,
     };

@@ -2,23 +2,32 @@ namespace Redshift.Pipeline.Match.Models;
 
 /// <summary>
 /// Broad and narrow groups of quasars. Expected equivalent widths follow the composite of Vanden Berk et al. 2001 (AJ 122, 549, table 2;
-/// from memory, rounded); the spread is as wide as the mean, as individual quasars are. High-ionisation lines are given the composite's
-/// blueshift of some 500 km/s. Iron multiplets: wavelengths of Fe II UV 1–3, 60–63, 78 and optical 37, 38, 42, 48, 49 (from memory).
+/// from memory, rounded); the spread is as wide as the mean, as individual quasars are. Iron multiplets: wavelengths of Fe II UV 1–3, 60–63, 78 and optical 37, 38, 42, 48, 49 (from memory).
 /// </summary>
 internal static class QuasarLines
 {
-    private const double Blue = 1 - 500 / 299792.458;
+    /// <summary>The groups with the high-ionisation lines at the composite's blueshift, and with the strong wind that many z &gt; 5 quasars show.</summary>
+    public static IReadOnlyList<(string Name, IReadOnlyList<EmissionGroup> Groups)> Winds { get; } = [("calm", Groups(500)), ("windy", Groups(2200))];
 
-    public static IReadOnlyList<EmissionGroup> All { get; } =
+    private static EmissionGroup[] Groups(double blueshiftKmS) => Groups(1 - blueshiftKmS / 299792.458, 0.5 * blueshiftKmS);
+
+    private static EmissionGroup[] Groups(double blue, double spread) =>
     [
-        Broad("Ly alpha + N V", 0.05, 70, 60, [new(1215.670, 1), new(1240.8 * Blue, 0.22)]),
-        Broad("O VI + Ly beta", 0.3, 10, 10, [new(1034.0 * Blue, 0.8), new(1025.722, 0.2)]),
+        Broad("Ly alpha", 0.05, 60, 50, [new(1215.670, 1)]),
+        Core("Ly alpha core", 0.4, 0, 25, [new(1215.670, 1)]),
+        Broad("N V", 0.1, 16, 15, [new(1240.8 * blue, 1, spread)]),
+        Broad("O VI + Ly beta", 0.3, 10, 10, [new(1034.0 * blue, 0.8), new(1025.722, 0.2)]),
         Broad("O I + C II", 0.4, 3, 4, [new(1304.5, 0.7), new(1335.3, 0.3)]),
-        Broad("Si IV + O IV]", 0.15, 9, 8, [new(1396.8 * Blue, 0.6, 600), new(1402.1 * Blue, 0.4, 600)]),
-        Broad("C IV", 0.04, 30, 28, [new(1549.06 * Blue, 1)]),
-        Broad("He II + O III]", 0.3, 6, 6, [new(1640.417 * Blue, 0.6), new(1665.0, 0.4, 1000)]),
+        Broad("Si IV + O IV]", 0.15, 9, 8, [new(1396.8 * blue, 0.6, 600), new(1402.1 * blue, 0.4, 600)]),
+        Broad("C IV", 0.04, 30, 28, [new(1549.06 * blue, 1, spread)]),
+        Broad("He II + O III]", 0.3, 6, 6, [new(1640.417 * blue, 0.6), new(1665.0, 0.4, 1000)]),
         Broad("C III]", 0.05, 20, 16, [new(1908.734, 0.75), new(1892.03, 0.18), new(1857.8, 0.1)]),
         Broad("Mg II", 0.04, 30, 25, [new(2799.12, 1)]),
+        Core("C IV core", 0.5, 0, 8, [new(1549.06 * blue, 1)]),
+        Core("C III] core", 0.6, 0, 5, [new(1908.734, 1)]),
+        Core("Mg II core", 0.5, 0, 8, [new(2799.12, 1)]),
+        Core("H beta core", 0.5, 0, 15, [new(4862.683, 1)]),
+        Core("H alpha core", 0.5, 0, 50, [new(6564.608, 1)]),
         Broad("Fe II ultraviolet", 0.2, 30, 30,
             [
                 new(2075, 0.10, 4000), new(2250, 0.09, 4500), new(2345, 0.11, 2500), new(2395, 0.16, 2500), new(2490, 0.16, 5000), new(2605, 0.12, 3000),
@@ -48,6 +57,10 @@ internal static class QuasarLines
 
     private static EmissionGroup Broad(string name, double absent, double mean, double spread, GroupLine[] lines) =>
         new() { Name = name, Lines = lines, Mean = mean, Spread = spread, Absent = absent, Broad = true };
+
+    /// <summary>The peak of a broad line above its wings, 500 km/s wide.</summary>
+    private static EmissionGroup Core(string name, double absent, double mean, double spread, GroupLine[] lines) =>
+        Narrow(name, absent, mean, spread, Array.ConvertAll(lines, l => l with { WidthKmS = 500 }));
 
     private static EmissionGroup Narrow(string name, double absent, double mean, double spread, GroupLine[] lines) =>
         new() { Name = name, Lines = lines, Mean = mean, Spread = spread, Absent = absent };

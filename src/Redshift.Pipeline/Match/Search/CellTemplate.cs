@@ -14,25 +14,30 @@ internal sealed class CellTemplate
     /// <summary>σ of the Gaussian that stands for the smooth fit's response; applied twice over, (1−(1−S)²), as the spline follows parabolas.</summary>
     private const double SmoothSigma = 0.55 * SmoothFit.KnotSpacing;
 
-    private static readonly ConcurrentDictionary<(Template, int), CellTemplate> Cache = new();
+    /// <summary>No spectrum rises above its own smooth part by more, but a quotient of two small numbers does.</summary>
+    private const float Tallest = 3;
+
+    private static readonly ConcurrentDictionary<(Template, int, double), CellTemplate> Cache = new();
 
     private readonly ConcurrentDictionary<int, Transforms> _transforms = new();
 
-    private CellTemplate(Template template, int level)
+    private CellTemplate(Template template, int level, double forestShift)
     {
-        Template = template;
         Relative = Sample(template.Broadened(level));
+        if (forestShift > 0) Absorb(Relative, forestShift);
         var smooth = Smooth(Relative);
-        for (var j = 0; j < Relative.Length; j++) Relative[j] = Relative[j] / Math.Max(smooth[j], 1e-6f) - 1;
+        for (var j = 0; j < Relative.Length; j++) Relative[j] = Math.Clamp(Relative[j] / Math.Max(smooth[j], 1e-6f) - 1, -1, Tallest);
     }
-
-    public Template Template { get; }
 
     /// <summary>Flux over smooth flux, minus one; element 0 is cell 0 of the absolute grid.</summary>
     public float[] Relative { get; }
 
-    public static CellTemplate For(Template template, double sigmaLn) =>
-        Cache.GetOrAdd((template, LineSpreadLevels.Nearest(sigmaLn)), key => new CellTemplate(key.Item1, key.Item2));
+    /// <summary>The template at the resolution of the data.</summary>
+    /// <param name="template">The template.</param>
+    /// <param name="sigmaLn">σ of the line spread in ln λ.</param>
+    /// <param name="forestShift">ln(1+z) for the depth of the forest, 0 for none.</param>
+    public static CellTemplate For(Template template, double sigmaLn, double forestShift = 0) =>
+        Cache.GetOrAdd((template, LineSpreadLevels.Nearest(sigmaLn), forestShift), key => new CellTemplate(key.Item1, key.Item2, key.Item3));
 
     /// <summary>Transforms of the template and its square, of a length.</summary>
     public Transforms Transform(int length) => _transforms.GetOrAdd(length, n => new Transforms(Relative, n));
@@ -52,11 +57,18 @@ internal sealed class CellTemplate
         return cells;
     }
 
+    private static void Absorb(float[] cells, double shift)
+    {
+        for (var j = 0; j < cells.Length; j++)
+            cells[j] *= (float)Forest.Transmission(Cells.LnOrigin + (j + 0.5) * Cells.Step + shift, shift);
+    }
+
     private static float[] Smooth(float[] values)
     {
         var once = GaussianFilter.Convolve(values, SmoothSigma / Cells.Step);
         var twice = GaussianFilter.Convolve(once, SmoothSigma / Cells.Step);
-        for (var i = 0; i < once.Length; i++) once[i] = 2 * once[i] - twice[i];
+        // At a deep step 2S − S² undershoots zero.
+        for (var i = 0; i < once.Length; i++) once[i] = Math.Max(2 * once[i] - twice[i], 0.5f * once[i]);
         return once;
     }
 

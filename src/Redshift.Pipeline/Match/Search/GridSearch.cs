@@ -53,7 +53,7 @@ internal sealed class GridSearch
             var template = CellTemplate.For(model.Template!, _cells.SigmaLn);
             var evidence = new float[Math.Max(0, to - from + 1)];
             for (var s = 0; s < evidence.Length; s++) evidence[s] = TemplateScan.Direct(_cells, template, from + s);
-            peaks.AddRange(Highest(evidence, from, 2, _ => model));
+            peaks.AddRange(Highest(evidence, from, 1, 2, _ => model));
         }
 
         return [.. peaks.OrderByDescending(p => p.LnEvidence).Take(10)];
@@ -64,26 +64,51 @@ internal sealed class GridSearch
         var best = new float[_shifts];
         var which = new short[_shifts];
         Array.Fill(best, float.NegativeInfinity);
-        var templates = _library.Galaxies.Select(m => CellTemplate.For(m.Template!, _cells.SigmaLn)).ToArray();
-        var scan = new TemplateScan(_cells, templates[0].Relative.Length);
-        for (var t = 0; t < templates.Length; t++)
-        {
-            var reach = (int)Math.Min(_shifts, _library.Galaxies[t].GreatestLnShift / Cells.Step - _firstShift + 1);
-            scan.Take(templates[t], t, _firstShift, best.AsSpan(0, Math.Max(0, reach)), which);
-        }
-
-        AddGroups(_library.Galaxies[0], best);
-        return Highest(best, _firstShift, 14, s => _library.Galaxies[which[s]]);
+        var scan = new TemplateScan(_cells, TemplateLength);
+        for (var t = 0; t < _library.Galaxies.Count; t++) Take(scan, _library.Galaxies[t], t, best, which);
+        AddNarrowGroups(_library.Galaxies[0], best, _firstShift);
+        return Highest(best, _firstShift, 1, 14, s => _library.Galaxies[which[s]]);
     }
+
+    /// <summary>Scans a template without the forest up to where the forest matters, then with the forest's depth of each range.</summary>
+    private void Take(TemplateScan scan, FitModel model, int index, float[] best, short[] which)
+    {
+        TakeRange(scan, CellTemplate.For(model.Template!, _cells.SigmaLn), index, double.NegativeInfinity, Math.Min(model.GreatestLnShift, Forest.Ranges[0].From), best, which);
+        foreach (var (from, to, middle) in Forest.Ranges)
+            TakeRange(scan, CellTemplate.For(model.Template!, _cells.SigmaLn, middle), index, from, Math.Min(model.GreatestLnShift, to), best, which);
+    }
+
+    private void TakeRange(TemplateScan scan, CellTemplate template, int index, double from, double to, float[] best, short[] which)
+    {
+        int first = (int)Math.Max(0, Math.Ceiling(from / Cells.Step) - _firstShift), last = (int)Math.Min(_shifts, Math.Ceiling(to / Cells.Step) - _firstShift);
+        if (last > first) scan.Take(template, index, _firstShift + first, best.AsSpan(first, last - first), which.AsSpan(first, last - first));
+    }
+
+    /// <summary>The step at Lyman alpha that the forest makes in a featureless continuum, at every shift.</summary>
+    private float[] ForestSteps()
+    {
+        var best = new float[_shifts];
+        var scan = new TemplateScan(_cells, TemplateLength);
+        foreach (var (from, to, middle) in Forest.Ranges)
+            TakeRange(scan, CellTemplate.For(ModelLibrary.Flat, _cells.SigmaLn, middle), 0, from, to, best, new short[_shifts]);
+        return best;
+    }
+
+    private static int TemplateLength => (int)((TemplateGrid.Count - 1) * TemplateGrid.Step / Cells.Step);
 
     private List<Peak> Quasars()
     {
         var peaks = new List<Peak>();
+        var steps = ForestSteps();
         foreach (var model in _library.Quasars.Where(m => m.Template is null))
         {
-            var total = new float[_shifts];
-            AddGroups(model, total);
-            peaks.AddRange(Highest(total, _firstShift, 8, _ => model));
+            // Steps of a fifth of the line's σ lose nothing; narrow lines are left to the exact fits.
+            var stride = Math.Max(1, (int)(0.2 * model.BroadKmS / KmSPerLn / Cells.Step));
+            var total = new float[_shifts / stride];
+            for (var s = 0; s < total.Length; s++) total[s] = steps[s * stride];
+            var broad = new LineScan(_cells, Width(model.BroadKmS));
+            foreach (var group in model.Groups.Where(g => g.Broad)) broad.Add(group, _firstShift, stride, total);
+            peaks.AddRange(Highest(total, _firstShift, stride, 8, _ => model));
         }
 
         return [.. peaks.OrderByDescending(p => p.LnEvidence).Take(14)];
@@ -93,23 +118,20 @@ internal sealed class GridSearch
     {
         var reach = (int)Math.Ceiling(600 / KmSPerLn / Cells.Step);
         var total = new float[2 * reach + 1];
-        AddGroups(_library.Nebulae[0], total, -reach);
-        return Highest(total, -reach, 2, _ => _library.Nebulae[0]);
+        AddNarrowGroups(_library.Nebulae[0], total, -reach);
+        return Highest(total, -reach, 1, 2, _ => _library.Nebulae[0]);
     }
 
-    private void AddGroups(FitModel model, float[] total) => AddGroups(model, total, _firstShift);
-
-    private void AddGroups(FitModel model, float[] total, int firstShift)
+    private void AddNarrowGroups(FitModel model, float[] total, int firstShift)
     {
         var narrow = new LineScan(_cells, Width(model.NarrowKmS));
-        var broad = model.Groups.Any(g => g.Broad) ? new LineScan(_cells, Width(model.BroadKmS)) : narrow;
-        foreach (var group in model.Groups) (group.Broad ? broad : narrow).Add(group, firstShift, total);
+        foreach (var group in model.Groups) narrow.Add(group, firstShift, 1, total);
     }
 
     private double Width(double kmS) => Math.Sqrt(_cells.SigmaLn * _cells.SigmaLn + kmS * kmS / (KmSPerLn * KmSPerLn));
 
     /// <summary>The highest local maxima, not closer than <see cref="Separation"/>.</summary>
-    private static List<Peak> Highest(ReadOnlySpan<float> evidence, int firstShift, int count, Func<int, FitModel> model)
+    private static List<Peak> Highest(ReadOnlySpan<float> evidence, int firstShift, int stride, int count, Func<int, FitModel> model)
     {
         var maxima = new List<(int Shift, float Value)>();
         for (var s = 0; s < evidence.Length; s++)
@@ -125,9 +147,9 @@ internal sealed class GridSearch
         var taken = new List<int>();
         foreach (var (shift, value) in maxima)
         {
-            if (taken.Exists(t => Math.Abs(t - shift) < Separation)) continue;
+            if (taken.Exists(t => Math.Abs(t - shift) * stride < Separation)) continue;
             taken.Add(shift);
-            peaks.Add(new(model(shift), (firstShift + shift) * Cells.Step, value));
+            peaks.Add(new(model(shift), (firstShift + shift * stride) * Cells.Step, value));
             if (peaks.Count == count) break;
         }
 

@@ -32,32 +32,30 @@ internal sealed class LineScan
         }
     }
 
-    /// <summary>Adds the ln evidence of a group at each shift.</summary>
+    /// <summary>Adds the ln evidence of a group at every <paramref name="stride"/>-th shift.</summary>
     /// <param name="group">The group.</param>
     /// <param name="firstShift">Shift in cells of element 0.</param>
+    /// <param name="stride">Cells from one element to the next.</param>
     /// <param name="total">ln evidence at each shift.</param>
-    public void Add(EmissionGroup group, int firstShift, Span<float> total)
+    public void Add(EmissionGroup group, int firstShift, int stride, Span<float> total)
     {
         var lines = Array.ConvertAll(group.Lines, l => new Slice(l, firstShift, _cells));
-        var from = Math.Max(0, lines.Min(l => -l.Offset));
-        var to = Math.Min(total.Length, lines.Max(l => _cells.Count - l.Offset));
+        var evidence = group.Evidence;
+        int from = Math.Max(0, lines.Min(l => -l.Offset) / stride), to = Math.Min(total.Length, lines.Max(l => (_cells.Count - l.Offset) / stride + 1));
         for (var s = from; s < to; s++)
         {
-            double gradient = 0, curvature = 0, level = 0, share = 0;
-            foreach (var line in lines)
+            float gradient = 0, curvature = 0, level = 0, share = 0;
+            foreach (ref readonly var line in lines.AsSpan())
             {
-                var k = s + line.Offset;
+                var k = s * stride + line.Offset;
                 if ((uint)k >= (uint)_gradient.Length) continue;
                 gradient += line.Scale * _gradient[k];
-                var own = line.Scale * line.Scale * _curvature[k];
-                curvature += own;
+                curvature += line.Scale * line.Scale * _curvature[k];
                 level += line.Share * _cells.Continuum[k];
                 share += line.Share;
             }
 
-            if (curvature <= 0) continue;
-            level /= share;
-            total[s] += (float)HalfNormalEvidence.LnMixture(gradient, curvature, group.Mean * level, group.Spread * level, group.Absent);
+            if (curvature > 0) total[s] += evidence.LnMixture(gradient, curvature, level / share);
         }
     }
 
@@ -71,7 +69,7 @@ internal sealed class LineScan
     private readonly struct Slice(GroupLine line, int firstShift, Cells cells)
     {
         public readonly int Offset = (int)Math.Floor((Math.Log(line.RestA) - Cells.LnOrigin) / Cells.Step) + firstShift - cells.First;
-        public readonly double Scale = line.Share / line.RestA;
-        public readonly double Share = line.Share;
+        public readonly float Scale = (float)(line.Share / line.RestA);
+        public readonly float Share = (float)line.Share;
     }
 }
