@@ -16,8 +16,9 @@ internal sealed record Truth(TruthKind Kind, double? Z, string ObjectClass, stri
 /// <summary>What the catalogue says.</summary>
 internal sealed record Answer(double? Z, double? ZErr, double Confidence, string Kind, double? Resolution, double Milliseconds)
 {
+    /// <summary>The answer of a run. A confidence that is no number is taken as a claim of certainty, so that it costs what it deserves.</summary>
     public static Answer From(ObservationResult result, double milliseconds) =>
-        new(result.Z, result.ZErr, result.Z is null ? 0 : result.Confidence, Lower(result.Kind), result.Resolution, milliseconds);
+        new(result.Z, result.ZErr, result.Z is null ? 0 : double.IsNaN(result.Confidence) ? 1 : result.Confidence, Lower(result.Kind), result.Resolution, milliseconds);
 
     /// <summary>The catalogue's word for a kind.</summary>
     public static string Lower(ObjectKind kind) => kind switch

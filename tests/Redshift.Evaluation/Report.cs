@@ -10,6 +10,8 @@ internal sealed class Report(TextWriter output)
 
     public void Print(IReadOnlyList<Judgement> all, int worst)
     {
+        output.WriteLine(FormattableString.Invariant(
+            $"{all.Count} observations; time a spectrum: median {Measures.Median(all.Select(j => j.Answer.Milliseconds)):0.00} ms, mean {all.Average(j => j.Answer.Milliseconds):0.00} ms\n"));
         Judgement[] scored = [.. all.Where(j => j.HasTruth)];
         Judgement[] empty = [.. all.Where(j => !j.HasTruth)];
         if (scored.Length > 0)
@@ -18,8 +20,6 @@ internal sealed class Report(TextWriter output)
         PrintReliability(all);
         PrintConfusion(all);
         PrintWorst(all, worst);
-        output.WriteLine(FormattableString.Invariant(
-            $"\ntime a spectrum: median {Measures.Median(all.Select(j => j.Answer.Milliseconds)):0.00} ms, mean {all.Average(j => j.Answer.Milliseconds):0.00} ms"));
     }
 
     private void PrintTables(Judgement[] scored)

@@ -18,7 +18,7 @@ internal sealed class Exposure
         (_setup, _random) = (setup, random);
         _grid = LogGrid.Cover(setup.Arms[0].From * 0.99, setup.Arms[^1].To * 1.01, setup.Arms.Min(arm => arm.NarrowestKmS) / 5);
         _spread = new(_grid, setup.Wings);
-        _sky = setup.OnGround ? NightSky.Draw(_grid, setup.SkySloppiness, setup.Town, random) : NightSky.None(_grid);
+        _sky = setup.OnGround ? NightSky.Draw(_grid, setup.Town, random) : NightSky.None(_grid);
         _transmission = Atmosphere.Transmission(_grid, setup.OnGround ? setup.Water : 0, setup.OnGround ? random.Uniform(1, 1.8) : 0);
     }
 
@@ -71,6 +71,14 @@ internal sealed class Exposure
         var factor = Median([.. signals]) / snr;
         foreach (var frame in frames)
             frame.ScaleNoise(factor);
+        ScaleRemains(frames);
+    }
+
+    private void ScaleRemains(Frame[] frames)
+    {
+        double[] ratios = [.. frames.SelectMany(frame => frame.Remains.Zip(frame.Sigma, (left, sigma) => Math.Abs(left) / sigma)).Order()];
+        if (ratios[ratios.Length * 49 / 50] is > 0 and var worst)
+            Array.ForEach(frames, frame => frame.ScaleRemains(_setup.SkyRemains / worst));
     }
 
     private SimulatedSpectrum Reduce(Frame frame)
@@ -86,7 +94,7 @@ internal sealed class Exposure
             flux[i] = factor * (frame.Received(i, _setup) + deviates[i]);
             inverseVariance[i] = 1 / (variance[i] * factor * factor * _setup.ErrorScale * _setup.ErrorScale);
         }
-        noise.Damage(flux, inverseVariance, frame.Sigma, calibration.Factor);
+        noise.Damage(flux, inverseVariance, frame, calibration.Factor);
         return new(frame.Arm.Label, frame.Pixels, flux, _setup.HasErrors ? inverseVariance : null, StatedWidth(frame), _setup.Air);
     }
 

@@ -38,13 +38,19 @@ internal sealed class Frame(Arm arm, double[] pixels)
             Sigma[i] *= factor;
     }
 
+    public void ScaleRemains(double factor)
+    {
+        for (var i = 0; i < Count; i++)
+            Remains[i] *= factor;
+    }
+
     /// <summary>Light and sky remains as they stand in the reduced spectrum, before noise.</summary>
     public double Received(int i, Setup setup)
     {
         var transmission = Math.Max(0.02, Transmission[i]);
         // Division by a telluric standard of another airmass leaves a small power of the transmission.
         var light = Light[i] * (setup.TelluricCorrected ? Math.Pow(transmission, 0.06) : transmission);
-        return light + (setup.Sky * Remains[i] / (setup.TelluricCorrected ? transmission : 1));
+        return light + Remains[i];
     }
 
     // Gratings and detectors lose light towards the ends of an arm, more in the blue.

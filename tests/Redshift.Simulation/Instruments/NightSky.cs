@@ -14,7 +14,7 @@ internal sealed class NightSky
     /// <summary>Sky brightness, 1 in the optical continuum.</summary>
     public Canvas Light { get; }
 
-    /// <summary>What subtraction leaves at the lines, in the same unit.</summary>
+    /// <summary>Shape of what subtraction leaves at the lines: too much or too little, and shifted.</summary>
     public Canvas Remains { get; }
 
     /// <summary>The even background of a telescope in space.</summary>
@@ -22,16 +22,15 @@ internal sealed class NightSky
 
     /// <summary>Draws one night.</summary>
     /// <param name="grid">Observed wavelengths.</param>
-    /// <param name="sloppiness">Typical share of a line that is left over.</param>
     /// <param name="town">Strength of lamp light, 0 on a mountain.</param>
     /// <param name="random">The night.</param>
-    public static NightSky Draw(LogGrid grid, double sloppiness, double town, RandomSource random)
+    public static NightSky Draw(LogGrid grid, double town, RandomSource random)
     {
         var sky = new NightSky(new(grid), new(grid));
         sky.Light.Fill(Continuum);
-        var common = sloppiness * random.Normal();
+        var common = random.Normal();
         foreach (var (vacuum, area) in Lines.Where(line => grid.Reaches(line.Vacuum)))
-            sky.DrawLine(vacuum, Strength(area, town) * random.Scatter(0.25), common + (0.5 * sloppiness * random.Normal()), sloppiness * random.Normal());
+            sky.DrawLine(vacuum, Strength(area, town) * random.Scatter(0.25), common + (0.5 * random.Normal()), random.Normal());
         return sky;
     }
 

@@ -18,18 +18,30 @@ internal sealed class NoiseMaker(Setup setup, RandomSource random)
     }
 
     /// <summary>Hits, bad pixels and gaps; what the reduction has noticed loses its inverse variance.</summary>
-    public void Damage(double[] flux, double[] inverseVariance, double[] sigma, double[] factor)
+    public void Damage(double[] flux, double[] inverseVariance, Frame frame, double[] factor)
     {
         var hits = (int)(flux.Length * setup.Hits / 1000 * random.Exponential(1));
         for (var hit = 0; hit < hits; hit++)
-            Hit(flux, inverseVariance, random.Index(flux.Length), sigma, factor);
+            Hit(flux, inverseVariance, random.Index(flux.Length), frame.Sigma, factor);
         if (!setup.HasErrors)
             return;
         for (var bad = random.Exponential(setup.Masked * flux.Length); bad > 0;)
             bad -= Blot(flux, inverseVariance, 1 + (int)random.Exponential(3), random.Chance(0.5));
+        if (setup.OnGround && random.Chance(setup.MasksGreenLine))
+            MaskGreenLine(frame, inverseVariance);
         if (random.Chance(setup.GapChance))
             Blot(flux, inverseVariance, (int)(flux.Length * random.Uniform(0.01, 0.06)), emptied: true);
         FillEnds(flux, inverseVariance, (int)(flux.Length * Math.Min(0.2, setup.DeadEnds)));
+    }
+
+    private static void MaskGreenLine(Frame frame, double[] inverseVariance)
+    {
+        const double Vacuum = 5578.887;
+        for (var i = 0; i < inverseVariance.Length; i++)
+        {
+            if (Math.Abs(frame.Pixels[i] - Vacuum) < 1.5 * frame.Arm.FwhmA)
+                inverseVariance[i] = 0;
+        }
     }
 
     private void FillEnds(double[] flux, double[] inverseVariance, int length)

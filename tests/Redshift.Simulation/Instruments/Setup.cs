@@ -28,8 +28,11 @@ internal sealed record Setup
     /// <summary>Read noise variance relative to the photon variance of the median object.</summary>
     public double ReadNoise { get; init; } = 0.1;
 
-    /// <summary>Typical share of a sky line that subtraction leaves.</summary>
-    public double SkySloppiness { get; init; } = 0.01;
+    /// <summary>What sky subtraction leaves, in σ at the worst fiftieth of the pixels.</summary>
+    public double SkyRemains { get; init; } = 1;
+
+    /// <summary>Chance that the reduction masks the brightest line of the night sky, 5577 Å.</summary>
+    public double MasksGreenLine { get; init; } = 0.4;
 
     /// <summary>Lamp light.</summary>
     public double Town { get; init; }
