@@ -10,6 +10,9 @@ namespace Redshift.Evaluation;
 /// <summary>Runs the pipeline over the files of a folder for which a truth is known, or takes an existing catalogue of them.</summary>
 internal static class FolderRun
 {
+    /// <summary>The kind of a spectrum that has got lost.</summary>
+    public const string Missing = "missing";
+
     /// <summary>Runs the pipeline.</summary>
     public static IReadOnlyList<Judgement> Judge(string folder, TruthTable truths, int jobs, Action<ObservationResult, Judgement>? each = null)
     {
@@ -41,7 +44,7 @@ internal static class FolderRun
     // A spectrum without a row in the catalogue has been lost: as bad as a confident error.
     private static Judgement[] Compare(TruthTable truths, Dictionary<(string, int), (string Source, Answer Answer)> answers)
     {
-        var missing = new Answer(null, null, 1, "missing", null, double.NaN);
+        var missing = new Answer(null, null, 1, Missing, null, double.NaN);
         return
         [
             .. from truth in truths.All

@@ -20,6 +20,7 @@ internal sealed class Report(TextWriter output)
         PrintReliability(all);
         PrintConfusion(all);
         PrintWorst(all, worst);
+        PrintMissing(all);
     }
 
     private void PrintTables(Judgement[] scored)
@@ -80,6 +81,13 @@ internal sealed class Report(TextWriter output)
             if (row.Length > 0)
                 output.WriteLine($"{kind,-22}{string.Concat(answers.Select(answer => $"{row.Count(j => j.Answer.Kind == answer),9}"))}");
         }
+    }
+
+    private void PrintMissing(IReadOnlyList<Judgement> all)
+    {
+        string[] missing = [.. all.Where(j => j.Answer.Kind == FolderRun.Missing).Select(j => $"{j.Source} row {j.Row}")];
+        if (missing.Length > 0)
+            output.WriteLine($"\n{missing.Length} spectra without an answer: {string.Join(", ", missing)}");
     }
 
     private void PrintWorst(IReadOnlyList<Judgement> all, int count)

@@ -77,7 +77,7 @@ internal sealed class Exposure
     private void ScaleRemains(Frame[] frames)
     {
         double[] ratios = [.. frames.SelectMany(frame => frame.Remains.Zip(frame.Sigma, (left, sigma) => Math.Abs(left) / sigma)).Order()];
-        if (ratios[ratios.Length * 49 / 50] is > 0 and var worst)
+        if (ratios[ratios.Length * 199 / 200] is > 0 and var worst)
             Array.ForEach(frames, frame => frame.ScaleRemains(_setup.SkyRemains / worst));
     }
 

@@ -28,7 +28,7 @@ internal sealed record Setup
     /// <summary>Read noise variance relative to the photon variance of the median object.</summary>
     public double ReadNoise { get; init; } = 0.1;
 
-    /// <summary>What sky subtraction leaves, in σ at the worst fiftieth of the pixels.</summary>
+    /// <summary>What sky subtraction leaves, in σ at the worst two-hundredth of the pixels.</summary>
     public double SkyRemains { get; init; } = 1;
 
     /// <summary>Chance that the reduction masks the brightest line of the night sky, 5577 Å.</summary>
