@@ -8,6 +8,9 @@ namespace Redshift.Cli;
 /// <summary>The whole command: parsing, and the one place where an exception becomes a line of text and an exit status.</summary>
 internal static class CommandLine
 {
+    // After an interrupt a command ends by itself at once, unless it waits for standard input.
+    private static readonly TimeSpan Patience = TimeSpan.FromSeconds(3);
+
     /// <summary>Runs the command.</summary>
     public static async Task<int> InvokeAsync(string[] args)
     {
@@ -16,7 +19,7 @@ internal static class CommandLine
             return Refuse(parsed);
         try
         {
-            return await parsed.InvokeAsync(new() { EnableDefaultExceptionHandler = false, ProcessTerminationTimeout = null })
+            return await parsed.InvokeAsync(new() { EnableDefaultExceptionHandler = false, ProcessTerminationTimeout = Patience })
                 .ConfigureAwait(false);
         }
         catch (Exception problem)
@@ -27,12 +30,17 @@ internal static class CommandLine
         }
     }
 
-    private static RootCommand Root() => new("From raw spectra in FITS to a catalogue of redshifts and velocities, with reasons.")
+    private static RootCommand Root()
     {
-        RunCommand.Build(),
-        ExplainCommand.Build(),
-        LinesCommand.Build(),
-    };
+        var root = new RootCommand("From raw spectra in FITS to a catalogue of redshifts and velocities, with reasons.")
+        {
+            RunCommand.Build(),
+            ExplainCommand.Build(),
+            LinesCommand.Build(),
+        };
+        root.SetAction((Action<ParseResult>)(_ => throw new UsageException("no command given; see zladder --help")));
+        return root;
+    }
 
     private static int Refuse(ParseResult parsed)
     {

@@ -75,7 +75,7 @@ internal sealed class ExplainCommand
             count++;
         }
 
-        throw new UsageException($"there is no row {row}: the file has {count} spectra, counted from 0");
+        throw new UsageException($"there is no row {row}: the file holds {count} {(count == 1 ? "spectrum" : "spectra")}, counted from 0");
     }
 
     private static void PrintLayout(Observation observation, bool json)

@@ -23,11 +23,7 @@ internal sealed class LinesCommand
     private readonly Option<bool> _air = new("--air") { Description = "Observed wavelengths in air" };
     private readonly Option<bool> _vacuum = new("--vacuum") { Description = "Observed wavelengths in vacuum, which is the default" };
 
-    private readonly Option<string?> _kind = new("--kind")
-    {
-        Description = "Only lines commonly met in this kind of object: " + string.Join(", ", Uses.Keys),
-        HelpName = "KIND",
-    };
+    private readonly Option<string?> _kind = WordOption.Create("--kind", "Only lines commonly met in one kind of object", Uses.Keys);
 
     private readonly Option<(double Low, double High)?> _range = new("--range")
     {
@@ -40,7 +36,6 @@ internal sealed class LinesCommand
 
     private LinesCommand()
     {
-        _kind.AcceptOnlyFromAmong([.. Uses.Keys]);
         foreach (var option in new Option[] { _z, _air, _vacuum, _kind, _range, _json })
             _command.Add(option);
         _command.SetAction(Run);

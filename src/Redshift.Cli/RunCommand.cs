@@ -44,6 +44,8 @@ internal sealed class RunCommand
     private async Task<int> RunAsync(ParseResult parsed, CancellationToken token)
     {
         var watch = Stopwatch.StartNew();
+        // From here on the caller's thread is free to wait for an interrupt, even while standard input keeps us waiting.
+        await Task.Yield();
         var settings = _shared.Settings(parsed);
         var files = InputFiles.Find(_paths.Read(parsed), parsed.GetRequiredValue(_out));
         var jobs = parsed.GetValue(_jobs) ?? Workers.Available(Environment.GetEnvironmentVariable);

@@ -1,8 +1,5 @@
 using System.CommandLine;
-using System.CommandLine.Parsing;
-using System.Globalization;
 using Redshift.Pipeline.Report;
-using Redshift.Pipeline.Results;
 using Redshift.Pipeline.Settings;
 
 namespace Redshift.Cli;
@@ -16,11 +13,7 @@ internal sealed class SharedOptions
         HelpName = "FILE",
     };
 
-    private readonly Option<string?> _expect = new("--expect")
-    {
-        Description = $"Search only one kind of object: {string.Join(", ", Words.Kinds.Keys)} or any",
-        HelpName = "KIND",
-    };
+    private readonly Option<string?> _expect = WordOption.Create("--expect", "Search only one kind of object", [.. Words.Kinds.Keys, "any"]);
 
     private readonly Option<(double Low, double High)?> _range = new("--z-range")
     {
@@ -33,7 +26,6 @@ internal sealed class SharedOptions
     /// <summary>Makes the options and adds them to a command.</summary>
     public SharedOptions(Command command)
     {
-        _expect.AcceptOnlyFromAmong([.. Words.Kinds.Keys, "any"]);
         command.Add(_pipeline);
         command.Add(_expect);
         command.Add(_range);

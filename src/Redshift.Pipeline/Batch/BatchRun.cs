@@ -106,9 +106,11 @@ public sealed class BatchRun(PipelineSettings settings, int jobs, Action<Observa
 
     private async Task AnalyzeAllAsync(ChannelReader<Pending> work, CancellationToken token)
     {
-        var pipeline = new ObservationPipeline(settings);
+        // Made at the first spectrum: a run that finds none need not wait for the models.
+        ObservationPipeline? pipeline = null;
         await foreach (var pending in work.ReadAllAsync(token).ConfigureAwait(false))
         {
+            pipeline ??= new(settings);
             var outcome = Analyze(pipeline, pending);
             try
             {

@@ -40,12 +40,8 @@ internal sealed class FileReading(string source, LoadSettings settings) : IDispo
     {
         if (!IsFits(path)) return [TextRules.Find(TextTableReader.Read(path), settings)];
         _file = FitsFile.Open(path);
-        var layouts = FitsRules.Find(_file, settings);
-        return _file.Damage is { } damage ? layouts.Select(found => (Noted(found.Item1, damage), found.Item2)) : layouts;
+        return FitsRules.Find(_file, settings);
     }
-
-    private static Layout Noted(Layout layout, FitsException damage) =>
-        layout with { Notes = [.. layout.Notes, new("damage", WordsOf(damage), $"{PlaceOf(damage.Location)}; what stands before it is read")] };
 
     // A gzip file is FITS if what comes out of it is; short of that the first bytes tell.
     private static bool IsFits(string path)
@@ -79,11 +75,11 @@ internal sealed class FileReading(string source, LoadSettings settings) : IDispo
         }
         catch (FitsException damage)
         {
-            return refuse(new(source, row, PlaceOf(damage.Location), WordsOf(damage), "a sound FITS file"));
+            return refuse(new(source, row, PlaceOf(damage.Location), damage.Message, "a sound FITS file"));
         }
         catch (Exception trouble) when (trouble is IOException or UnauthorizedAccessException or InvalidDataException or NotSupportedException)
         {
-            return refuse(new(source, row, "file", WordsOf(trouble), "a readable file"));
+            return refuse(new(source, row, "file", trouble.Message, "a readable file"));
         }
         // Sizes come from the file, and a size that no memory holds is the file's fault.
         catch (Exception excess) when (excess is OverflowException or OutOfMemoryException or ArgumentException)
@@ -92,20 +88,5 @@ internal sealed class FileReading(string source, LoadSettings settings) : IDispo
         }
     }
 
-    // The catalogue names the file by its source; paths of this machine have no place in it.
-    private static string PlaceOf(FitsLocation location) =>
-        (location with { File = "" }).ToString().TrimStart(',', ' ') is { Length: > 0 } place ? place : "file";
-
-    private static string WordsOf(FitsException damage)
-    {
-        var prefix = $"{damage.Location}: ".Length;
-        return damage.Message.Length > prefix ? damage.Message[prefix..] : damage.Message;
-    }
-
-    private static string WordsOf(Exception trouble) => trouble switch
-    {
-        FileNotFoundException or DirectoryNotFoundException => "no such file",
-        UnauthorizedAccessException => "no permission to read it",
-        _ => trouble.Message,
-    };
+    private static string PlaceOf(FitsLocation location) => location.Hdu is { } hdu ? $"HDU {hdu}" : "file";
 }

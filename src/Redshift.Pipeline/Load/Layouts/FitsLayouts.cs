@@ -127,9 +127,10 @@ internal static class FitsLayouts
     private static ReadingNote Aside(IReadOnlyList<SpectrumUnit> aside) =>
         new("left aside", Places(aside), "other forms of the same spectrum");
 
-    // What is wrong with the file explains best why nothing was found in it.
-    private static Exception NothingFound(FitsFile file) =>
-        file.Damage ?? (Exception)new LoadException("file", Describe(file), "a spectrum: an image or a table with flux and wavelengths");
+    private static LoadException NothingFound(FitsFile file) =>
+        file.Damage is { } damage
+            ? new("file", damage.Message, "a complete FITS file")
+            : new("file", Describe(file), "a spectrum: an image or a table with flux and wavelengths");
 
     private static string Names(TableHdu table, int most) =>
         string.Join(", ", table.Columns.Take(most).Select(static column => column.Name));

@@ -16,7 +16,7 @@ internal sealed class TraceChart : IDisposable
     private const float PaddingTop = 58;
     private const float LeastStepPixels = 1.5f;
 
-    private readonly Plot _plot = new();
+    private readonly Plot _plot;
     private readonly PixelRect _place;
     private readonly ObservationResult _result;
     private readonly List<List<Bin>> _runs;
@@ -26,6 +26,7 @@ internal sealed class TraceChart : IDisposable
     public TraceChart(ObservationResult result, PixelRect place)
     {
         PlotFont.Register();
+        _plot = new();
         _place = place;
         _result = result;
         var spectra = result.Observation.Spectra;
