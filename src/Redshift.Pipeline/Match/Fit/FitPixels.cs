@@ -10,6 +10,9 @@ namespace Redshift.Pipeline.Match.Fit;
 /// </summary>
 internal sealed class FitPixels
 {
+    /// <summary>Emission lines are no Gaussians: their model is wrong by this share of what stands above the continuum.</summary>
+    private const double LineError = 0.1;
+
     private FitPixels(int count, int coefficients)
     {
         LnWavelength = new double[count];
@@ -92,7 +95,9 @@ internal sealed class FitPixels
             LnWavelength[p] = run.LnWavelength[i];
             Flux[p] = run.Flux[i];
             var share = modelError.Share(run.LnWavelength[i]) * Math.Max(Math.Abs(run.Continuum[i]), run.Baseline[i]);
-            Weight[p] = run.Weight[i] <= 0 ? 0 : (float)(1 / (1 / run.Weight[i] + share * share * Math.Max(1, errorWidth / run.Width[i])));
+            var excess = LineError * Math.Max(0, run.Flux[i] - run.Continuum[i]);
+            var modelVariance = (share * share + excess * excess) * Math.Max(1, errorWidth / run.Width[i]);
+            Weight[p] = run.Weight[i] <= 0 ? 0 : (float)(1 / (1 / run.Weight[i] + modelVariance));
             SigmaLn[p] = run.SigmaLn[i];
             Level[p] = (byte)LineSpreadLevels.Nearest(run.SigmaLn[i]);
             Continuum[p] = Math.Max(run.Continuum[i], 0.5f * run.Baseline[i]);

@@ -94,7 +94,11 @@ internal sealed class ModelFit
         if (model.Template is null) Array.Fill(_template, 1f);
         else RenderTemplate(model.Template, lnShift, _template);
         if (!model.Forest) return;
-        for (var p = 0; p < _template.Length; p++) _template[p] *= (float)Forest.Transmission(_pixels.LnWavelength[p], lnShift);
+        for (var p = 0; p < _template.Length; p++)
+        {
+            if (_pixels.LnWavelength[p] > lnShift + Forest.LnLymanAlpha + 4 * _pixels.SigmaLn[p]) continue;
+            _template[p] *= (float)Forest.Transmission(_pixels.LnWavelength[p], lnShift, _pixels.SigmaLn[p]);
+        }
     }
 
     /// <summary>
@@ -248,7 +252,7 @@ internal sealed class ModelFit
             var sigma = Math.Sqrt(width * width + own * own);
             for (var s = 0; s + 1 < _pixels.Starts.Length; s++)
             {
-                if (RenderLine(line, centre, sigma, s, model.Forest ? lnShift : double.NaN) is not { } segment) continue;
+                if (RenderLine(line, centre, sigma, s, model.Forest && group.Broad ? lnShift : double.NaN) is not { } segment) continue;
                 column ??= new Column(group);
                 column.Segments.Add(segment);
                 level += line.Share * _pixels.Continuum[segment.Start + segment.Values.Length / 2];
@@ -277,7 +281,7 @@ internal sealed class ModelFit
         {
             var u = (ln[i] - centre) / total;
             values[i - start] = (float)(scale * Math.Exp(-0.5 * u * u));
-            if (!double.IsNaN(forestShift)) values[i - start] *= (float)Forest.Transmission(ln[i], forestShift);
+            if (!double.IsNaN(forestShift)) values[i - start] *= (float)Forest.Transmission(ln[i], forestShift, instrument);
         }
 
         return new(from + start, values);

@@ -25,6 +25,19 @@ internal static class Forest
         return Math.Exp(-tau);
     }
 
+    /// <summary>The same as an instrument sees it, the step at Lyman alpha rounded by the line spread.</summary>
+    /// <param name="lnObserved">ln of the observed vacuum wavelength in Å.</param>
+    /// <param name="lnShift">ln(1+z) of the object.</param>
+    /// <param name="sigmaLn">σ of the line spread in ln λ.</param>
+    public static double Transmission(double lnObserved, double lnShift, double sigmaLn)
+    {
+        var distance = (lnObserved - lnShift - LnLymanAlpha) / sigmaLn;
+        if (distance > 3) return 1;
+        if (distance < -3) return Transmission(lnObserved, lnShift);
+        var below = Transmission(LnLymanAlpha + lnShift - 1e-9, lnShift);
+        return below + (1 - below) * Math.Exp(HalfNormalEvidence.LnTail(distance));
+    }
+
     /// <summary>Redshift ranges within which one depth of the forest serves the search: where they begin, in ln(1+z), and the redshift of the depth.</summary>
     public static IReadOnlyList<(double From, double To, double Middle)> Ranges { get; } =
         [(Math.Log(3.0), Math.Log(4.2), Math.Log(3.7)), (Math.Log(4.2), Math.Log(5.6), Math.Log(5.0)), (Math.Log(5.6), Math.Log(9.0), Math.Log(6.6))];

@@ -40,7 +40,8 @@ internal static class PosteriorSum
     /// <summary>Decides between hypotheses, of which there is at least one, sorted by weight.</summary>
     public static Decision Decide(IReadOnlyList<Hypothesis> hypotheses, double resolution)
     {
-        var top = hypotheses[0];
+        // A star whose lines are not seen says no more than that the spectrum is smooth.
+        var top = hypotheses.FirstOrDefault(h => h.Fit.LnEvidence > SeenLnEvidence) ?? hypotheses[0];
         var kind = top.Fit.Model.Kind;
         var tolerance = ToleranceKmS(kind, resolution) / KmSPerLn;
         bool Inside(Hypothesis h) => Math.Abs(h.Fit.LnShift - top.Fit.LnShift) < tolerance;
@@ -59,6 +60,9 @@ internal static class PosteriorSum
             KindShare = Math.Exp(kindInside - inside),
         };
     }
+
+    /// <summary>ln evidence from which a model's features count as seen.</summary>
+    private const double SeenLnEvidence = 3;
 
     /// <summary>ln weight of a spectrum with neither lines nor breaks: the smooth model has ln evidence 0 by definition and one unit of prior.</summary>
     private const double NothingLnWeight = 0;
