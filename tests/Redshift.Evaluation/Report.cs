@@ -30,8 +30,11 @@ internal sealed class Report(TextWriter output)
         PrintGroups(scored, j => j.Truth.Kind.ToString());
         PrintGroups(scored, j => j.Truth.Group);
         PrintGroups(scored, j => j.Truth.ObjectClass);
-        PrintGroups(scored, j => FormattableString.Invariant($"S/N >= {SnrEdges.Last(edge => j.Truth.Snr >= edge),2}"));
+        PrintGroups(scored, j => SnrBin(j.Truth.Snr));
     }
+
+    private static string SnrBin(double snr) =>
+        double.IsNaN(snr) ? "S/N unknown" : FormattableString.Invariant($"S/N >= {SnrEdges.Last(edge => snr >= edge),2}");
 
     private void PrintGroups(Judgement[] scored, Func<Judgement, string> key)
     {

@@ -28,6 +28,6 @@ public static class Reliability
         var variance = members.Sum(f => f.Probability * (1 - f.Probability)) / members.Length / members.Length;
         // Half a count of continuity, so that small bins are not called off for a single miss.
         var half = (1.96 * Math.Sqrt(variance)) + (0.5 / members.Length);
-        return new(from, members.Length, stated, members.Count(f => f.Right) / (double)members.Length, stated - half, stated + half);
+        return new(from, members.Length, stated, members.Count(f => f.Right) / (double)members.Length, Math.Max(0, stated - half), Math.Min(1, stated + half));
     }
 }
