@@ -1,6 +1,6 @@
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Match;
-using Redshift.Pipeline.Match.Fit;
+using Redshift.Pipeline.Match.Measure;
 using Redshift.Pipeline.Match.Posterior;
 using Redshift.Pipeline.Normalize;
 using Redshift.Pipeline.Observations;
@@ -53,7 +53,8 @@ public sealed class ObservationPipeline(PipelineSettings settings)
         if (verdict == Verdict.Nothing) return result;
         var fit = decision.Answer.Fit;
         var z = Math.Exp(fit.LnShift) - 1;
-        return result with
+        var native = NativeModel.Fit(normalized, fit, match.Error);
+        return AnswerLines.Measure(normalized, match, native).AddTo(result with
         {
             Kind = fit.Model.Kind,
             KindConfidence = confidence * decision.KindShare,
@@ -63,9 +64,9 @@ public sealed class ObservationPipeline(PipelineSettings settings)
             SpectralType = fit.Model.Template?.SpectralType ?? "",
             Next = decision.Next,
             NextConfidence = decision.Next is { } next ? (1 - confidence) * next.Probability / Math.Max(1e-12, decision.Candidates.Sum(c => c.Probability) - decision.Candidates[0].Probability) : null,
-            Curves = Curves(normalized, fit, match.Error),
+            Curves = Curves(normalized, native),
             Cautions = [.. result.Cautions, .. AnswerCautions(confidence, decision)],
-        };
+        });
     }
 
     private static IEnumerable<string> AnswerCautions(double confidence, Decision decision)
@@ -74,15 +75,10 @@ public sealed class ObservationPipeline(PipelineSettings settings)
     }
 
     /// <summary>The answer's model at the native pixels of every spectrum.</summary>
-    private static List<ModelCurve> Curves(NormalizedObservation normalized, Refined answer, ModelError error)
+    private static List<ModelCurve> Curves(NormalizedObservation normalized, NativeModel native)
     {
-        var pixels = FitPixels.Build([.. normalized.Spectra.Select(PixelRun.Native)], error, Match.Search.Cells.Step);
-        var fit = new ModelFit(pixels);
-        fit.LnEvidence(answer.Model, answer.LnShift);
-        var (model, _) = fit.Curves();
         var curves = new List<ModelCurve>();
-        for (var s = 0; s < normalized.Spectra.Count; s++)
-            curves.Add(Curve(normalized.Spectra[s], model.AsSpan(pixels.Starts[s], pixels.Starts[s + 1] - pixels.Starts[s]), normalized.FluxScale));
+        for (var s = 0; s < normalized.Spectra.Count; s++) curves.Add(Curve(normalized.Spectra[s], native.ModelOf(s), normalized.FluxScale));
         return curves;
     }
 

@@ -80,6 +80,15 @@ public sealed record ObservationResult
     /// <summary>The lines.</summary>
     public IReadOnlyList<LineMeasurement> Lines { get; init; } = [];
 
+    /// <summary>
+    /// Gain in ln likelihood, over the smooth model, of the pixels outside all lines of <see cref="Lines"/>: breaks, unlisted lines.
+    /// With the gains of the lines and <see cref="PriorAndVolumeLnGain"/> it adds up to the ln evidence of the first candidate.
+    /// </summary>
+    public double? OtherFeaturesLnGain { get; init; }
+
+    /// <summary>What priors and the volume of the posterior add to the ln evidence of the first candidate.</summary>
+    public double? PriorAndVolumeLnGain { get; init; }
+
     /// <summary>What a person should do, words such as <c>check-medium</c>.</summary>
     public IReadOnlyList<string> Cautions { get; init; } = [];
 

@@ -117,6 +117,8 @@ internal static class Examples
                 EquivalentWidthRestA = null, LnLikelihoodGain = null, State = LineState.ExpectedMissing,
             },
         ],
+        OtherFeaturesLnGain = 15.25,
+        PriorAndVolumeLnGain = -7.5,
         Cautions = ["rival-redshift", "word-without-advice"],
     };
 

@@ -92,21 +92,19 @@ public static class Explanation
 
     private static string Number(double? value, int decimals) => Cell.Fixed(value, decimals) is { Text.Length: > 0 } cell ? cell.Text : "?";
 
-    // The lines' shares and the rest add up to the evidence of the answer, so that nothing is hidden.
+    // The lines' shares, other features, priors and volume add up to the evidence of the answer, so that nothing is hidden.
     private static void WriteReasons(TextWriter output, ObservationResult result)
     {
-        var lines = result.Lines.Where(line => line.LnLikelihoodGain is not null && line.State != LineState.ExpectedMissing)
-            .OrderByDescending(line => line.LnLikelihoodGain).ToList();
+        var lines = result.Lines.Where(line => line.LnLikelihoodGain is not null).OrderByDescending(line => line.LnLikelihoodGain).ToList();
         var most = lines.Select(line => line.LnLikelihoodGain!.Value).DefaultIfEmpty(0).Max();
         var table = new TextTable();
         foreach (var line in lines)
             table.Add(Gain(line.LnLikelihoodGain), Cell.Of(line.Line), Bar(line.LnLikelihoodGain!.Value / most), new(Measured(line), false));
-        var counted = lines.Sum(line => line.LnLikelihoodGain!.Value);
         if (result.Candidates.Count > 0)
         {
-            var total = result.Candidates[0].LnEvidence;
-            table.Add(Gain(total - counted), Cell.Of("all the rest"), Cell.Empty, Cell.Of("missing lines, other features, priors"));
-            table.Add(Gain(total), Cell.Of("in all"));
+            table.Add(Gain(result.OtherFeaturesLnGain), Cell.Of("other features"), Cell.Empty, Cell.Of("breaks, unlisted lines"));
+            table.Add(Gain(result.PriorAndVolumeLnGain), Cell.Of("prior and volume"), Cell.Empty, Cell.Of("what the freedom of the model costs"));
+            table.Add(Gain(result.Candidates[0].LnEvidence), Cell.Of("in all"));
         }
 
         output.WriteLine();
