@@ -27,44 +27,23 @@ internal sealed class ChanceScale
             var count = 0;
             foreach (var value in signalToNoise[(b * Block)..Math.Min(signalToNoise.Length, (b + 1) * Block)])
                 if (value != 0) sample[count++] = side * value;
-            scales[b] = count < FewestSamples ? float.NaN : UpperQuartile(sample[..count]) * SigmaPerQuartile;
+            scales[b] = count < FewestSamples ? 1 : UpperQuartile(sample[..count]) * SigmaPerQuartile;
         }
 
-        return new(Smooth(scales));
+        return new(scales);
     }
 
-    /// <summary>The scale at a cell: the greater one of the two blocks whose middles it lies between.</summary>
+    /// <summary>The scale at a cell: the greatest of its block's and the two beside it, for bad stretches end within blocks.</summary>
     public double At(int cell)
     {
-        var x = Math.Clamp((cell + 0.5) / Block - 0.5, 0, _scales.Length - 1);
-        var b = (int)x;
-        return Math.Max(_scales[b], _scales[Math.Min(b + 1, _scales.Length - 1)]);
+        double scale = 1;
+        for (var b = Math.Max(0, cell / Block - 1); b <= Math.Min(_scales.Length - 1, cell / Block + 1); b++) scale = Math.Max(scale, _scales[b]);
+        return scale;
     }
 
     private static float UpperQuartile(Span<float> sample)
     {
         sample.Sort();
         return sample[3 * (sample.Length - 1) / 4];
-    }
-
-    /// <summary>The greater of a block's own scale and its mean with its neighbours; blocks without data take theirs.</summary>
-    private static float[] Smooth(float[] scales)
-    {
-        var smooth = new float[scales.Length];
-        for (var b = 0; b < scales.Length; b++)
-        {
-            float sum = 0, weight = 0;
-            for (var n = Math.Max(0, b - 1); n <= Math.Min(scales.Length - 1, b + 1); n++)
-            {
-                if (float.IsNaN(scales[n])) continue;
-                var share = n == b ? 2 : 1;
-                sum += share * scales[n];
-                weight += share;
-            }
-
-            smooth[b] = Math.Max(1, Math.Max(weight > 0 ? sum / weight : 1, float.IsNaN(scales[b]) ? 1 : scales[b]));
-        }
-
-        return smooth;
     }
 }

@@ -53,11 +53,12 @@ public sealed class GaussianFitTests
     [Fact]
     public void Error_of_a_weak_lines_equivalent_width_is_that_of_cayrel()
     {
-        // Cayrel 1988, IAU Symp. 132, 345: 1.6 √(FWHM δx) / (S/N); 1.5 in Cayrel et al. 2004. Ours has the continuum free as well.
+        // Cayrel 1988, IAU Symp. 132, 345: 1.6 √(FWHM δx) / (S/N); 1.5 in Cayrel et al. 2004, the bound for a known continuum
+        // (√3 π^¼ / √2.3548). Ours fits the continuum within ±7σ too, which costs a fifth.
         const double Noise = 0.01;
         var line = Fit(Spectrum(Noise).Add(CentreA, SigmaA, -0.25 * SigmaA * Math.Sqrt(2 * Math.PI)));
 
-        Assert.InRange(line.EquivalentWidthErr, 1.5 * Math.Sqrt(FwhmA * 0.5) * Noise, 1.75 * Math.Sqrt(FwhmA * 0.5) * Noise);
+        Assert.InRange(line.EquivalentWidthErr, 1.5 * Math.Sqrt(FwhmA * 0.5) * Noise, 1.85 * Math.Sqrt(FwhmA * 0.5) * Noise);
     }
 
     [Fact]

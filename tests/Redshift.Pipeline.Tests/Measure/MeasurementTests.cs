@@ -19,8 +19,17 @@ public sealed class MeasurementTests
     /// <summary>Observed fluxes with the continuum at 1: Case B, [O III] 2.98, [N II] 3.05.</summary>
     private static readonly Dictionary<string, double> Planted = new()
     {
-        ["[O II] 3726"] = 6, ["[O II] 3729"] = 8, ["H gamma"] = 4.7, ["H beta"] = 10, ["[O III] 4959"] = 10.07, ["[O III] 5007"] = 30,
-        ["[N II] 6548"] = 3.28, ["H alpha"] = 28.6, ["[N II] 6583"] = 10, ["[S II] 6716"] = 6, ["[S II] 6731"] = 4.5,
+        ["[O II] 3726"] = 6,
+        ["[O II] 3729"] = 8,
+        ["H gamma"] = 4.7,
+        ["H beta"] = 10,
+        ["[O III] 4959"] = 10.07,
+        ["[O III] 5007"] = 30,
+        ["[N II] 6548"] = 3.28,
+        ["H alpha"] = 28.6,
+        ["[N II] 6583"] = 10,
+        ["[S II] 6716"] = 6,
+        ["[S II] 6731"] = 4.5,
     };
 
     private static readonly ObservationResult Result = new ObservationPipeline(new PipelineSettings()).Analyze(Galaxy(masked: null));
@@ -106,7 +115,10 @@ public sealed class MeasurementTests
         if (strangeA > 0) AddLine(wavelength, flux, strangeA, 6);
         return new()
         {
-            Source = "planted", Row = 0, Medium = WavelengthMedium.Vacuum, Frame = VelocityFrame.Barycentric,
+            Source = "planted",
+            Row = 0,
+            Medium = WavelengthMedium.Vacuum,
+            Frame = VelocityFrame.Barycentric,
             Spectra =
             [
                 new()

@@ -23,10 +23,10 @@ public sealed class ReasonsTests
     public void Overlapping_lines_share_by_depth_and_the_rest_is_other()
     {
         double[] gains = [.. Axis.Select(_ => 1.0)];
-        var (lines, other) = Reasons.Divide(Axis, gains, [new(8.02, 5e-4, -0.6), new(8.02, 5e-4, -0.2)]);
+        var (lines, other) = Reasons.Divide(Axis, gains, [new(8.02, 5.1e-4, -0.6), new(8.02, 5.1e-4, -0.2)]);
 
-        // ±3σ of 5e-4 are 31 pixels of 1e-4.
-        Assert.Equal(31, lines.Sum(), 1.0);
+        // ±3σ of 5.1e-4 are 31 pixels of 1e-4.
+        Assert.Equal(31, lines.Sum(), 1e-9);
         Assert.Equal(3, lines[0] / lines[1], 1e-9);
         Assert.Equal(Axis.Length - lines.Sum(), other, 1e-9);
     }

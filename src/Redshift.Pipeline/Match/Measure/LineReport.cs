@@ -38,7 +38,8 @@ internal sealed class LineReport(double fluxScale, double lnShift, Func<int, str
     /// <summary>A feature without a name.</summary>
     public LineMeasurement Write(Feature feature, FittedLine line, double instrument, int spectrum) =>
         Measured(new() { Line = "unidentified", Family = "unidentified", State = LineState.Unexplained, Note = Remark(feature) }, line, instrument)
-            with { FluxUnit = fluxUnit(spectrum), EquivalentWidthRestA = null, EquivalentWidthErrA = null };
+            with
+        { FluxUnit = fluxUnit(spectrum), EquivalentWidthRestA = null, EquivalentWidthErrA = null };
 
     /// <summary>c(z₁−z₂)/(1+z₂) of the line against the answer, km/s.</summary>
     public static double OffsetKmS(MeasuredLine line) => Velocity.SpeedOfLightKmS * (Math.Exp(line.Data!.Centre - line.Target.Centre) - 1);
