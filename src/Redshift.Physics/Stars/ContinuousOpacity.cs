@@ -25,8 +25,9 @@ internal sealed class ContinuousOpacity
     // Rosseland means (Ferguson et al. 2005, ApJ 623, 585), which fall with pressure as the gaps between lines open.
     private const double MolecularHaze = 2e-25;
 
-    // Share of it that is left at the wavelengths between the bands that are treated one by one.
-    private const double ShareBetweenBands = 0.5;
+    // Shares of it that act as a continuum in the blue, where lines crowd, and in the red, between the bands that are treated one by one.
+    private const double BlueShare = 1.3;
+    private const double RedShare = 0.4;
 
     private readonly Gas _gas;
     private readonly double[] _levels = new double[LastLevel + 1];
@@ -61,7 +62,7 @@ internal sealed class ContinuousOpacity
         var atoms = emission * ((1.0449e-26 * Cube(wavelength) * BoundAndFree(wavelength)) + (_negativeIons * NegativeIonBoundFree(wavelength)));
         return (_gas.NeutralHydrogen * (atoms + NegativeIonFreeFree(wavelength) + Rayleigh(wavelength)))
             + (ThomsonCrossSection * _gas.ElectronsPerNucleus)
-            + (ShareBetweenBands * _haze)
+            + (HazeShare(wavelength) * _haze)
             + (wavelength < 4000 ? emission * Metals(wavelength) : 0);
     }
 
@@ -72,7 +73,7 @@ internal sealed class ContinuousOpacity
         for (var x = 0.9; x < 16; x *= 1.15)
         {
             var weight = x * x * x * x * x * Math.Exp(-x) / ((1 - Math.Exp(-x)) * (1 - Math.Exp(-x)));
-            sum += weight / (At(Cgs.SecondRadiation / (x * _gas.Temperature)) + ((1 - ShareBetweenBands) * _haze));
+            sum += weight / (At(Cgs.SecondRadiation / (x * _gas.Temperature)) + ((1 - RedShare) * _haze));
             weights += weight;
         }
 
@@ -135,6 +136,9 @@ internal sealed class ContinuousOpacity
 
         return sum * Cube(wavelength);
     }
+
+    private static double HazeShare(double wavelength) =>
+        BlueShare + ((RedShare - BlueShare) * Math.Clamp((wavelength - 5900) / 1000, 0, 1));
 
     private static double Cube(double x) => x * x * x;
 }

@@ -43,9 +43,9 @@ internal static class HydrogenLines
 
     private readonly struct Line
     {
-        // S(β) = w/(b + β^2.5), normalized to one over both sides. Holtsmark wings of the ions have w = 1.5, doubled by electrons in the far
-        // wings only; where lines are half deep the effect of electrons is smaller (Edmonds, Schlüter & Wells 1967, MmRAS 71, 271).
-        private const double Wing = 1.9;
+        // S(β) = w/(b + β^2.5), normalized to one over both sides, Holtsmark wings of the ions having w = 1.5. Electrons double the
+        // far wings only; where the lines are half deep they add less (Edmonds, Schlüter & Wells 1967, MmRAS 71, 271).
+        private const double Wing = 1.8;
         private static readonly double Core = Math.Pow(2.643 * Wing, 1 / 0.6);
         private readonly double _scale;
         private readonly double _smoothing;

@@ -3,16 +3,28 @@ namespace Redshift.Physics.Stars;
 /// <summary>A grey atmosphere, seen at each wavelength as deep as the continuous opacity allows (Eddington &amp; Barbier).</summary>
 internal sealed class Photosphere
 {
+    private const double GiantGravity = 3.5;
+    private const double CoolSurface = 0.70;
     private const double ContinuumDepth = 2.0 / 3;
 
     // Rosseland depths of the layers that stand for the formation of each kind of feature.
     private const double ContinuumLayerDepth = 0.35;
     private const double LineDepth = 0.1;
     private const double MolecularDepth = 0.03;
-    private const double HydrogenDepth = 0.7;
+    private const double HydrogenDepth = 0.6;
 
     // Molecules cool the outer layers of giants below the grey temperature: per unit of log g, in effective temperatures.
     private const double MolecularCooling = 0.012;
+
+    // Surface over effective temperature, from core depths of Ca II in the Sun, of the Balmer lines along the main sequence and of the resonance lines of
+    // Na I and Ca I in M dwarfs, whose convection makes the gradient shallow; below the grey value of 0.84 as lines cool the surface, and lowest
+    // in hot stars, where scattering deepens the cores.
+    private static readonly (double Kelvin, double Ratio)[] Surface =
+    [
+        (2600, CoolSurface), (3200, 0.73), (3600, 0.80), (4200, 0.79), (5200, CoolSurface), (6500, CoolSurface), (8000, 0.82), (10500, 0.82), (13000, 0.75),
+        (22000, 0.64), (60000, 0.62),
+    ];
+
     private readonly double[] _flux = new double[Nodes.Count];
     private readonly double[] _strongest = new double[Nodes.Count];
     private readonly double[] _half = new double[Nodes.Count];
@@ -40,15 +52,16 @@ internal sealed class Photosphere
     /// <summary>Where the wings of hydrogen lines form.</summary>
     public Layer Hydrogen { get; }
 
-    // Cores of strong lines come from layers cooler than the grey surface at 0.84 T: from measured cores in the Sun, of Balmer lines in A stars, and in
-    // hot stars, where scattering deepens them.
+    /// <summary>Temperature of the layer that the cores of strong lines come from.</summary>
     private double SurfaceTemperature
     {
         get
         {
-            var warm = Math.Clamp((Star.TemperatureK - 6500) / 1500, 0, 1);
-            var hot = Math.Clamp((Star.TemperatureK - 11000) / 11000, 0, 1);
-            return Star.TemperatureK * (0.70 + (0.07 * warm) - (0.13 * hot));
+            var next = Math.Clamp(Array.FindIndex(Surface, s => s.Kelvin >= Star.TemperatureK), 1, Surface.Length - 1);
+            var (cool, hot) = (Surface[next - 1], Surface[next]);
+            var share = Math.Clamp((Star.TemperatureK - cool.Kelvin) / (hot.Kelvin - cool.Kelvin), 0, 1);
+            var ratio = cool.Ratio + (share * (hot.Ratio - cool.Ratio));
+            return Star.TemperatureK * (Star.LogGravity < GiantGravity && Star.TemperatureK < 6500 ? CoolSurface : ratio);
         }
     }
 
