@@ -40,7 +40,7 @@ internal sealed record BandSystem(
     private const double LowestOrigin = 3000;
 
     // The one-layer model makes bands of metal oxides too strong: published oscillator strengths are scaled by this.
-    private const double Oxide = 0.17;
+    private const double Oxide = 0.31;
     private static readonly MolecularState TitaniumX = new(1009.02, 4.498, 0.53541, 0.00301);
     private static readonly MolecularState TitaniumA = new(1018.27, 4.52, 0.53760, 0.00298);
     private static readonly MolecularState TitaniumD = new(1023.8, 4.9, 0.54922, 0.00337);

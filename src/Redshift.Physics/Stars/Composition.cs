@@ -11,7 +11,7 @@ internal sealed record Composition(double Metallicity, double Helium = 1, double
     public static Composition Of(StellarParameters star) => star.Variant switch
     {
         StellarVariant.WhiteDwarfDA => PureHydrogen,
-        StellarVariant.WhiteDwarfDB => new(-9, 30),
+        StellarVariant.WhiteDwarfDB => new(-9, 120),
         StellarVariant.Carbon => new(star.Metallicity, 1, 2.2),
         _ => new(star.Metallicity),
     };

@@ -11,10 +11,13 @@ internal sealed class ContinuousOpacity
     private const double ThomsonCrossSection = 0.6652e-24;
     private const int LastLevel = 8;
 
+    // In helium atmospheres the excited levels from this one on are those of helium, which are hydrogen's but for a few per cent.
+    private const int HeliumLevel = 3;
+
     // Threshold (vacuum Å), cross-section there (cm²), lower level (eV), its weight: order of magnitude, from memory of Travis & Matsushima 1968, ApJ 154, 689.
     private static readonly (Element Element, double Edge, double CrossSection, double Excitation, double Weight)[] MetalEdges =
     [
-        (Element.Find("Mg"), 2514, 2.0e-17, 2.71, 9), (Element.Find("Mg"), 1622, 1.2e-18, 0, 1), (Element.Find("Mg"), 3757, 3.0e-17, 4.35, 3),
+        (Element.Find("Mg"), 2514, 3.0e-18, 2.71, 9), (Element.Find("Mg"), 1622, 1.2e-18, 0, 1), (Element.Find("Mg"), 3757, 3.0e-17, 4.35, 3),
         (Element.Find("Al"), 2076, 6.5e-17, 0, 6), (Element.Find("Si"), 1525, 3.7e-17, 0, 9), (Element.Find("Si"), 1682, 3.5e-17, 0.78, 5),
         (Element.Find("Si"), 1985, 4.6e-17, 1.91, 1), (Element.Find("C"), 1101, 1.2e-17, 0, 9), (Element.Find("C"), 1240, 1.0e-17, 1.26, 5),
         (Element.Find("Fe"), 1570, 6.3e-18, 0, 25), (Element.Find("Fe"), 2100, 6.0e-18, 1.5, 21), (Element.Find("Fe"), 2500, 3.0e-18, 2.4, 21),
@@ -27,7 +30,7 @@ internal sealed class ContinuousOpacity
 
     // Shares of it that act as a continuum in the blue, where lines crowd, and in the red, between the bands that are treated one by one.
     private const double BlueShare = 1.3;
-    private const double RedShare = 0.4;
+    private const double RedShare = 0.3;
 
     private readonly Gas _gas;
     private readonly double[] _levels = new double[LastLevel + 1];
@@ -45,7 +48,7 @@ internal sealed class ContinuousOpacity
         _kT = Cgs.BoltzmannEv * gas.Temperature;
         var theta = Cgs.Theta(gas.Temperature);
         _haze = MolecularHaze * Math.Pow(10, gas.Composition.Metallicity) * Math.Pow(gas.GasPressure / 1e6, 0.7) / (1 + Math.Exp((gas.Temperature - 3600) / 250));
-        for (var n = 1; n <= LastLevel; n++)
+        for (var n = gas.Composition.Helium > 1 ? HeliumLevel : 1; n <= LastLevel; n++)
             _levels[n] = Math.Exp(-RydbergEv * (1 - (1.0 / (n * n))) / _kT) / (n * n * n);
         _free = Math.Exp(-RydbergEv / _kT) * _kT / (2 * RydbergEv);
         _negativeIons = 4.158e-10 * gas.ElectronPressure * Math.Pow(theta, 2.5) * Math.Pow(10, 0.754 * theta);
@@ -138,7 +141,7 @@ internal sealed class ContinuousOpacity
     }
 
     private static double HazeShare(double wavelength) =>
-        BlueShare + ((RedShare - BlueShare) * Math.Clamp((wavelength - 5900) / 1000, 0, 1));
+        BlueShare + ((RedShare - BlueShare) * Math.Clamp((wavelength - 5900) / 3000, 0, 1));
 
     private static double Cube(double x) => x * x * x;
 }

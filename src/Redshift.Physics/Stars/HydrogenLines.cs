@@ -6,6 +6,7 @@ namespace Redshift.Physics.Stars;
 internal static class HydrogenLines
 {
     private const int LastUpper = 40;
+    private const double FarthestReach = 0.3;
     private const double FaintestRatio = 0.004;
 
     // Stark displacement per unit field, Å per esu: Underhill & Waddell 1959, NBS Circular 603; lower level 1..4, upper minus lower 1..3.
@@ -83,7 +84,7 @@ internal static class HydrogenLines
         }
 
         public double Reach(double profile) =>
-            Math.Min(0.12 * Center, Math.Pow(Wing * Math.Pow(_scale, 1.5) / profile, 0.4) + Math.Sqrt(_lorentz / profile));
+            Math.Min(FarthestReach * Center, Math.Pow(Wing * Math.Pow(_scale, 1.5) / profile, 0.4) + Math.Sqrt(_lorentz / profile));
 
         private static double Scale(int lower, int upper)
         {

@@ -7,15 +7,19 @@ internal static class MolecularBands
     {
         var equilibrium = new MolecularEquilibrium(layer.Gas);
         var scratch = new double[grid.Count];
+        var kelvin = layer.Gas.Temperature;
         foreach (var system in BandSystem.All)
-            AddSystem(ratio, scratch, grid, layer, system, equilibrium.Abundance(system.Molecule));
+            AddSystem(ratio, scratch, grid, layer, system.Bands(kelvin), equilibrium.Abundance(system.Molecule), system.SpacingOverWidth);
+        AddSystem(
+            ratio, scratch, grid, layer, OvertoneBands.Bands(kelvin), equilibrium.Abundance(Molecule.CarbonMonoxide), OvertoneBands.SpacingOverWidth);
         AddWater(ratio, grid, layer, equilibrium.Water);
     }
 
-    private static void AddSystem(Span<double> ratio, double[] scratch, LogWavelengthGrid grid, Layer layer, BandSystem system, double abundance)
+    private static void AddSystem(
+        Span<double> ratio, double[] scratch, LogWavelengthGrid grid, Layer layer, IEnumerable<Band> bands, double abundance, double spacingOverWidth)
     {
         var (first, last) = (scratch.Length, -1);
-        foreach (var band in system.Bands(layer.Gas.Temperature))
+        foreach (var band in bands)
         {
             var absorbers = abundance / layer.ContinuousOpacityAt(Nodes.Place(Math.Log(band.Wavelength)));
             var (from, to) = band.Add(scratch, grid, layer.Gas.Temperature, absorbers);
@@ -26,7 +30,7 @@ internal static class MolecularBands
         {
             // Separate saturated lines let light through between them: mean of a random band (Goody 1952) with the system's ratio
             // of line spacing to Doppler width.
-            ratio[i] += scratch[i] / Math.Sqrt(1 + (system.SpacingOverWidth * scratch[i]));
+            ratio[i] += scratch[i] / Math.Sqrt(1 + (spacingOverWidth * scratch[i]));
             scratch[i] = 0;
         }
     }

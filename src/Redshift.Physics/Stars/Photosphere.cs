@@ -14,7 +14,7 @@ internal sealed class Photosphere
     private const double HydrogenDepth = 0.6;
 
     // Molecules cool the outer layers of giants below the grey temperature: per unit of log g, in effective temperatures.
-    private const double MolecularCooling = 0.012;
+    private const double MolecularCooling = 0.010;
 
     // Surface over effective temperature, from core depths of Ca II in the Sun, of the Balmer lines along the main sequence and of the resonance lines of
     // Na I and Ca I in M dwarfs, whose convection makes the gradient shallow; below the grey value of 0.84 as lines cool the surface, and lowest

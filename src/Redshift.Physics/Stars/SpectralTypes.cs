@@ -28,14 +28,16 @@ internal static class SpectralTypes
         StellarVariant.WhiteDwarfDA => "DA" + WhiteDwarfSubtype(p.TemperatureK),
         StellarVariant.WhiteDwarfDB => "DB" + WhiteDwarfSubtype(p.TemperatureK),
         StellarVariant.Carbon => "C-N",
-        _ => Class(p.TemperatureK, p.LogGravity >= 3.3 || p.TemperatureK > Giants[0].Kelvin ? Dwarfs : Giants) + Luminosity(p.LogGravity) + Suffix(p.Variant),
+        _ => Class(p.TemperatureK, p.LogGravity >= 3.3 || p.TemperatureK > Giants[0].Kelvin ? Dwarfs : Giants) + Luminosity(p) + Suffix(p.Variant),
     };
 
     // 50400 K / T to the nearest half: Sion et al. 1983, ApJ 269, 253.
     private static string WhiteDwarfSubtype(double kelvin) =>
         (Math.Round(2 * 50400 / kelvin) / 2).ToString("0.#", CultureInfo.InvariantCulture);
 
-    private static string Luminosity(double logGravity) => logGravity >= 3.3 ? "V" : logGravity >= 1.3 ? "III" : "I";
+    // Red giants reach gravities at which hotter stars are supergiants.
+    private static string Luminosity(StellarParameters p) =>
+        p.LogGravity >= 3.3 ? "V" : p.LogGravity >= (p.TemperatureK > 6000 ? 2.6 : 0) ? "III" : "I";
 
     private static string Suffix(StellarVariant variant) =>
         variant is StellarVariant.EmissionLine or StellarVariant.ActiveM ? "e" : "";
