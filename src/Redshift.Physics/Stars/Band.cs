@@ -11,7 +11,7 @@ namespace Redshift.Physics.Stars;
 /// <param name="CrossSection">Integrated cross-section of a molecule of the gas, in cm.</param>
 internal readonly record struct Band(double Origin, double Upper, double Lower, double QShare, double CrossSection)
 {
-    private const double Faintest = 0.003;
+    private const double Faintest = 0.005;
 
     /// <summary>Vacuum wavelength of the origin in Å.</summary>
     public double Wavelength => 1e8 / Origin;
@@ -19,7 +19,8 @@ internal readonly record struct Band(double Origin, double Upper, double Lower, 
     private double Head => Origin - ((Upper + Lower) * (Upper + Lower) / (4 * (Upper - Lower)));
 
     /// <summary>Origin of a band whose P or R head stands at a wavenumber.</summary>
-    public static double OriginOfHead(double head, double upper, double lower) => head + ((upper + lower) * (upper + lower) / (4 * (upper - lower)));
+    public static double OriginOfHead(double head, double upper, double lower) =>
+        head + ((upper + lower) * (upper + lower) / (4 * (upper - lower)));
 
     /// <summary>
     /// Adds absorbers (per hydrogen nucleus, over the continuous opacity) times the cross-section, mean over each grid step; returns the
@@ -34,13 +35,17 @@ internal readonly record struct Band(double Origin, double Upper, double Lower, 
         if (strength < Faintest * extent)
             return (int.MaxValue, -1);
         var turn = -(Upper + Lower) / (2 * curvature);
-        return AddBranches(ratio, grid, strength, spread, curvature, turn, Ends(3 / Math.Sqrt(spread), curvature, turn));
+
+        // Beyond this level the band is fainter than the faintest: few lines of a weak band, many of a saturated one.
+        var last = Math.Sqrt((1 + Math.Log(strength / (Faintest * extent))) / spread);
+        return AddBranches(ratio, grid, strength, spread, curvature, turn, Ends(last, curvature, turn));
     }
 
     // Highest and lowest wavenumber of the lines with |m| up to a last one; the head counts only if it is among them.
     private (double Blue, double Red) Ends(double last, double curvature, double turn)
     {
-        var (p, r) = (Origin - ((Upper + Lower) * last) + (curvature * last * last), Origin + ((Upper + Lower) * last) + (curvature * last * last));
+        var (middle, half) = (Origin + (curvature * last * last), (Upper + Lower) * last);
+        var (p, r) = (middle - half, middle + half);
         var (blue, red) = (Math.Max(p, r), Math.Min(p, r));
         if (Math.Abs(turn) < last)
             (blue, red) = (Math.Max(blue, Head), Math.Min(red, Head));
@@ -48,7 +53,13 @@ internal readonly record struct Band(double Origin, double Upper, double Lower, 
     }
 
     private (int First, int Last) AddBranches(
-        Span<double> ratio, LogWavelengthGrid grid, double strength, double spread, double curvature, double turn, (double Blue, double Red) ends)
+        Span<double> ratio,
+        LogWavelengthGrid grid,
+        double strength,
+        double spread,
+        double curvature,
+        double turn,
+        (double Blue, double Red) ends)
     {
         var first = Math.Max(0, (int)Math.Floor(grid.Position(1e8 / ends.Blue)));
         var last = Math.Min(grid.Count - 1, (int)Math.Ceiling(grid.Position(1e8 / ends.Red)));
@@ -61,7 +72,7 @@ internal readonly record struct Band(double Origin, double Upper, double Lower, 
         for (var i = first; i <= last;)
         {
             // Far from head and origin the band is smooth, so steps grow with the distance from them.
-            var length = Math.Min(Math.Max(1, (int)(Math.Min(Math.Abs(i - head), Math.Abs(i - origin)) / 24)), last - i + 1);
+            var length = Math.Min(Math.Max(1, (int)(Math.Min(Math.Abs(i - head), Math.Abs(i - origin)) / 18)), last - i + 1);
             var next = edges[i + length];
             var after = Cumulative(next, spread, curvature, turn);
             var mean = strength * Math.Abs(after - before) / (edge - next);

@@ -14,18 +14,21 @@ internal sealed class ContinuousOpacity
     // In helium atmospheres the excited levels from this one on are those of helium, which are hydrogen's but for a few per cent.
     private const int HeliumLevel = 3;
 
-    // Threshold (vacuum Å), cross-section there (cm²), lower level (eV), its weight: order of magnitude, from memory of Travis & Matsushima 1968, ApJ 154, 689.
+    // Threshold (vacuum Å), cross-section there (cm²), lower level (eV), its weight: order of magnitude, from memory of Travis & Matsushima
+    // 1968, ApJ 154, 689.
     private static readonly (Element Element, double Edge, double CrossSection, double Excitation, double Weight)[] MetalEdges =
     [
-        (Element.Find("Mg"), 2514, 3.0e-18, 2.71, 9), (Element.Find("Mg"), 1622, 1.2e-18, 0, 1), (Element.Find("Mg"), 3757, 3.0e-17, 4.35, 3),
-        (Element.Find("Al"), 2076, 6.5e-17, 0, 6), (Element.Find("Si"), 1525, 3.7e-17, 0, 9), (Element.Find("Si"), 1682, 3.5e-17, 0.78, 5),
-        (Element.Find("Si"), 1985, 4.6e-17, 1.91, 1), (Element.Find("C"), 1101, 1.2e-17, 0, 9), (Element.Find("C"), 1240, 1.0e-17, 1.26, 5),
-        (Element.Find("Fe"), 1570, 6.3e-18, 0, 25), (Element.Find("Fe"), 2100, 6.0e-18, 1.5, 21), (Element.Find("Fe"), 2500, 3.0e-18, 2.4, 21),
+        (Element.Find("Mg"), 2514, 3.0e-18, 2.71, 9), (Element.Find("Mg"), 1622, 1.2e-18, 0, 1),
+        (Element.Find("Mg"), 3757, 3.0e-17, 4.35, 3), (Element.Find("Al"), 2076, 6.5e-17, 0, 6),
+        (Element.Find("Si"), 1525, 3.7e-17, 0, 9), (Element.Find("Si"), 1682, 3.5e-17, 0.78, 5),
+        (Element.Find("Si"), 1985, 4.6e-17, 1.91, 1), (Element.Find("C"), 1101, 1.2e-17, 0, 9),
+        (Element.Find("C"), 1240, 1.0e-17, 1.26, 5), (Element.Find("Fe"), 1570, 6.3e-18, 0, 25),
+        (Element.Find("Fe"), 2100, 6.0e-18, 1.5, 21), (Element.Find("Fe"), 2500, 3.0e-18, 2.4, 21),
         (Element.Find("Ca"), 2028, 2.0e-19, 0, 1), (Element.Find("Ca"), 2930, 6.0e-18, 1.88, 9),
     ];
 
-    // Cross-section per nucleus that the countless weak lines of TiO and water add at 1e6 dyn/cm² below 3600 K: order of magnitude of published
-    // Rosseland means (Ferguson et al. 2005, ApJ 623, 585), which fall with pressure as the gaps between lines open.
+    // Cross-section per nucleus that the countless weak lines of TiO and water add at 1e6 dyn/cm² below 3600 K: order of magnitude of
+    // published Rosseland means (Ferguson et al. 2005, ApJ 623, 585), which fall with pressure as the gaps between lines open.
     private const double MolecularHaze = 2e-25;
 
     // Shares of it that act as a continuum in the blue, where lines crowd, and in the red, between the bands that are treated one by one.
@@ -47,7 +50,7 @@ internal sealed class ContinuousOpacity
         _gas = gas;
         _kT = Cgs.BoltzmannEv * gas.Temperature;
         var theta = Cgs.Theta(gas.Temperature);
-        _haze = MolecularHaze * Math.Pow(10, gas.Composition.Metallicity) * Math.Pow(gas.GasPressure / 1e6, 0.7) / (1 + Math.Exp((gas.Temperature - 3600) / 250));
+        _haze = HazeOf(gas);
         for (var n = gas.Composition.Helium > 1 ? HeliumLevel : 1; n <= LastLevel; n++)
             _levels[n] = Math.Exp(-RydbergEv * (1 - (1.0 / (n * n))) / _kT) / (n * n * n);
         _free = Math.Exp(-RydbergEv / _kT) * _kT / (2 * RydbergEv);
@@ -62,7 +65,8 @@ internal sealed class ContinuousOpacity
     public double At(double wavelength)
     {
         var emission = 1 - Math.Exp(-Cgs.SecondRadiation / (wavelength * _gas.Temperature));
-        var atoms = emission * ((1.0449e-26 * Cube(wavelength) * BoundAndFree(wavelength)) + (_negativeIons * NegativeIonBoundFree(wavelength)));
+        var hydrogen = 1.0449e-26 * Cube(wavelength) * BoundAndFree(wavelength);
+        var atoms = emission * (hydrogen + (_negativeIons * NegativeIonBoundFree(wavelength)));
         return (_gas.NeutralHydrogen * (atoms + NegativeIonFreeFree(wavelength) + Rayleigh(wavelength)))
             + (ThomsonCrossSection * _gas.ElectronsPerNucleus)
             + (HazeShare(wavelength) * _haze)
@@ -93,7 +97,8 @@ internal sealed class ContinuousOpacity
         return sum + (_free * (Math.Exp(highest / _kT) - 1)) + _free;
     }
 
-    // Near a series limit the highest levels are dissolved by the fields of neighbours; the continuum reaches to longer waves in their place.
+    // Near a series limit the highest levels are dissolved by the fields of neighbours; the continuum reaches to longer waves in their
+    // place.
     private double DissolvedShare(int lower, double wavelength)
     {
         var inverse = (1.0 / (lower * lower)) - (LymanLimit / wavelength);
@@ -105,7 +110,8 @@ internal sealed class ContinuousOpacity
         if (wavelength > 16300)
             return 0;
         var w = Math.Max(wavelength, 2250);
-        var cross = 1.99654 + (w * (-1.18267e-5 + (w * (2.64243e-6 + (w * (-4.40524e-10 + (w * (3.23992e-14 + (w * (-1.39568e-18 + (w * 2.78701e-23)))))))))));
+        var high = -4.40524e-10 + (w * (3.23992e-14 + (w * (-1.39568e-18 + (w * 2.78701e-23)))));
+        var cross = 1.99654 + (w * (-1.18267e-5 + (w * (2.64243e-6 + (w * high)))));
         return Math.Max(cross, 0) * 1e-18 * Math.Min(1, wavelength / 2250);
     }
 
@@ -139,6 +145,10 @@ internal sealed class ContinuousOpacity
 
         return sum * Cube(wavelength);
     }
+
+    private static double HazeOf(Gas gas) =>
+        MolecularHaze * Math.Pow(10, gas.Composition.Metallicity) * Math.Pow(gas.GasPressure / 1e6, 0.7)
+        / (1 + Math.Exp((gas.Temperature - 3600) / 250));
 
     private static double HazeShare(double wavelength) =>
         BlueShare + ((RedShare - BlueShare) * Math.Clamp((wavelength - 5900) / 3000, 0, 1));

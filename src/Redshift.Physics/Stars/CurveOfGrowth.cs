@@ -11,7 +11,8 @@ internal static class CurveOfGrowth
 
     private const double FirstLog = -6;
     private const double LogStep = 0.05;
-    private static readonly double[] CoreTable = [.. Enumerable.Range(0, 400).Select(i => Integrate(Math.Pow(10, FirstLog + (i * LogStep))))];
+    private static readonly double[] CoreTable =
+        [.. Enumerable.Range(0, 400).Select(i => Integrate(Math.Pow(10, FirstLog + (i * LogStep))))];
 
     /// <summary>Width of the Gaussian core, ∫ η e^(−v²)/(1 + η e^(−v²)) dv, for a central opacity ratio η.</summary>
     public static double Core(double central)

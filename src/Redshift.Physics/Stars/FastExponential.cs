@@ -1,6 +1,6 @@
 namespace Redshift.Physics.Stars;
 
-/// <summary>exp(−x) from a table: bands take it millions of times and need no more than six digits.</summary>
+/// <summary>exp(−x) from a table: lines and bands take it millions of times and need no more than six digits.</summary>
 internal static class FastExponential
 {
     private const double PerUnit = 512;

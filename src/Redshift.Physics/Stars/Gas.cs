@@ -20,7 +20,8 @@ internal sealed class Gas
         var ionRatio = SahaRatio(Element.Hydrogen, 0);
         var electronsPerNucleus = Element.Others.Select((e, i) => AbundanceOf(e) * MeanCharge(_stages[i])).Sum();
         var molecular = 1 / HydrogenMoleculeConstant(temperature);
-        AtomicHydrogenPressure = PositiveRoot(2 * electronsPerNucleus * molecular, (electronsPerNucleus * (1 + ionRatio)) + ionRatio, electronPressure);
+        var linear = (electronsPerNucleus * (1 + ionRatio)) + ionRatio;
+        AtomicHydrogenPressure = PositiveRoot(2 * electronsPerNucleus * molecular, linear, electronPressure);
         NucleiPressure = (AtomicHydrogenPressure * (1 + ionRatio)) + (2 * MoleculePressure);
         NeutralHydrogen = AtomicHydrogenPressure / NucleiPressure;
         GasPressure = electronPressure + NucleiPressure - MoleculePressure + (NucleiPressure * Element.Others.Sum(AbundanceOf));
@@ -84,7 +85,9 @@ internal sealed class Gas
             ? (stage == 0 ? NeutralHydrogen : NeutralHydrogen * SahaRatio(element, 0))
             : _stages[element.Index][stage];
 
-    /// <summary>N(stage + 1)/N(stage): Saha equation in the form of Gray 2005, eq. 1.20: Φ(T)/P_e, Φ = 0.6665 (U₁/U₀) T^(5/2) 10^(−θI).</summary>
+    /// <summary>
+    /// N(stage + 1)/N(stage): Saha equation in the form of Gray 2005, eq. 1.20: Φ(T)/P_e, Φ = 0.6665 (U₁/U₀) T^(5/2) 10^(−θI).
+    /// </summary>
     public static double SahaRatio(Element element, int stage, double kelvin, double electronPressure) =>
         0.6665 * element.Partition[stage + 1] / element.Partition[stage] * kelvin * kelvin * Math.Sqrt(kelvin)
         * Math.Exp(-element.Ionization[stage] / (Cgs.BoltzmannEv * kelvin)) / electronPressure;

@@ -11,8 +11,8 @@ internal static class HydrogenLevels
 
     /// <summary>Share of atoms in which a level (not necessarily whole) still binds its electron.</summary>
     /// <remarks>
-    /// Dissolution is gradual (Hummer &amp; Mihalas 1988, ApJ 331, 794): a smooth step from 0.6 to 1.4 of the last line. It ends, as the tail of
-    /// dissolved low levels would otherwise outweigh all other opacity in cool stars.
+    /// Dissolution is gradual (Hummer &amp; Mihalas 1988, ApJ 331, 794): a smooth step from 0.6 to 1.4 of the last line. It ends, as the
+    /// tail of dissolved low levels would otherwise outweigh all other opacity in cool stars.
     /// </remarks>
     public static double Survival(double level, double electronDensity)
     {

@@ -2,7 +2,9 @@ using Redshift.Physics.Hydrogen;
 
 namespace Redshift.Physics.Stars;
 
-/// <summary>Hydrogen lines broadened by the fields of ions and electrons (linear Stark effect) and by collisions with hydrogen atoms.</summary>
+/// <summary>
+/// Hydrogen lines broadened by the fields of ions and electrons (linear Stark effect) and by collisions with hydrogen atoms.
+/// </summary>
 internal static class HydrogenLines
 {
     private const int LastUpper = 40;
@@ -94,8 +96,8 @@ internal static class HydrogenLines
             return 5.5e-5 * product * product / ((upper * upper) - (lower * lower)) / (1 + (0.13 / (upper - lower)));
         }
 
-        // Collisions with hydrogen atoms: cross-sections of Barklem, Piskunov & O'Mara 2000, A&A 363, 1091 (Hα 1180, Hβ 2320, Hγ 4208 atomic units);
-        // for the Lyman lines the natural width is added.
+        // Collisions with hydrogen atoms: cross-sections of Barklem, Piskunov & O'Mara 2000, A&A 363, 1091 (Hα 1180, Hβ 2320, Hγ 4208
+        // atomic units); for the Lyman lines the natural width is added.
         private static double CollisionWidth(Gas gas, double center, int lower, int upper)
         {
             const double squareBohr = 2.8003e-17;

@@ -6,8 +6,9 @@ namespace Redshift.Physics.Stars;
 /// </summary>
 internal static class LineHaze
 {
-    // Opacity ratio in the Sun at 4000 Å, the wavelength over which it falls by e, and the step shortward of Ca II where strong multiplets crowd: what
-    // the listed lines leave of the blocked light of Allen 1973, Astrophysical Quantities, section 80 (0.22 at 4050 Å, 0.41 at 3850 Å).
+    // Opacity ratio in the Sun at 4000 Å, the wavelength over which it falls by e, and the step shortward of Ca II where strong multiplets
+    // crowd: what the listed lines leave of the blocked light of Allen 1973, Astrophysical Quantities, section 80 (0.22 at 4050 Å, 0.41 at
+    // 3850 Å).
     private const double SolarRatio = 0.10;
     private const double StepRatio = 0.08;
     private const double StepWavelength = 3960;
@@ -17,24 +18,31 @@ internal static class LineHaze
     private const double LastWavelength = 6500;
     private const int Block = 8;
     private static readonly Element Iron = Element.Find("Fe");
-    private static readonly double SolarOpacityRatio = OpacityRatio(new Photosphere(LineTables.Sun).Lines, 4000);
+    private static readonly double SolarOpacityRatio = SolarIron();
 
     public static void Add(Span<double> ratio, LogWavelengthGrid grid, Photosphere star)
     {
+        var iron = new Absorbers(star.Lines, Iron, 0);
         var last = Math.Min(ratio.Length - Block, (int)grid.Position(LastWavelength));
         for (var i = Math.Max(0, (int)grid.Position(1900)); i < last; i += Block)
         {
             var wavelength = grid.Wavelength(i + (Block / 2));
-            var haze = InSun(wavelength) * OpacityRatio(star.Lines, wavelength) / SolarOpacityRatio;
+            var haze = SolarHaze(wavelength) * OpacityRatio(iron, star.Lines, wavelength) / SolarOpacityRatio;
             foreach (ref var r in ratio.Slice(i, Block))
                 r += haze;
         }
     }
 
-    private static double InSun(double wavelength) =>
+    private static double SolarHaze(double wavelength) =>
         (SolarRatio * Math.Exp((4000 - Math.Max(wavelength, 2700)) / ScaleLength))
         + (StepRatio / (1 + Math.Exp((wavelength - StepWavelength) / StepWidth)));
 
-    private static double OpacityRatio(Layer layer, double wavelength) =>
-        new Absorbers(layer, Iron, 0).CentralOpacity(wavelength, Excitation) / layer.ContinuousOpacityAt(Nodes.Place(Math.Log(wavelength)));
+    private static double OpacityRatio(in Absorbers iron, Layer layer, double wavelength) =>
+        iron.CentralOpacity(wavelength, Excitation) / layer.ContinuousOpacityAt(Nodes.Place(Math.Log(wavelength)));
+
+    private static double SolarIron()
+    {
+        var layer = new Photosphere(LineTables.Sun).Lines;
+        return OpacityRatio(new Absorbers(layer, Iron, 0), layer, 4000);
+    }
 }

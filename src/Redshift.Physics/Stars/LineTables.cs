@@ -1,4 +1,3 @@
-using System.Globalization;
 using Redshift.Physics.Air;
 
 namespace Redshift.Physics.Stars;
@@ -21,34 +20,41 @@ internal static class LineTables
     private static IEnumerable<AtomicLine> SolarLines()
     {
         var sun = new Photosphere(Sun);
-        return Rows("solar-lines.csv").Select(r => Calibrated(r, sun, 1e-3 * Number(r[2]), Number(r[3])));
+        return StarTables.Rows("solar-lines.csv").Select(r => Calibrated(r, sun, 1e-3 * StarTables.Number(r[2]), StarTables.Number(r[3])));
     }
 
     private static IEnumerable<AtomicLine> HotLines()
     {
         var stars = new Dictionary<double, Photosphere>();
-        foreach (var row in Rows("hot-lines.csv"))
+        foreach (var row in StarTables.Rows("hot-lines.csv"))
         {
-            var kelvin = Number(row[3]);
+            var kelvin = StarTables.Number(row[3]);
             if (!stars.TryGetValue(kelvin, out var star))
                 stars[kelvin] = star = new Photosphere(new StellarParameters(kelvin, 4, 0));
-            yield return Calibrated(row, star, Number(row[2]), Number(row[4]));
+            yield return Calibrated(row, star, StarTables.Number(row[2]), StarTables.Number(row[4]));
         }
     }
 
-    private static IEnumerable<AtomicLine> UltravioletLines() =>
-        Rows("ultraviolet-lines.csv").Select(r => new AtomicLine(Ion(r[0]), Number(r[1]), Number(r[3]), Math.Pow(10, Number(r[2]))));
+    private static IEnumerable<AtomicLine> UltravioletLines()
+    {
+        foreach (var row in StarTables.Rows("ultraviolet-lines.csv"))
+        {
+            var weight = Math.Pow(10, StarTables.Number(row[2]));
+            yield return new AtomicLine(Ion(row[0]), StarTables.Number(row[1]), StarTables.Number(row[3]), weight);
+        }
+    }
 
     // The g f that gives the published width in the star in which it was measured.
     private static AtomicLine Calibrated(string[] row, Photosphere star, double widthAngstrom, double excitation)
     {
         var ion = Ion(row[0]);
-        var wavelength = AirRefraction.ToVacuum(Number(row[1]));
+        var wavelength = AirRefraction.ToVacuum(StarTables.Number(row[1]));
         var absorbers = new Absorbers(star.Lines, IonList[ion].Element, IonList[ion].Stage);
         var place = Nodes.Place(Math.Log(wavelength));
         var width = widthAngstrom / (wavelength * absorbers.Doppler * star.StrongestDepth(place));
-        var central = CurveOfGrowth.Invert(width, absorbers.Damping(wavelength)) * star.HalfDepthRatio(place) * star.Lines.ContinuousOpacityAt(place);
-        return new AtomicLine(ion, wavelength, excitation, central / absorbers.CentralOpacity(wavelength, excitation));
+        var central = CurveOfGrowth.Invert(width, absorbers.Damping(wavelength)) * star.HalfDepthRatio(place);
+        var opacity = central * star.Lines.ContinuousOpacityAt(place);
+        return new AtomicLine(ion, wavelength, excitation, opacity / absorbers.CentralOpacity(wavelength, excitation));
     }
 
     private static int Ion(string name)
@@ -60,22 +66,5 @@ internal static class LineTables
             return known;
         IonList.Add(species);
         return IonList.Count - 1;
-    }
-
-    private static double Number(string text) => double.Parse(text, CultureInfo.InvariantCulture);
-
-    private static IEnumerable<string[]> Rows(string table)
-    {
-        using var stream = typeof(LineTables).Assembly.GetManifestResourceStream("Redshift.Physics.Stars." + table)
-            ?? throw new InvalidOperationException($"table {table} is missing from the assembly");
-        using var reader = new StreamReader(stream);
-        var lines = new List<string>();
-        while (reader.ReadLine() is { } line)
-        {
-            if (line.Length > 0 && line[0] != '#')
-                lines.Add(line);
-        }
-
-        return lines.Skip(1).Select(l => l.Split(','));
     }
 }

@@ -10,13 +10,19 @@ internal static class MolecularBands
         var kelvin = layer.Gas.Temperature;
         foreach (var system in BandSystem.All)
             AddSystem(ratio, scratch, grid, layer, system.Bands(kelvin), equilibrium.Abundance(system.Molecule), system.SpacingOverWidth);
-        AddSystem(
-            ratio, scratch, grid, layer, OvertoneBands.Bands(kelvin), equilibrium.Abundance(Molecule.CarbonMonoxide), OvertoneBands.SpacingOverWidth);
+        var monoxide = equilibrium.Abundance(Molecule.CarbonMonoxide);
+        AddSystem(ratio, scratch, grid, layer, OvertoneBands.Bands(kelvin), monoxide, OvertoneBands.SpacingOverWidth);
         AddWater(ratio, grid, layer, equilibrium.Water);
     }
 
     private static void AddSystem(
-        Span<double> ratio, double[] scratch, LogWavelengthGrid grid, Layer layer, IEnumerable<Band> bands, double abundance, double spacingOverWidth)
+        Span<double> ratio,
+        double[] scratch,
+        LogWavelengthGrid grid,
+        Layer layer,
+        IEnumerable<Band> bands,
+        double abundance,
+        double spacingOverWidth)
     {
         var (first, last) = (scratch.Length, -1);
         foreach (var band in bands)
@@ -44,7 +50,8 @@ internal static class MolecularBands
     {
         foreach (var (center, sigma, strength) in WaterBands)
         {
-            var peak = abundance * strength / (sigma * Math.Sqrt(2 * Math.PI)) / layer.ContinuousOpacityAt(Nodes.Place(Math.Log(1e8 / center)));
+            var opacity = layer.ContinuousOpacityAt(Nodes.Place(Math.Log(1e8 / center)));
+            var peak = abundance * strength / (sigma * Math.Sqrt(2 * Math.PI)) / opacity;
             if (peak < 1e-3)
                 continue;
             var first = Math.Max(0, (int)grid.Position(1e8 / (center + (4 * sigma))));

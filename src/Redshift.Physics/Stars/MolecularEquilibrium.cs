@@ -3,13 +3,6 @@ namespace Redshift.Physics.Stars;
 /// <summary>Partial pressures of free atoms and molecules in a cool gas.</summary>
 internal sealed class MolecularEquilibrium
 {
-    private static readonly Molecule[] Molecules =
-    [
-        Molecule.CarbonMonoxide, Molecule.Cyanogen, Molecule.Carbon2, Molecule.Nitrogen2, Molecule.Methylidyne, Molecule.Hydroxyl,
-        Molecule.Imidogen, Molecule.MagnesiumHydride, Molecule.CalciumHydride, Molecule.IronHydride, Molecule.SiliconMonoxide,
-        Molecule.TitaniumMonoxide, Molecule.VanadiumMonoxide,
-    ];
-
     private static readonly Element CarbonAtom = Element.Find("C");
     private static readonly Element Oxygen = Element.Find("O");
     private readonly Gas _gas;
@@ -20,11 +13,11 @@ internal sealed class MolecularEquilibrium
     public MolecularEquilibrium(Gas gas)
     {
         _gas = gas;
-        _constants = [.. Molecules.Select(m => m.DissociationConstant(gas.Temperature))];
+        _constants = [.. Molecule.All.Select(m => m.DissociationConstant(gas.Temperature))];
 
         // H2O against H2 and O: 5.09 eV, entropy from memory of the JANAF tables.
         _waterConstant = Math.Pow(10, 12.6 - (25650 / gas.Temperature));
-        foreach (var element in Molecules.SelectMany(m => (Element[])[m.First, m.Second]).Distinct())
+        foreach (var element in Molecule.All.SelectMany(m => (Element[])[m.First, m.Second]).Distinct())
             _free[element] = element == Element.Hydrogen ? gas.AtomicHydrogenPressure : Total(element) * gas.Fraction(element, 0);
         for (var round = 0; round < 40; round++)
             Iterate();
@@ -32,7 +25,7 @@ internal sealed class MolecularEquilibrium
 
     /// <summary>Molecules per hydrogen nucleus.</summary>
     public double Abundance(Molecule molecule) =>
-        _free[molecule.First] * _free[molecule.Second] / _constants[Array.IndexOf(Molecules, molecule)] / _gas.NucleiPressure;
+        _free[molecule.First] * _free[molecule.Second] / _constants[Array.IndexOf(Molecule.All, molecule)] / _gas.NucleiPressure;
 
     /// <summary>Water molecules per hydrogen nucleus.</summary>
     public double Water => _gas.MoleculePressure * _free[Oxygen] / _waterConstant / _gas.NucleiPressure;
@@ -58,9 +51,9 @@ internal sealed class MolecularEquilibrium
     private double Demand(Element element, Molecule? except)
     {
         var sum = 1 / Math.Max(_gas.Fraction(element, 0), 1e-30);
-        for (var i = 0; i < Molecules.Length; i++)
+        for (var i = 0; i < Molecule.All.Length; i++)
         {
-            var m = Molecules[i];
+            var m = Molecule.All[i];
             if (m == except)
                 continue;
             if (m.First == element)

@@ -24,6 +24,16 @@ internal sealed record Molecule(Element First, Element Second, double Dissociati
     public static readonly Molecule TitaniumMonoxide = Of("Ti", "O", 6.87, 0.53541, 1009.0, 6.5);
     public static readonly Molecule VanadiumMonoxide = Of("V", "O", 6.44, 0.54638, 1011.3, 4);
 
+    /// <summary>Molecules of the equilibrium.</summary>
+    public static readonly Molecule[] All =
+    [
+        CarbonMonoxide, Cyanogen, Carbon2, Nitrogen2, Methylidyne, Hydroxyl, Imidogen, MagnesiumHydride, CalciumHydride, IronHydride,
+        SiliconMonoxide, TitaniumMonoxide, VanadiumMonoxide,
+    ];
+
+    /// <summary>Chemical formula.</summary>
+    public string Formula => First == Second ? First.Symbol + "2" : First.Symbol + Second.Symbol;
+
     /// <summary>Reduced mass in u.</summary>
     public double ReducedMass => First.Mass * Second.Mass / (First.Mass + Second.Mass);
 
@@ -38,6 +48,8 @@ internal sealed record Molecule(Element First, Element Second, double Dissociati
         return motion * Cgs.Boltzmann * kelvin * First.Partition[0] * Second.Partition[0] / internalStates
             * Math.Exp(-Dissociation / (Cgs.BoltzmannEv * kelvin));
     }
+
+    public static Molecule Find(string formula) => All.Single(m => m.Formula == formula);
 
     private static Molecule Of(string first, string second, double dissociation, double rotation, double vibration, double weight) =>
         new(Element.Find(first), Element.Find(second), dissociation, rotation, vibration, weight);

@@ -8,20 +8,23 @@ internal static class OvertoneBands
 
     private const int LastVibration = 9;
 
-    // Constants of the ground state from memory of Huber & Herzberg 1979; integrated cross-sections in cm of the bands from v = 0 from memory of HITRAN.
+    // Constants of the ground state from memory of Huber & Herzberg 1979; integrated cross-sections in cm of the bands from v = 0 from
+    // memory of HITRAN.
     private static readonly MolecularState Ground = new(2169.81, 13.288, 1.93128, 0.01750);
     private static readonly (int Step, double CrossSection)[] Overtones = [(2, 7.6e-20), (3, 4.8e-22)];
 
     /// <summary>The bands with their cross-sections at a temperature.</summary>
     public static IEnumerable<Band> Bands(double kelvin)
     {
+        var vibrational = Molecule.CarbonMonoxide.VibrationalPartition(kelvin);
         foreach (var (step, crossSection) in Overtones)
         {
             for (var v = 0; v <= LastVibration; v++)
             {
-                var population = Math.Exp(-Cgs.WavenumberKelvin * Ground.Term(v) / kelvin) / Molecule.CarbonMonoxide.VibrationalPartition(kelvin);
+                var population = Math.Exp(-Cgs.WavenumberKelvin * Ground.Term(v) / kelvin) / vibrational;
                 var origin = Ground.Term(v + step) - Ground.Term(v);
-                yield return new Band(origin, Ground.RotationAt(v + step), Ground.RotationAt(v), 0, crossSection * Binomial(v + step, step) * population);
+                var strength = crossSection * Binomial(v + step, step) * population;
+                yield return new Band(origin, Ground.RotationAt(v + step), Ground.RotationAt(v), 0, strength);
             }
         }
     }

@@ -3,6 +3,7 @@ namespace Redshift.Physics.Stars;
 /// <summary>A grey atmosphere, seen at each wavelength as deep as the continuous opacity allows (Eddington &amp; Barbier).</summary>
 internal sealed class Photosphere
 {
+    private const double HottestMolecules = 6800;
     private const double GiantGravity = 3.5;
     private const double CoolSurface = 0.70;
     private const double ContinuumDepth = 2.0 / 3;
@@ -16,13 +17,13 @@ internal sealed class Photosphere
     // Molecules cool the outer layers of giants below the grey temperature: per unit of log g, in effective temperatures.
     private const double MolecularCooling = 0.010;
 
-    // Surface over effective temperature, from core depths of Ca II in the Sun, of the Balmer lines along the main sequence and of the resonance lines of
-    // Na I and Ca I in M dwarfs, whose convection makes the gradient shallow; below the grey value of 0.84 as lines cool the surface, and lowest
-    // in hot stars, where scattering deepens the cores.
+    // Surface over effective temperature, from core depths of Ca II in the Sun, of the Balmer lines along the main sequence and of the
+    // resonance lines of Na I and Ca I in M dwarfs, whose convection makes the gradient shallow; below the grey value of 0.84 as lines
+    // cool the surface, and lowest in hot stars, where scattering deepens the cores.
     private static readonly (double Kelvin, double Ratio)[] Surface =
     [
-        (2600, CoolSurface), (3200, 0.73), (3600, 0.80), (4200, 0.79), (5200, CoolSurface), (6500, CoolSurface), (8000, 0.82), (10500, 0.82), (13000, 0.75),
-        (22000, 0.64), (60000, 0.62),
+        (2600, CoolSurface), (3200, 0.73), (3600, 0.80), (4200, 0.79), (5200, CoolSurface), (6500, CoolSurface), (8000, 0.82),
+        (10500, 0.82), (13000, 0.75), (22000, 0.64), (60000, 0.62),
     ];
 
     private readonly double[] _flux = new double[Nodes.Count];
@@ -36,7 +37,8 @@ internal sealed class Photosphere
         Layer At(double depth, double cooling = 0) =>
             new(Gas.InBalance(GreyTemperature(depth) - (cooling * star.TemperatureK), star.LogGravity, composition, depth), star);
         Lines = At(LineDepth);
-        Molecules = At(MolecularDepth, MolecularCooling * Math.Max(0, 4.5 - star.LogGravity));
+        if (star.TemperatureK < HottestMolecules)
+            Molecules = At(MolecularDepth, MolecularCooling * Math.Max(0, 4.5 - star.LogGravity));
         Hydrogen = At(HydrogenDepth);
         Tabulate(At(ContinuumLayerDepth));
     }
@@ -46,8 +48,8 @@ internal sealed class Photosphere
     /// <summary>Where metal lines form.</summary>
     public Layer Lines { get; }
 
-    /// <summary>Where molecular bands form.</summary>
-    public Layer Molecules { get; }
+    /// <summary>Where molecular bands form; none in hot stars.</summary>
+    public Layer? Molecules { get; }
 
     /// <summary>Where the wings of hydrogen lines form.</summary>
     public Layer Hydrogen { get; }

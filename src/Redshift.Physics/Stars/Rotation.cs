@@ -24,7 +24,8 @@ internal static class Rotation
         var reach = (int)Math.Ceiling(3.5 * sigmaSteps);
         if (reach < 2)
             return flux;
-        var kernel = Enumerable.Range(-reach, (2 * reach) + 1).Select(i => (float)Math.Exp(-0.5 * i * i / (sigmaSteps * sigmaSteps))).ToArray();
+        var offsets = Enumerable.Range(-reach, (2 * reach) + 1);
+        var kernel = offsets.Select(i => (float)Math.Exp(-0.5 * i * i / (sigmaSteps * sigmaSteps))).ToArray();
         var norm = 1 / kernel.Sum();
         var broad = (float[])flux.Clone();
         var inside = broad.AsSpan(reach, flux.Length - (2 * reach));
@@ -35,7 +36,8 @@ internal static class Rotation
     }
 
     /// <summary>Broadening of a star in steps of a grid.</summary>
-    public static double SigmaSteps(StellarParameters star, LogWavelengthGrid grid) => Sigma(star) / Codata2022.SpeedOfLightKmS / grid.LnStep;
+    public static double SigmaSteps(StellarParameters star, LogWavelengthGrid grid) =>
+        Sigma(star) / Codata2022.SpeedOfLightKmS / grid.LnStep;
 
     private static void AddScaled(Span<float> sum, ReadOnlySpan<float> values, float factor)
     {

@@ -28,12 +28,15 @@ internal static class SpectralTypes
         StellarVariant.WhiteDwarfDA => "DA" + WhiteDwarfSubtype(p.TemperatureK),
         StellarVariant.WhiteDwarfDB => "DB" + WhiteDwarfSubtype(p.TemperatureK),
         StellarVariant.Carbon => "C-N",
-        _ => Class(p.TemperatureK, p.LogGravity >= 3.3 || p.TemperatureK > Giants[0].Kelvin ? Dwarfs : Giants) + Luminosity(p) + Suffix(p.Variant),
+        _ => Class(p.TemperatureK, ScaleOf(p)) + Luminosity(p) + Suffix(p.Variant),
     };
 
     // 50400 K / T to the nearest half: Sion et al. 1983, ApJ 269, 253.
     private static string WhiteDwarfSubtype(double kelvin) =>
         (Math.Round(2 * 50400 / kelvin) / 2).ToString("0.#", CultureInfo.InvariantCulture);
+
+    private static (double Subtype, double Kelvin)[] ScaleOf(StellarParameters p) =>
+        p.LogGravity >= 3.3 || p.TemperatureK > Giants[0].Kelvin ? Dwarfs : Giants;
 
     // Red giants reach gravities at which hotter stars are supergiants.
     private static string Luminosity(StellarParameters p) =>

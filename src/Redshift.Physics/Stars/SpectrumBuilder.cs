@@ -7,7 +7,6 @@ internal sealed class SpectrumBuilder(Photosphere star, LogWavelengthGrid grid)
 {
     private const double FaintestWing = 0.01;
     private const double FaintestWidth = 0.002;
-    private const double HottestMolecules = 6800;
     private const int ProfileReach = 4;
     private static readonly double[][] Gaussians = [.. Enumerable.Range(0, 33).Select(i => Gaussian((i - 16) / 32.0))];
     private readonly double[] _ratio = new double[grid.Count];
@@ -19,15 +18,18 @@ internal sealed class SpectrumBuilder(Photosphere star, LogWavelengthGrid grid)
         if (star.Star.Variant != StellarVariant.WhiteDwarfDB)
             HydrogenLines.Add(_ratio, grid, star.Hydrogen);
         AddLines();
-        if (star.Star.TemperatureK < HottestMolecules)
-            MolecularBands.Add(_ratio, grid, star.Molecules);
+        if (star.Molecules is { } molecules)
+            MolecularBands.Add(_ratio, grid, molecules);
         LineHaze.Add(_ratio, grid, star);
         ChromosphericEmission.Add(_emission, grid, star.Star);
         return Transfer();
     }
 
-    private static double[] Gaussian(double offset) =>
-        [.. Enumerable.Range(-ProfileReach, (2 * ProfileReach) + 1).Select(i => Math.Exp(-0.5 * (i - offset) * (i - offset)) / Math.Sqrt(2 * Math.PI))];
+    private static double[] Gaussian(double offset)
+    {
+        var steps = Enumerable.Range(-ProfileReach, (2 * ProfileReach) + 1);
+        return [.. steps.Select(i => Math.Exp(-0.5 * (i - offset) * (i - offset)) / Math.Sqrt(2 * Math.PI))];
+    }
 
     private void AddLines()
     {
@@ -108,6 +110,6 @@ internal sealed class SpectrumBuilder(Photosphere star, LogWavelengthGrid grid)
     private static double Residual(double ratio, double strongest, double narrow)
     {
         var residual = 1 - (strongest * ratio / (1 + ratio));
-        return residual * Math.Exp(-narrow / ((1 + ratio) * residual));
+        return residual * FastExponential.OfMinus(narrow / ((1 + ratio) * residual));
     }
 }

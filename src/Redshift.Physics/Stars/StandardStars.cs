@@ -10,7 +10,9 @@ internal static class StandardStars
         2650, 2450,
     ];
 
-    private static readonly double[] Giants = [20000, 13000, 9500, 7500, 6500, 5600, 5200, 4900, 4600, 4300, 4000, 3800, 3600, 3400, 3200, 2950];
+    private static readonly double[] Giants =
+        [20000, 13000, 9500, 7500, 6500, 5600, 5200, 4900, 4600, 4300, 4000, 3800, 3600, 3400, 3200, 2950];
+
     private static readonly double[] PoorDwarfs = [8000, 7000, 6400, 6000, 5600, 5200];
     private static readonly double[] PoorGiants = [5400, 4900, 4500];
     private static readonly double[] HydrogenDwarfs = [60000, 40000, 30000, 24000, 19000, 15000, 12000, 10000, 8500, 7200];

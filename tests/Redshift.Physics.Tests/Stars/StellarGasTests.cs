@@ -5,8 +5,8 @@ namespace Redshift.Physics.Tests.Stars;
 
 public sealed class StellarGasTests
 {
-    // Worked numbers of Carroll & Ostlie 2007, An Introduction to Modern Astrophysics, example 8.1.5: T = 5777 K, P_e = 1.5 N/m² = 15 dyn/cm².
-    // Partition functions: hydrogen 2 and 1; calcium 1.32 and 2.30, the table here having 1.2 and 2.3.
+    // Worked numbers of Carroll & Ostlie 2007, An Introduction to Modern Astrophysics, example 8.1.5: T = 5777 K, P_e = 1.5 N/m², that is
+    // 15 dyn/cm². Partition functions: hydrogen 2 and 1; calcium 1.32 and 2.30, the table here having 1.2 and 2.3.
     [Theory]
     [InlineData("H", 7.7e-5, 1)]
     [InlineData("Ca", 918, 1.32 / 1.2)]
@@ -47,8 +47,8 @@ public sealed class StellarGasTests
     [InlineData(5000)]
     public void Partition_functions_give_the_tabulated_dissociation_of_hydrogen(double kelvin)
     {
-        // Tsuji 1973, A&A 23, 411: log K_p = 12.5335 − 4.9252 θ + 0.0562 θ² − 0.0033 θ³ in dyn/cm²; rigid rotator and harmonic oscillator are
-        // good to a tenth of a dex for so light a molecule.
+        // Tsuji 1973, A&A 23, 411: log K_p = 12.5335 − 4.9252 θ + 0.0562 θ² − 0.0033 θ³ in dyn/cm²; rigid rotator and harmonic oscillator
+        // are good to a tenth of a dex for so light a molecule.
         var hydrogen = new Molecule(Element.Hydrogen, Element.Hydrogen, 4.478, 60.853, 4401.2, 0.5);
         Assert.Equal(Math.Log10(Gas.HydrogenMoleculeConstant(kelvin)), Math.Log10(hydrogen.DissociationConstant(kelvin)), 0.12);
     }

@@ -103,5 +103,6 @@ public sealed class StellarIndexTests
 
     private static double Mean(double[] flux, double from, double to) => Pixels(from, to).Average(i => flux[i]);
 
-    private static IEnumerable<int> Pixels(double from, double to) => Enumerable.Range(0, Air.Length).Where(i => Air[i] > from && Air[i] < to);
+    private static IEnumerable<int> Pixels(double from, double to) =>
+        Enumerable.Range(0, Air.Length).Where(i => Air[i] > from && Air[i] < to);
 }
