@@ -16,8 +16,7 @@ internal sealed class FilteredResiduals
     private static readonly float[] KernelSquared = Array.ConvertAll(Kernel, g => g * g);
 
     private readonly ResidualCells _cells;
-    private readonly ChanceScale _upward;
-    private readonly ChanceScale _downward;
+    private readonly ChanceScale _chance;
 
     private readonly FilteredResiduals? _finer;
 
@@ -33,8 +32,7 @@ internal sealed class FilteredResiduals
         for (var i = 0; i < curvature.Length; i++)
             SignalToNoise[i] = curvature[i] > 0 ? SignalToNoise[i] / MathF.Sqrt(curvature[i]) : 0;
         // The spectrum turned upside down shows what chance, bad sky and a wavy continuum do to the side that is tested.
-        _upward = ChanceScale.Measure(SignalToNoise, -1);
-        _downward = ChanceScale.Measure(SignalToNoise, 1);
+        _chance = new(SignalToNoise);
     }
 
     public float[] SignalToNoise { get; }
@@ -57,7 +55,7 @@ internal sealed class FilteredResiduals
     /// which tell better where along the spectrum it does.
     /// </summary>
     public double Scale(int cell, bool emission) =>
-        Math.Max((emission ? _upward : _downward).At(cell), _finer?.Scale(2 * cell, emission) ?? 1);
+        Math.Max(_chance.At(cell, emission), _finer?.Scale(2 * cell, emission) ?? 1);
 
     private static float[] Convolve(float[] values, float[] kernel)
     {

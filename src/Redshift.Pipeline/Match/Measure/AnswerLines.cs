@@ -72,7 +72,7 @@ internal sealed class AnswerLines
             other / _match.Excess, _match.Decision.Candidates[0].LnEvidence - counted, cautions);
     }
 
-    private int Rank(LineTarget target) => LineSelection.Rank(target.Line, _measurer.IsEmission(target.Centre), SpectralType);
+    private int Rank(LineTarget target) => LineSelection.Rank(target.Line, _measurer.IsEmission(target.Centre), _answer);
 
     private List<MeasuredLine> Strongest(List<MeasuredLine> lines) => !IsStar || lines.Count <= MostStellarLines ? lines
         : [.. lines.OrderByDescending(l => Math.Abs(l.Predicted?.EquivalentWidth ?? 0)).Take(MostStellarLines).OrderBy(l => l.Target.Centre)];

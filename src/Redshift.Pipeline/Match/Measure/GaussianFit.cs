@@ -14,6 +14,10 @@ internal static class GaussianFit
 
     private const double MostShift = 2.5;
     private const int MostSteps = 20;
+
+    /// <summary>Steps shorter than this share of the width end the fit: the next one would be its square.</summary>
+    private const double Settled = 1e-3;
+
     private const int MostUnknowns = 5 + MostNeighbours;
 
     /// <summary>Neighbours beyond this number are left out.</summary>
@@ -30,7 +34,16 @@ internal static class GaussianFit
     /// <param name="shape">What is expected.</param>
     /// <param name="neighbours">Lines to fit with it, at most <see cref="MostNeighbours"/>.</param>
     /// <returns>The line, or null where too few pixels are usable.</returns>
-    public static FittedLine? Fit(NormalizedSpectrum spectrum, ReadOnlySpan<float> flux, LineShape shape, ReadOnlySpan<Neighbour> neighbours)
+    public static FittedLine? Fit(NormalizedSpectrum spectrum, ReadOnlySpan<float> flux, LineShape shape, ReadOnlySpan<Neighbour> neighbours) =>
+        Fit(spectrum, flux, shape, neighbours, MostSteps);
+
+    /// <summary>Fits the heights alone, centre and width as expected: a quick look.</summary>
+    /// <returns>The line, or null where too few pixels are usable.</returns>
+    public static FittedLine? FitHeight(NormalizedSpectrum spectrum, ReadOnlySpan<float> flux, LineShape shape, ReadOnlySpan<Neighbour> neighbours) =>
+        Fit(spectrum, flux, shape, neighbours, 1);
+
+    private static FittedLine? Fit(
+        NormalizedSpectrum spectrum, ReadOnlySpan<float> flux, LineShape shape, ReadOnlySpan<Neighbour> neighbours, int steps)
     {
         var (from, to) = Window(spectrum, shape);
         var n = 5 + neighbours.Length;
@@ -39,7 +52,7 @@ internal static class GaussianFit
         Span<double> matrix = stackalloc double[MostUnknowns * MostUnknowns];
         matrix = matrix[..(n * n)];
         Span<double> solution = stackalloc double[n];
-        for (var step = 0; step < MostSteps; step++)
+        for (var step = 0; step < steps; step++)
         {
             Accumulate(spectrum, flux, from, to, state, shape, neighbours, matrix, solution);
             if (!SymmetricInverse.Invert(matrix, n)) return null;
@@ -47,7 +60,7 @@ internal static class GaussianFit
             if (state.Move(solution, shape)) break;
         }
 
-        return double.IsFinite(state.Centre + state.LnSigma) ? Describe(spectrum, flux, from, to, state, shape, neighbours, matrix) : null;
+        return double.IsFinite(state.Centre + state.LnSigma) ? Describe(spectrum, flux, from, to, state, shape, neighbours, matrix, widthIsFree: steps > 1) : null;
     }
 
     private static (int From, int To) Window(NormalizedSpectrum spectrum, LineShape shape)
@@ -151,7 +164,7 @@ internal static class GaussianFit
 
     private static FittedLine Describe(
         NormalizedSpectrum spectrum, ReadOnlySpan<float> flux, int from, int to, State state, LineShape shape,
-        ReadOnlySpan<Neighbour> neighbours, ReadOnlySpan<double> inverse)
+        ReadOnlySpan<Neighbour> neighbours, ReadOnlySpan<double> inverse, bool widthIsFree)
     {
         var n = 5 + neighbours.Length;
         var excess = Excess(spectrum, flux, from, to, state, shape, neighbours, n);
@@ -159,7 +172,7 @@ internal static class GaussianFit
         var continuum = state.Level + state.Slope * place;
         // ∫ exp(−(x−c)²/2σ²) eˣ dx, for dλ = eˣ dx.
         var area = RootTwoPi * sigma * Math.Exp(state.Centre + 0.5 * sigma * sigma);
-        Span<double> ofFlux = [0, 0, area, 0, area * state.Amplitude];
+        Span<double> ofFlux = [0, 0, area, 0, widthIsFree ? area * state.Amplitude : 0];
         Span<double> ofContinuum = [1, place, 0, 0, 0];
         var line = area * state.Amplitude;
         Span<double> ofWidth = stackalloc double[5];
@@ -234,7 +247,7 @@ internal static class GaussianFit
             double centre = Centre, lnSigma = LnSigma;
             Centre = Math.Clamp(Centre + Sigma * Math.Clamp(solution[3], -0.5, 0.5), shape.Centre - MostShift * shape.CentreSpread, shape.Centre + MostShift * shape.CentreSpread);
             LnSigma = Math.Max(LnSigma + Math.Clamp(solution[4], -0.35, 0.35), Math.Log(shape.LeastSigma));
-            return Math.Abs(Centre - centre) < 1e-4 * Sigma && Math.Abs(LnSigma - lnSigma) < 1e-4;
+            return Math.Abs(Centre - centre) < Settled * Sigma && Math.Abs(LnSigma - lnSigma) < Settled;
         }
     }
 }

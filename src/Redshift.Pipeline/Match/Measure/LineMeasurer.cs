@@ -17,6 +17,12 @@ internal sealed class LineMeasurer(NormalizedObservation observation, NativeMode
     /// <summary>Signal to noise from which the model's other lines are fitted along.</summary>
     private const double NeighbourSignal = 2;
 
+    /// <summary>Signal to noise in the model from which a line is fitted whatever the data show.</summary>
+    private const double Foreseen = 1;
+
+    /// <summary>Signal to noise in a quick look from which an unforeseen line is fitted.</summary>
+    private const double Noticed = 2;
+
     /// <summary>Signal to noise of a line that is clearly there.</summary>
     private const double Clear = 4;
 
@@ -26,8 +32,8 @@ internal sealed class LineMeasurer(NormalizedObservation observation, NativeMode
     /// <param name="targets">Lines by rising centre, none of them blended with another.</param>
     public List<MeasuredLine> Measure(IReadOnlyList<LineTarget> targets)
     {
-        var alone = targets.Select(Predict).OfType<Prediction>().ToList();
-        return alone.ConvertAll(p => Measure(p, alone));
+        var predicted = targets.Select(t => Predict(t, targets)).OfType<Prediction>().ToList();
+        return predicted.ConvertAll(p => Measure(p, predicted));
     }
 
     /// <summary>σ of the line spread at a place, or null outside all spectra.</summary>
@@ -49,19 +55,31 @@ internal sealed class LineMeasurer(NormalizedObservation observation, NativeMode
     }
 
     /// <summary>A line that the model shows wide and the data do not show so may be narrow: emission on top of absorption.</summary>
-    private MeasuredLine Measure(Prediction prediction, List<Prediction> all)
+    private MeasuredLine Measure(Prediction wide, List<Prediction> all)
     {
-        var wide = Measure(prediction, Neighbours(prediction.Shape, all));
-        if (wide.Data is null || Math.Abs(wide.Data.Significance) > Clear || prediction.Own <= prediction.Target.Sigma) return wide;
-        var narrow = Predict(prediction.Target, prediction.Spectrum, prediction.Instrument, prediction.Target.Sigma);
+        var neighbours = Neighbours(wide.Shape, all);
+        var narrow = wide with { Own = wide.Target.Sigma, Shape = Shape(wide.Target, wide.Target.Sigma, wide.Instrument) };
+        if (wide.Signal < Foreseen && Look(wide, neighbours) < Noticed && (wide.IsNarrow || Look(narrow, neighbours) < Noticed)) return Glance(wide, neighbours);
+        var measured = Measure(wide, neighbours);
+        if (measured.Data is null || Math.Abs(measured.Data.Significance) > Clear || wide.IsNarrow) return measured;
         var other = Measure(narrow, Neighbours(narrow.Shape, all));
-        return other.Data?.Significance > Clear ? other : wide;
+        return other.Data?.Significance > Clear ? other : measured;
+    }
+
+    /// <summary>Signal to noise that a quick look finds in the data.</summary>
+    private double Look(Prediction prediction, Neighbour[] neighbours) => Math.Abs(Glance(prediction, neighbours).Data?.Significance ?? 0);
+
+    private MeasuredLine Glance(Prediction prediction, Neighbour[] neighbours)
+    {
+        var spectrum = observation.Spectra[prediction.Spectrum];
+        var data = GaussianFit.FitHeight(spectrum, spectrum.Flux, prediction.Shape, neighbours);
+        return new(prediction.Target, prediction.Spectrum, prediction.Instrument, prediction.Line, data);
     }
 
     private MeasuredLine Measure(Prediction prediction, Neighbour[] neighbours)
     {
         var spectrum = observation.Spectra[prediction.Spectrum];
-        var model = neighbours.Length == 0 ? prediction.Line : GaussianFit.Fit(spectrum, native.ModelOf(prediction.Spectrum), prediction.Shape, neighbours);
+        var model = GaussianFit.Fit(spectrum, native.ModelOf(prediction.Spectrum), prediction.Shape, neighbours);
         var data = GaussianFit.Fit(spectrum, spectrum.Flux, prediction.Shape, neighbours);
         return new(prediction.Target, prediction.Spectrum, prediction.Instrument, model, data);
     }
@@ -80,28 +98,40 @@ internal sealed class LineMeasurer(NormalizedObservation observation, NativeMode
     private static bool IsTied(LineShape a, LineShape b) =>
         Math.Abs(a.Centre - b.Centre) < TiedFwhm * FwhmPerSigma * Math.Min(a.Sigma, b.Sigma) && Math.Max(a.Sigma, b.Sigma) < 1.3 * Math.Min(a.Sigma, b.Sigma);
 
-    private Prediction? Predict(LineTarget target)
+    /// <summary>A quick look at the model, at several widths where the line has any.</summary>
+    private Prediction? Predict(LineTarget target, IReadOnlyList<LineTarget> targets)
     {
         if (Place(target.Centre) is not var (s, pixel)) return null;
-        var spectrum = observation.Spectra[s];
-        double instrument = spectrum.SigmaLn[pixel];
-        var best = Predict(target, s, instrument, target.Sigma);
+        double instrument = observation.Spectra[s].SigmaLn[pixel];
+        var best = Predict(target, targets, s, instrument, target.Sigma);
         if (target.WidestSigma <= 0 || best.Line is null) return best;
         for (var own = Math.Max(target.Sigma, instrument) * WidthStep; own < target.WidestSigma; own *= WidthStep)
         {
-            var wider = Predict(target, s, instrument, own);
+            var wider = Predict(target, targets, s, instrument, own);
             if (wider.Signal > best.Signal) best = wider;
         }
 
         return best;
     }
 
-    private Prediction Predict(LineTarget target, int spectrum, double instrument, double own)
+    private Prediction Predict(LineTarget target, IReadOnlyList<LineTarget> targets, int spectrum, double instrument, double own)
+    {
+        var shape = Shape(target, own, instrument);
+        var reach = GaussianFit.Reach(shape);
+        Neighbour[] neighbours =
+        [
+            .. targets.Where(t => t != target && Math.Abs(t.Centre - target.Centre) < reach)
+                .OrderBy(t => Math.Abs(t.Centre - target.Centre)).Take(GaussianFit.MostNeighbours)
+                .Select(t => new Neighbour(t.Centre, Math.Sqrt(t.Sigma * t.Sigma + instrument * instrument), false)),
+        ];
+        return new(target, spectrum, instrument, own, shape, GaussianFit.FitHeight(observation.Spectra[spectrum], native.ModelOf(spectrum), shape, neighbours));
+    }
+
+    private static LineShape Shape(LineTarget target, double own, double instrument)
     {
         var sigma = Math.Sqrt(own * own + instrument * instrument);
         var shift = Math.Sqrt(target.ShiftSpread * target.ShiftSpread + 0.16 * sigma * sigma);
-        var shape = new LineShape(target.Centre, sigma, shift, NarrowestShare * instrument);
-        return new(target, spectrum, instrument, own, shape, GaussianFit.Fit(observation.Spectra[spectrum], native.ModelOf(spectrum), shape, []));
+        return new(target.Centre, sigma, shift, NarrowestShare * instrument);
     }
 
     /// <summary>The spectrum and pixel that say most about a wavelength.</summary>
@@ -127,6 +157,8 @@ internal sealed class LineMeasurer(NormalizedObservation observation, NativeMode
     private sealed record Prediction(LineTarget Target, int Spectrum, double Instrument, double Own, LineShape Shape, FittedLine? Line)
     {
         public double Signal => Line is null ? 0 : Math.Abs(Line.Significance);
+
+        public bool IsNarrow => Own <= Target.Sigma;
 
         public bool Strong => Signal > NeighbourSignal;
     }

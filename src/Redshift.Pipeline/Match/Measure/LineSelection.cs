@@ -29,9 +29,10 @@ internal static class LineSelection
     /// <summary>Which of two lines at the same place gives the blend its name: the one with the greater rank.</summary>
     /// <param name="line">The line.</param>
     /// <param name="emission">The side of the continuum on which the blend is seen.</param>
-    /// <param name="spectralType">Type of a star, else empty.</param>
-    public static int Rank(SpectralLine line, bool emission, string spectralType)
+    /// <param name="answer">The answer.</param>
+    public static int Rank(SpectralLine line, bool emission, Refined answer)
     {
+        var spectralType = answer.Model.Template?.SpectralType ?? "";
         var hydrogenRules = spectralType.Length > 0 && "OBAD".Contains(spectralType[0], StringComparison.Ordinal);
         var family = line.Family switch
         {
@@ -40,7 +41,8 @@ internal static class LineSelection
             LineFamily.Helium => hydrogenRules ? 4 : 0,
             _ => 0,
         };
-        return family + (line.Kind == (emission ? LineKind.Emission : LineKind.Absorption) ? 2 : 0);
+        var side = line.Kind == (emission ? LineKind.Emission : LineKind.Absorption) ? 2 : 0;
+        return 2 * (family + side) + (PrincipalLines.Of(answer.Model.Kind).Contains(line.Name) ? 1 : 0);
     }
 
     private static List<LineTarget> Stellar(Refined answer)
@@ -101,7 +103,8 @@ internal static class LineSelection
         {
             'O' or 'B' => ion is not "I",
             'A' => ion is "I" or "II" && !name.StartsWith("Li", StringComparison.Ordinal),
-            _ => ion is "I" || (ion is "II" && name.Split(' ')[0] is "Ca" or "Sr" or "Fe"),
+            'F' => ion is "I" || (ion is "II" && name.Split(' ')[0] is "Ca" or "Sr" or "Fe"),
+            _ => ion is "I" || (ion is "II" && name.Split(' ')[0] is "Ca" or "Sr"),
         };
     }
 
@@ -115,7 +118,7 @@ internal static class LineSelection
         });
 
     private static List<LineTarget> Active(Refined answer) =>
-        Targets(answer, LineUses.Quasar, l => l.Kind != LineKind.Absorption && SuitsGas(l, 0), l => l.Name.StartsWith('[')
+        Targets(answer, LineUses.Quasar, l => l.Kind != LineKind.Absorption && SuitsGas(l, 0) && l.Name != "[C III] 1907", l => l.Name.StartsWith('[')
             ? new(answer.Model.NarrowKmS, 0, 150, LineKind.Emission)
             : new(answer.Model.BroadKmS, 0, 600, LineKind.Emission));
 
