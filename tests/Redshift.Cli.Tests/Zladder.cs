@@ -23,7 +23,9 @@ internal static class Zladder
     /// <summary>Starts the command.</summary>
     public static Process Start(params string[] arguments)
     {
-        var start = new ProcessStartInfo("dotnet", [Path.Combine(AppContext.BaseDirectory, "zladder.dll"), .. arguments])
+        // Where tests run in the background, interrupts are ignored by inheritance; env gives the command the usual behaviour back.
+        var start = new ProcessStartInfo(
+            "env", ["--default-signal=INT", "dotnet", Path.Combine(AppContext.BaseDirectory, "zladder.dll"), .. arguments])
         {
             RedirectStandardInput = true,
             RedirectStandardOutput = true,
