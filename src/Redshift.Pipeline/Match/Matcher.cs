@@ -10,14 +10,15 @@ namespace Redshift.Pipeline.Match;
 internal sealed class Matcher(MatchSettings settings)
 {
     /// <summary>Where models turn out to be worse than this share, the search is repeated knowing it.</summary>
-    private const double SearchAgain = 0.06;
+    private const double SearchAgain = 0.1;
 
     /// <summary>A peak so far below the best, in units of the best's own ln evidence and in ln, is not climbed.</summary>
     private const double HopelessShare = 0.35;
     private const double Hopeless = 30;
 
-    /// <summary>Peaks of each kind that are climbed however far below.</summary>
+    /// <summary>Peaks of each kind that are climbed however far below, and those that are fitted in full after a first look.</summary>
     private const int AlwaysClimbed = 2;
+    private const int FittedInFull = 6;
 
     /// <summary>Matches an observation with at least one spectrum.</summary>
     /// <returns>The decision with the fit it rests on, or null where nothing can be matched.</returns>
@@ -48,12 +49,17 @@ internal sealed class Matcher(MatchSettings settings)
     {
         var pixels = FitPixels.Build(runs, ModelError.Uniform, Cells.Step);
         var fit = new ModelFit(pixels);
-        var exact = peaks.ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) });
+        var exact = FirstLook(fit, peaks).ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) });
         var best = exact.MaxBy(p => p.LnEvidence);
         var climbed = Refinement.Climb(fit, best.Model, best.LnShift, 0.5 * Cells.Step);
         fit.LnEvidence(climbed.Model, climbed.LnShift);
         return (ModelError.Measure(pixels, runs, fit.Curves().Model), Leaders(exact));
     }
+
+    /// <summary>The best peaks of each kind by fits without partners.</summary>
+    private static List<Peak> FirstLook(ModelFit fit, List<Peak> peaks) =>
+        [.. peaks.ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift, mixed: false) })
+            .GroupBy(p => p.Model.Kind).SelectMany(g => g.OrderByDescending(p => p.LnEvidence).Take(FittedInFull))];
 
     private static List<Peak> Leaders(List<Peak> peaks)
     {
@@ -64,7 +70,7 @@ internal sealed class Matcher(MatchSettings settings)
     }
 
     private static List<Refined> Climb(ModelFit fit, List<Peak> peaks) =>
-        Leaders(peaks.ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) }))
+        Leaders(FirstLook(fit, peaks).ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) }))
             .ConvertAll(p => Refinement.Climb(fit, p.Model, p.LnShift, 0.5 * Cells.Step));
 }
 

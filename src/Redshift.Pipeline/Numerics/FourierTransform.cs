@@ -1,4 +1,5 @@
 using System.Numerics;
+using System.Runtime.Intrinsics;
 
 namespace Redshift.Pipeline.Numerics;
 
@@ -9,6 +10,9 @@ namespace Redshift.Pipeline.Numerics;
 /// <remarks>Element-wise arithmetic only, so that the bits do not depend on the vector width. Not thread safe: holds scratch space.</remarks>
 internal sealed class FourierTransform
 {
+    [ThreadStatic]
+    private static Dictionary<int, FourierTransform>? PerThread;
+
     private readonly float[][] _cos;
     private readonly float[][] _sin;
     private readonly float[] _re;
@@ -24,6 +28,14 @@ internal sealed class FourierTransform
         for (var stage = 0; stage < stages; stage++) FillTwiddles(stage, length >> (stage + 1));
         _re = new float[length];
         _im = new float[length];
+    }
+
+    /// <summary>A transform of this length for the calling thread, kept for the next call.</summary>
+    public static FourierTransform OfLength(int length)
+    {
+        PerThread ??= [];
+        if (!PerThread.TryGetValue(length, out var transform)) PerThread[length] = transform = new FourierTransform(length);
+        return transform;
     }
 
     public int Length { get; }
@@ -66,6 +78,12 @@ internal sealed class FourierTransform
 
     private static void Pass(Span<float> xr, Span<float> xi, Span<float> yr, Span<float> yi, int half, int stride, float[] cos, float[] sin)
     {
+        if (stride == 1 && half >= 8)
+        {
+            FirstPass(xr, xi, yr, yi, half, cos, sin);
+            return;
+        }
+
         for (var p = 0; p < half; p++)
         {
             int a = stride * p, b = stride * (p + half), c = stride * 2 * p, d = c + stride;
@@ -75,18 +93,40 @@ internal sealed class FourierTransform
         }
     }
 
+    /// <summary>The first pass, whose stride of one leaves its butterflies in neighbouring elements: eight at a time, written interleaved.</summary>
+    private static void FirstPass(Span<float> xr, Span<float> xi, Span<float> yr, Span<float> yi, int half, float[] cos, float[] sin)
+    {
+        Span<float> sums = stackalloc float[32];
+        for (var p = 0; p < half; p += 8)
+        {
+            Vector256<float> ar = Vector256.Create(xr[p..]), ai = Vector256.Create(xi[p..]);
+            Vector256<float> br = Vector256.Create(xr[(p + half)..]), bi = Vector256.Create(xi[(p + half)..]);
+            Vector256<float> c = Vector256.Create(cos, p), s = Vector256.Create(sin, p), dr = ar - br, di = ai - bi;
+            (ar + br).CopyTo(sums);
+            (ai + bi).CopyTo(sums[8..]);
+            (dr * c - di * s).CopyTo(sums[16..]);
+            (dr * s + di * c).CopyTo(sums[24..]);
+            for (var q = 0; q < 8; q++)
+            {
+                yr[2 * (p + q)] = sums[q];
+                yi[2 * (p + q)] = sums[8 + q];
+                yr[2 * (p + q) + 1] = sums[16 + q];
+                yi[2 * (p + q) + 1] = sums[24 + q];
+            }
+        }
+    }
+
     private static void Butterflies(
         Span<float> ar, Span<float> ai, Span<float> br, Span<float> bi,
         Span<float> sr, Span<float> si, Span<float> tr, Span<float> ti, float c, float s)
     {
         var q = 0;
-        var width = Vector<float>.Count;
-        for (Vector<float> vc = new(c), vs = new(s); q <= ar.Length - width; q += width)
+        for (Vector256<float> vc = Vector256.Create(c), vs = Vector256.Create(s); q <= ar.Length - 8; q += 8)
         {
-            Vector<float> pr = new(ar[q..]), pi = new(ai[q..]), qr = new(br[q..]), qi = new(bi[q..]);
+            Vector256<float> pr = Vector256.Create(ar[q..]), pi = Vector256.Create(ai[q..]), qr = Vector256.Create(br[q..]), qi = Vector256.Create(bi[q..]);
             (pr + qr).CopyTo(sr[q..]);
             (pi + qi).CopyTo(si[q..]);
-            Vector<float> dr = pr - qr, di = pi - qi;
+            Vector256<float> dr = pr - qr, di = pi - qi;
             (dr * vc - di * vs).CopyTo(tr[q..]);
             (dr * vs + di * vc).CopyTo(ti[q..]);
         }

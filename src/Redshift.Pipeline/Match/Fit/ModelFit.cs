@@ -53,7 +53,8 @@ internal sealed class ModelFit
     /// <summary>ln evidence of the model at a redshift over that of the smooth continuum alone.</summary>
     /// <param name="model">The model.</param>
     /// <param name="lnShift">ln(1+z).</param>
-    public double LnEvidence(FitModel model, double lnShift)
+    /// <param name="mixed">Whether partners may be mixed in; a first look does without.</param>
+    public double LnEvidence(FitModel model, double lnShift, bool mixed = true)
     {
         if (lnShift > model.GreatestLnShift) return double.NegativeInfinity;
         Render(model, lnShift);
@@ -61,7 +62,7 @@ internal sealed class ModelFit
         var evidence = (model.Forest ? ScatterForest(lnShift) : 0) + FitSpline() - _null;
         _columns.Clear();
         _chosen.Clear();
-        AddMixtures(model, lnShift);
+        if (mixed) AddMixtures(model, lnShift);
         foreach (var group in model.Groups) AddColumn(model, group, lnShift);
         Project();
         return evidence + TakeMixtures() + SelectGroups() + model.LnPrior;
@@ -279,8 +280,7 @@ internal sealed class ModelFit
         var scale = line.Share / line.RestA * InverseRootTwoPi / total;
         for (var i = start; i < end; i++)
         {
-            var u = (ln[i] - centre) / total;
-            values[i - start] = (float)(scale * Math.Exp(-0.5 * u * u));
+            values[i - start] = (float)scale * GaussianTable.At((ln[i] - centre) / total);
             if (!double.IsNaN(forestShift)) values[i - start] *= (float)Forest.Transmission(ln[i], forestShift, instrument);
         }
 

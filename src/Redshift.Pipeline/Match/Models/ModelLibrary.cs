@@ -70,7 +70,7 @@ internal sealed class ModelLibrary
     /// <summary>Populations mix with an old, a middle and a young one; young stars behind gas with thicker and thinner gas.</summary>
     private static List<FitModel> WithPartners(List<FitModel> galaxies)
     {
-        string[] plain = ["12 Gyr", "1.5 Gyr", "0.03 Gyr"], gas = ["0.005 Gyr behind neutral gas", "0.03 Gyr behind thin gas", "0.6 Gyr behind gas"];
+        string[] plain = ["old", "1.5 Gyr", "0.03 Gyr"], gas = ["0.005 Gyr behind thin gas", "0.03 Gyr behind neutral gas", "0.6 Gyr behind gas"];
         return galaxies.ConvertAll(g => g with
         {
             Partners = [.. galaxies.Where(p => (g.Name.Contains("gas", StringComparison.Ordinal) ? gas : plain).Contains(p.Name) && p != g).Select(p => p.Template!)],
@@ -94,21 +94,17 @@ internal sealed class ModelLibrary
     private static IEnumerable<(Template Template, double GreatestZ)> GalaxyTemplates(Dictionary<string, float[]> mixes)
     {
         foreach (var mix in StellarMix.Ages) yield return (new Template(mix.Name, ObjectKind.Galaxy, mixes[mix.Name]), mix.GreatestZ);
-        yield return (Blend("old with young", mixes["12 Gyr"], mixes["0.03 Gyr"], 0.5), 1.5);
-        yield return (Blend("intermediate with young", mixes["1.5 Gyr"], mixes["0.005 Gyr"], 0.6), 4);
-        foreach (var (name, strength, column) in new[] { ("thin gas", 0.5, 0.0), ("gas", 1.0, 0.0), ("neutral gas", 1.3, 3.0) })
-        {
-            yield return (WithGas($"0.005 Gyr behind {name}", mixes["0.005 Gyr"], strength, column), 9);
-            yield return (WithGas($"0.03 Gyr behind {name}", mixes["0.03 Gyr"], strength, column), 9);
-        }
-
+        yield return (Blend("old with young", mixes["old"], mixes["0.03 Gyr"], 0.5), 1.5);
+        yield return (WithGas("0.005 Gyr behind thin gas", mixes["0.005 Gyr"], 0.5, 0), 9);
+        yield return (WithGas("0.005 Gyr behind gas", mixes["0.005 Gyr"], 1, 0), 9);
+        yield return (WithGas("0.03 Gyr behind neutral gas", mixes["0.03 Gyr"], 1.3, 3), 9);
         yield return (WithGas("0.6 Gyr behind gas", mixes["0.6 Gyr"], 1, 0), 4);
     }
 
     private static IEnumerable<Template?> QuasarTemplates(Dictionary<string, float[]> mixes)
     {
         yield return null;
-        yield return Blend("with its galaxy", mixes["5 Gyr"], FlatFlux, 0.5);
+        yield return Blend("with its galaxy", mixes["old"], FlatFlux, 0.5);
         yield return BroadAbsorption.Template;
     }
 

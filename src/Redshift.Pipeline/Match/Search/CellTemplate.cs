@@ -19,7 +19,7 @@ internal sealed class CellTemplate
 
     private static readonly ConcurrentDictionary<(Template, int, double), CellTemplate> Cache = new();
 
-    private readonly ConcurrentDictionary<int, Transforms> _transforms = new();
+    private readonly ConcurrentDictionary<(int Used, int Length), Transforms> _transforms = new();
 
     private CellTemplate(Template template, int level, double forestShift)
     {
@@ -28,6 +28,9 @@ internal sealed class CellTemplate
         var smooth = Smooth(Relative);
         for (var j = 0; j < Relative.Length; j++) Relative[j] = Math.Clamp(Relative[j] / Math.Max(smooth[j], 1e-6f) - 1, -1, Tallest);
     }
+
+    /// <summary>Cells of every template.</summary>
+    public static int Length => (int)((TemplateGrid.Count - 1) * TemplateGrid.Step / Cells.Step);
 
     /// <summary>Flux over smooth flux, minus one; element 0 is cell 0 of the absolute grid.</summary>
     public float[] Relative { get; }
@@ -39,14 +42,13 @@ internal sealed class CellTemplate
     public static CellTemplate For(Template template, double sigmaLn, double forestShift = 0) =>
         Cache.GetOrAdd((template, LineSpreadLevels.Nearest(sigmaLn), forestShift), key => new CellTemplate(key.Item1, key.Item2, key.Item3));
 
-    /// <summary>Transforms of the template and its square, of a length.</summary>
-    public Transforms Transform(int length) => _transforms.GetOrAdd(length, n => new Transforms(Relative, n));
+    /// <summary>Transforms of the template's first cells and their squares, of a length.</summary>
+    public Transforms Transform(int used, int length) => _transforms.GetOrAdd((used, length), key => new Transforms(Relative.AsSpan(0, key.Used), key.Length));
 
     private static float[] Sample(float[] fine)
     {
-        var count = (int)((TemplateGrid.Count - 1) * TemplateGrid.Step / Cells.Step);
-        var cells = new float[count];
-        for (var j = 0; j < count; j++)
+        var cells = new float[Length];
+        for (var j = 0; j < Length; j++)
         {
             var x = (j + 0.5) * Cells.Step / TemplateGrid.Step;
             var i = Math.Min((int)x, fine.Length - 2);
@@ -75,11 +77,11 @@ internal sealed class CellTemplate
     /// <summary>Spectra of t and t² with t cut to the length.</summary>
     internal sealed class Transforms
     {
-        public Transforms(float[] relative, int length)
+        public Transforms(ReadOnlySpan<float> relative, int length)
         {
             (Re, Im, SquareRe, SquareIm) = (new float[length], new float[length], new float[length], new float[length]);
             var transform = new FourierTransform(length);
-            for (var j = 0; j < Math.Min(length, relative.Length); j++)
+            for (var j = 0; j < relative.Length; j++)
             {
                 Re[j] = relative[j];
                 SquareRe[j] = relative[j] * relative[j];

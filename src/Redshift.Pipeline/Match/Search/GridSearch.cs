@@ -94,7 +94,8 @@ internal sealed class GridSearch
         return best;
     }
 
-    private static int TemplateLength => (int)((TemplateGrid.Count - 1) * TemplateGrid.Step / Cells.Step);
+    /// <summary>Template cells that any shift of the grid brings onto the data.</summary>
+    private int TemplateLength => Math.Clamp(_cells.First + _cells.Count - Cells.Margin - _firstShift, 1, CellTemplate.Length);
 
     private List<Peak> Quasars()
     {
