@@ -47,8 +47,8 @@ public sealed class ObservationPipeline(PipelineSettings settings)
     private static ObservationResult Answer(ObservationResult result, NormalizedObservation normalized, MatchResult match)
     {
         var decision = match.Decision;
-        var confidence = Calibration.Confidence(decision);
-        var verdict = Calibration.Verdict(confidence, decision.LnOddsFeatures);
+        var confidence = Calibration.Confidence(decision, match);
+        var verdict = Calibration.Verdict(confidence, decision.LnOddsFeatures, normalized.HasContinuum);
         result = result with { Verdict = verdict, Confidence = confidence, LnOdds = decision.LnOdds, Candidates = decision.Candidates };
         if (verdict == Verdict.Nothing) return result;
         var fit = decision.Answer.Fit;
@@ -60,7 +60,7 @@ public sealed class ObservationPipeline(PipelineSettings settings)
             KindConfidence = confidence * decision.KindShare,
             Z = z,
             ZFile = z,
-            ZErr = RedshiftError.Of(fit) * (1 + z),
+            ZErr = RedshiftError.Of(fit, normalized.Resolution) * (1 + z),
             SpectralType = fit.Model.Template?.SpectralType ?? "",
             Next = decision.Next,
             NextConfidence = decision.Next is { } next ? (1 - confidence) * next.Probability / Math.Max(1e-12, decision.Candidates.Sum(c => c.Probability) - decision.Candidates[0].Probability) : null,

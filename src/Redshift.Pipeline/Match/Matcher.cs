@@ -37,7 +37,8 @@ internal sealed class Matcher(MatchSettings settings)
         var excess = ResidualExcess.Measure(pixels, fit.Curves().Model);
         var hypotheses = refined.Select(r => r.Soften(excess))
             .Select(r => new Hypothesis(r, r.LnVolume + RedshiftPrior.LnDensity(r.Model.Kind, r.LnShift, settings)))
-            .OrderByDescending(h => h.LnWeight).ToList();
+            .Where(h => double.IsFinite(h.LnWeight)).OrderByDescending(h => h.LnWeight).ToList();
+        if (hypotheses.Count == 0) return null;
         return new(PosteriorSum.Decide(hypotheses, observation.Resolution), hypotheses, error, excess);
     }
 

@@ -24,4 +24,10 @@ internal sealed class NormalizedObservation
 
     /// <summary>Noise over stated noise, pixel-weighted over the spectra.</summary>
     public required double NoiseScale { get; init; }
+
+    /// <summary>Whether light of an object is seen at all: the median pixel stands above zero beyond doubt.</summary>
+    public bool HasContinuum => SnrPixel * Math.Sqrt(Spectra.Sum(s => s.Count)) > ContinuumSigma;
+
+    /// <summary>Sky subtraction leaves more than noise behind, hence well above the usual five.</summary>
+    private const double ContinuumSigma = 12;
 }

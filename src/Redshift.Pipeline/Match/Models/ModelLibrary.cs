@@ -18,8 +18,16 @@ internal sealed class ModelLibrary
         var mixes = StellarMix.Ages.ToDictionary(m => m.Name, m => m.Compute(StarFlux));
         Galaxies = WithEqualShares(WithPartners([.. GalaxyTemplates(mixes).Select(t => Galaxy(t.Template, t.GreatestZ))]));
         Quasars = WithEqualShares(QuasarTemplates(mixes).SelectMany(t => Widths.SelectMany(w => QuasarLines.Winds.Select(v => Quasar(t, w, v)))));
+        Comets =
+        [
+            .. Stars.Where(m => m.Template!.SpectralType.StartsWith("G4V", StringComparison.Ordinal)).Take(1)
+                .Select(m => m with { Kind = ObjectKind.Unknown, Name = "sunlight with cometary bands", Groups = CometBands.All, LnPrior = 0 }),
+        ];
         Nebulae = WithEqualShares([new FitModel { Kind = ObjectKind.Nebula, Name = "ionised gas", Groups = NebulaLines.All, NarrowKmS = 15 }]);
     }
+
+    /// <summary>Reflected sunlight with cometary bands.</summary>
+    public IReadOnlyList<FitModel> Comets { get; }
 
     public static ModelLibrary Instance => Lazy.Value;
 

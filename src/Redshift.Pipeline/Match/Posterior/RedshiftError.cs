@@ -8,22 +8,26 @@ internal static class RedshiftError
 {
     private const double KmSPerLn = 299792.458;
 
+    /// <summary>Wavelength calibration and the shape of the line spread are rarely known better than to this share of its FWHM.</summary>
+    private const double ShareOfResolution = 0.06;
+
     /// <summary>σ of ln(1+z).</summary>
-    public static double Of(Refined fit)
+    /// <param name="fit">The answer.</param>
+    /// <param name="resolution">Resolving power λ/FWHM.</param>
+    public static double Of(Refined fit, double resolution)
     {
-        var floor = Floor(fit.Model.Kind) / KmSPerLn;
-        return Math.Sqrt(fit.Sigma * fit.Sigma + floor * floor);
+        double floor = Floor(fit) / KmSPerLn, calibration = ShareOfResolution / resolution;
+        return Math.Sqrt(fit.Sigma * fit.Sigma + floor * floor + calibration * calibration);
     }
 
     /// <summary>
-    /// Wavelength calibration and template mismatch of stars and galaxies; for quasars the shifts of broad lines against each other
-    /// (Hewett &amp; Wild 2010, MNRAS 405, 2302, find scatters of some hundred km/s).
+    /// Shifts within the object, km/s: broad lines of quasars against each other (Hewett &amp; Wild 2010, MNRAS 405, 2302, find scatters of
+    /// some hundred km/s, and more at the highest redshifts); Lyman alpha and outflowing gas in ultraviolet galaxies (some 200 km/s, common practice).
     /// </summary>
-    private static double Floor(ObjectKind kind) => kind switch
+    private static double Floor(Refined fit) => fit.Model.Kind switch
     {
-        ObjectKind.Star => 5,
-        ObjectKind.Quasar => 250,
-        ObjectKind.Nebula => 8,
-        _ => 15,
+        ObjectKind.Star or ObjectKind.Nebula => 2,
+        ObjectKind.Quasar => fit.LnShift > Math.Log(6) ? 500 : 180,
+        _ => fit.LnShift > Math.Log(2.6) ? 180 : 12,
     };
 }

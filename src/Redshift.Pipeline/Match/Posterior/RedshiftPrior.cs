@@ -6,6 +6,9 @@ namespace Redshift.Pipeline.Match.Posterior;
 /// <summary>What is expected before the spectrum is seen; broad, and not the object mix of any survey.</summary>
 internal static class RedshiftPrior
 {
+    /// <summary>Prior weight of reflected sunlight with cometary bands.</summary>
+    private const double CometShare = 0.02;
+
     /// <summary>ln prior of a galaxy or quasar at the velocities of stars.</summary>
     private const double NearestPenalty = -5000;
 
@@ -18,7 +21,7 @@ internal static class RedshiftPrior
         ObjectKind.Nebula => Math.Log(settings.PriorNebula) + Velocities(lnShift * KmSPerLn, 40, 120),
         ObjectKind.Galaxy => Math.Log(settings.PriorGalaxy) + Flat(lnShift, 1.2) + Distant(lnShift, settings),
         ObjectKind.Quasar => Math.Log(settings.PriorQuasar) + Flat(lnShift, 0.4) + Distant(lnShift, settings),
-        _ => double.NegativeInfinity,
+        _ => Math.Log(CometShare) + Velocities(lnShift * KmSPerLn, 40, 120),
     };
 
     /// <summary>Disc and halo: two normal distributions of equal weight.</summary>

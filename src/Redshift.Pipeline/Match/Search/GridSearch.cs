@@ -38,6 +38,7 @@ internal sealed class GridSearch
         if (Wanted(ObjectKind.Galaxy)) peaks.AddRange(Galaxies());
         if (Wanted(ObjectKind.Quasar)) peaks.AddRange(Quasars());
         if (Wanted(ObjectKind.Nebula)) peaks.AddRange(Nebulae());
+        if (_settings.Expect is null) peaks.AddRange(_library.Comets.Select(m => new Peak(m, 0, 0)));
         return peaks;
     }
 
