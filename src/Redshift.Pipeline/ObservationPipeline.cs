@@ -49,7 +49,7 @@ public sealed class ObservationPipeline(PipelineSettings settings)
         var decision = match.Decision;
         var confidence = Calibration.Confidence(decision, match);
         var verdict = Calibration.Verdict(confidence, decision.LnOddsFeatures, normalized.HasContinuum);
-        result = result with { Verdict = verdict, Confidence = confidence, LnOdds = decision.LnOdds, Candidates = decision.Candidates };
+        result = result with { Verdict = verdict, Confidence = confidence, LnOdds = decision.LnOdds, LnOddsFeatures = decision.LnOddsFeatures, Misfit = match.Misfit, Candidates = decision.Candidates };
         if (verdict == Verdict.Nothing) return result;
         var fit = decision.Answer.Fit;
         var z = Math.Exp(fit.LnShift) - 1;

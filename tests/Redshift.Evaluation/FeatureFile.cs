@@ -11,7 +11,7 @@ internal sealed class FeatureFile : IDisposable
     {
         _writer = new(path) { NewLine = "\n" };
         _writer.WriteLine(
-            "name,row,setup,object_class,truth_kind,truth_z,true_snr,z,z_err,kind,kind_confidence,confidence,ln_odds,snr_pixel,snr_angstrom,noise_scale,resolution,lines_expected,lines_matched,"
+            "name,row,setup,object_class,truth_kind,truth_z,true_snr,z,z_err,kind,kind_confidence,confidence,ln_odds,ln_odds_features,misfit,snr_pixel,snr_angstrom,noise_scale,resolution,lines_expected,lines_matched,"
             + "best_ln_evidence,second_ln_evidence,next_kind,next_z,next_ln_evidence,next_confidence,has_errors,arms,pixels,first_a,last_a,template,cautions,dv_km_s,right,kind_right,milliseconds");
     }
 
@@ -20,7 +20,7 @@ internal sealed class FeatureFile : IDisposable
         var (truth, answer, observation) = (judgement.Truth, judgement.Answer, result.Observation);
         var kindRight = string.Equals(answer.Kind, truth.Kind.ToString(), StringComparison.OrdinalIgnoreCase);
         _writer.WriteLine(FormattableString.Invariant(
-            $"{judgement.Source},{judgement.Row},{truth.Group},{truth.ObjectClass},{truth.Kind},{truth.Z:R},{truth.Snr:0.###},{answer.Z:R},{answer.ZErr:R},{answer.Kind},{result.KindConfidence:R},{answer.Confidence:R},{result.LnOdds:R},")
+            $"{judgement.Source},{judgement.Row},{truth.Group},{truth.ObjectClass},{truth.Kind},{truth.Z:R},{truth.Snr:0.###},{answer.Z:R},{answer.ZErr:R},{answer.Kind},{result.KindConfidence:R},{answer.Confidence:R},{result.LnOdds:R},{result.LnOddsFeatures:R},{result.Misfit:R},")
             + FormattableString.Invariant(
             $"{result.SnrPixel:0.####},{result.SnrAngstrom:0.####},{result.NoiseScale:0.####},{result.Resolution:0.#},{result.LinesExpected},{result.LinesMatched},{Evidence(result, 0):R},{Evidence(result, 1):R},")
             + FormattableString.Invariant(

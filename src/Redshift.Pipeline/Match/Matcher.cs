@@ -2,6 +2,7 @@ using Redshift.Pipeline.Match.Fit;
 using Redshift.Pipeline.Match.Posterior;
 using Redshift.Pipeline.Match.Search;
 using Redshift.Pipeline.Normalize;
+using Redshift.Pipeline.Results;
 using Redshift.Pipeline.Settings;
 
 namespace Redshift.Pipeline.Match;
@@ -20,23 +21,27 @@ internal sealed class Matcher(MatchSettings settings)
     private const int AlwaysClimbed = 2;
     private const int FittedInFull = 6;
 
+    /// <summary>Cells of the exact fits at most.</summary>
+    private const int MostFitCells = 12000;
+
     /// <summary>Matches an observation with at least one spectrum.</summary>
     /// <returns>The decision with the fit it rests on, or null where nothing can be matched.</returns>
     public MatchResult? Match(NormalizedObservation observation)
     {
-        var runs = observation.Spectra.Select(s => PixelRun.Binned(s, Cells.Step)).ToList();
+        var cell = FitCell(observation);
+        var runs = observation.Spectra.Select(s => PixelRun.Binned(s, cell)).ToList();
         var peaks = Search(observation, ModelError.Uniform);
         if (peaks.Count == 0) return null;
-        var (error, leaders) = Learn(peaks, runs);
+        var (error, leaders) = Learn(peaks, runs, cell);
         if (error.Greatest > SearchAgain) leaders.AddRange(Search(observation, error));
         var pixels = FitPixels.Build(runs, error, Cells.Step);
         var fit = new ModelFit(pixels);
-        var refined = Climb(fit, leaders);
+        var refined = Climb(fit, leaders, cell);
         var best = refined.MaxBy(r => r.LnEvidence)!;
         fit.LnEvidence(best.Model, best.LnShift);
         var excess = ResidualExcess.Measure(pixels, fit.Curves().Model);
         var hypotheses = refined.Select(r => r.Soften(excess))
-            .Select(r => new Hypothesis(r, r.LnVolume + RedshiftPrior.LnDensity(r.Model.Kind, r.LnShift, settings)))
+            .Select(r => new Hypothesis(r, r.LnVolume + RedshiftPrior.LnDensity(r.Model.Kind, r.LnShift, observation.Resolution, settings)))
             .Where(h => double.IsFinite(h.LnWeight)).OrderByDescending(h => h.LnWeight).ToList();
         if (hypotheses.Count == 0) return null;
         return new(PosteriorSum.Decide(hypotheses, observation.Resolution), hypotheses, error, excess);
@@ -46,13 +51,13 @@ internal sealed class Matcher(MatchSettings settings)
         new GridSearch(Cells.Build(observation.Spectra, error), settings).Peaks();
 
     /// <summary>Measures the model error on the best model of a first round, and keeps the peaks that are worth a second.</summary>
-    private static (ModelError Error, List<Peak> Leaders) Learn(List<Peak> peaks, List<PixelRun> runs)
+    private static (ModelError Error, List<Peak> Leaders) Learn(List<Peak> peaks, List<PixelRun> runs, double cell)
     {
         var pixels = FitPixels.Build(runs, ModelError.Uniform, Cells.Step);
         var fit = new ModelFit(pixels);
-        var exact = FirstLook(fit, peaks).ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) });
+        var exact = FirstLook(fit, Settle(fit, peaks, cell)).ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) });
         var best = exact.MaxBy(p => p.LnEvidence);
-        var climbed = Refinement.Climb(fit, best.Model, best.LnShift, 0.5 * Cells.Step);
+        var climbed = Refinement.Climb(fit, best.Model, best.LnShift, 0.5 * cell);
         fit.LnEvidence(climbed.Model, climbed.LnShift);
         return (ModelError.Measure(pixels, runs, fit.Curves().Model), Leaders(exact));
     }
@@ -70,9 +75,26 @@ internal sealed class Matcher(MatchSettings settings)
         return peaks.FindAll(p => p.LnEvidence > floor || always.Contains(p));
     }
 
-    private static List<Refined> Climb(ModelFit fit, List<Peak> peaks) =>
-        Leaders(FirstLook(fit, peaks).ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) }))
-            .ConvertAll(p => Refinement.Climb(fit, p.Model, p.LnShift, 0.5 * Cells.Step));
+    private static List<Refined> Climb(ModelFit fit, List<Peak> peaks, double cell) =>
+        Leaders(FirstLook(fit, Settle(fit, peaks, cell)).ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) }))
+            .ConvertAll(p => Refinement.Climb(fit, p.Model, p.LnShift, 0.5 * cell));
+
+    /// <summary>Cells of the exact fits: those of the search, or half a resolution element where that is finer and the pixels stay few.</summary>
+    private static double FitCell(NormalizedObservation observation)
+    {
+        var range = observation.Spectra.Sum(s => s.LnWavelength[^1] - s.LnWavelength[0]);
+        return Math.Min(Cells.Step, Math.Max(0.5 / observation.Resolution, range / MostFitCells));
+    }
+
+    /// <summary>Where lines are narrower than a cell of the search, each peak is looked for around its place in steps that cannot miss it.</summary>
+    private static List<Peak> Settle(ModelFit fit, List<Peak> peaks, double cell)
+    {
+        if (cell > 0.5 * Cells.Step) return peaks;
+        var reach = (int)Math.Ceiling(Cells.Step / cell);
+        return peaks.ConvertAll(p => p.Model.Kind is ObjectKind.Quasar ? p : Enumerable.Range(-reach, 2 * reach + 1)
+            .Select(k => p with { LnShift = p.LnShift + k * cell })
+            .MaxBy(q => fit.LnEvidence(q.Model, q.LnShift, mixed: false)));
+    }
 }
 
 /// <summary>What matching gives.</summary>
@@ -80,7 +102,11 @@ internal sealed class Matcher(MatchSettings settings)
 /// <param name="Hypotheses">All refined peaks by weight.</param>
 /// <param name="Error">How wrong models are, along the spectrum.</param>
 /// <param name="Excess">Factor by which ln likelihoods were softened.</param>
-internal sealed record MatchResult(Decision Decision, IReadOnlyList<Hypothesis> Hypotheses, ModelError Error, double Excess);
+internal sealed record MatchResult(Decision Decision, IReadOnlyList<Hypothesis> Hypotheses, ModelError Error, double Excess)
+{
+    /// <summary>ln of the worst model error over its least value.</summary>
+    public double Misfit => Math.Log(Error.Greatest / ModelError.Least);
+}
 
 /// <summary>A refined peak with its weight in the posterior.</summary>
 /// <param name="Fit">The peak.</param>

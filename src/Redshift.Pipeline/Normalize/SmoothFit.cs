@@ -4,7 +4,7 @@ namespace Redshift.Pipeline.Normalize;
 
 /// <summary>
 /// The smooth part of a spectrum: a rough baseline times cubic B-splines with evenly spaced knots in ln λ and a Gaussian prior on the
-/// second differences of their coefficients (Eilers &amp; Marx 1996, Statist. Sci. 11, 89). With the baseline taken out the coefficients
+/// second differences of their coefficients (third ones where the range is short) (Eilers &amp; Marx 1996, Statist. Sci. 11, 89). With the baseline taken out the coefficients
 /// are all of order one, whatever range of flux the spectrum spans. The same prior serves as nuisance in every model of the match stage.
 /// </summary>
 internal static class SmoothFit
@@ -14,6 +14,9 @@ internal static class SmoothFit
 
     /// <summary>Prior σ of a second difference of neighbouring coefficients.</summary>
     public const double Flexibility = 0.05;
+
+    /// <summary>Splines with no more coefficients (echelle orders, short ranges) may follow a parabola freely, as the blaze of a grating does.</summary>
+    private const int ShortSpline = 6;
 
     private const int Iterations = 5;
 
@@ -44,20 +47,19 @@ internal static class SmoothFit
     /// <param name="count">Number of its coefficients.</param>
     public static void AddPrior(Span<double> matrix, int offset, int count)
     {
-        const int Row = BandedCholesky.Band + 1;
-        const double Strength = 1 / (Flexibility * Flexibility);
-        for (var at = offset + 1; at + 1 < offset + count; at++)
-        {
-            matrix[(at - 1) * Row] += Strength;
-            matrix[at * Row] += 4 * Strength;
-            matrix[(at + 1) * Row] += Strength;
-            matrix[at * Row + 1] -= 2 * Strength;
-            matrix[(at + 1) * Row + 1] -= 2 * Strength;
-            matrix[(at + 1) * Row + 2] += Strength;
-        }
+        ReadOnlySpan<double> difference = count <= ShortSpline ? [-1, 3, -3, 1] : [1, -2, 1];
+        for (var first = offset; first + difference.Length <= offset + count; first++) AddDifference(matrix, first, difference);
 
         // A very wide prior on the values themselves keeps the matrix definite where there are no data.
-        for (var i = 0; i < count; i++) matrix[(offset + i) * Row] += 1e-4;
+        for (var i = 0; i < count; i++) matrix[(offset + i) * (BandedCholesky.Band + 1)] += 1e-4;
+    }
+
+    private static void AddDifference(Span<double> matrix, int first, ReadOnlySpan<double> difference)
+    {
+        const double Strength = 1 / (Flexibility * Flexibility);
+        for (var i = 0; i < difference.Length; i++)
+            for (var j = 0; j <= i; j++)
+                matrix[(first + i) * (BandedCholesky.Band + 1) + (i - j)] += Strength * difference[i] * difference[j];
     }
 
     private static float[] Solve(

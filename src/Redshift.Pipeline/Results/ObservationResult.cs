@@ -35,6 +35,12 @@ public sealed record ObservationResult
     /// <summary>Raw ln odds of the answer against everything else, before calibration.</summary>
     public double LnOdds { get; init; }
 
+    /// <summary>Raw ln odds of the answer's redshift against a featureless spectrum, before calibration.</summary>
+    public double LnOddsFeatures { get; init; }
+
+    /// <summary>How badly the best model fits where it fits worst: ln of the model error over its stated least value.</summary>
+    public double Misfit { get; init; }
+
     /// <summary>Spectral type of the best computed star, for stars.</summary>
     public string SpectralType { get; init; } = "";
 

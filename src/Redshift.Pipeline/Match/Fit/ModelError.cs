@@ -29,6 +29,13 @@ internal sealed class ModelError
     /// <summary>Share of the continuum at a wavelength.</summary>
     public double Share(double lnWavelength)
     {
+        var telluric = TelluricError.Share(lnWavelength);
+        var own = Own(lnWavelength);
+        return telluric > 0 ? Math.Sqrt(own * own + telluric * telluric) : own;
+    }
+
+    private double Own(double lnWavelength)
+    {
         var x = Math.Clamp((lnWavelength - _start) / Block - 0.5, 0, _shares.Length - 1);
         var b = Math.Min((int)x, Math.Max(0, _shares.Length - 2));
         return _shares.Length == 1 ? _shares[0] : _shares[b] + (x - b) * (_shares[b + 1] - _shares[b]);
@@ -51,6 +58,7 @@ internal sealed class ModelError
                 var level = Math.Max(Math.Abs(run.Continuum[i]), run.Baseline[i]);
                 var residual = pixels.Flux[at] - model[at];
                 // The median of χ²₁ is 0.455: what is above that share of the noise is model error.
+                if (TelluricError.Share(run.LnWavelength[i]) > Least) continue;
                 excess[Math.Min(blocks - 1, (int)((run.LnWavelength[i] - start) / Block))].Add((residual * residual - 0.455 / run.Weight[i]) / (0.455 * level * level));
             }
 

@@ -6,6 +6,9 @@ namespace Redshift.Pipeline.Match.Posterior;
 /// <summary>What is expected before the spectrum is seen; broad, and not the object mix of any survey.</summary>
 internal static class RedshiftPrior
 {
+    /// <summary>Resolving power of the surveys of faint objects, at most.</summary>
+    private const double OrdinaryResolution = 4000;
+
     /// <summary>Prior weight of reflected sunlight with cometary bands.</summary>
     private const double CometShare = 0.02;
 
@@ -15,12 +18,12 @@ internal static class RedshiftPrior
     private const double KmSPerLn = 299792.458;
 
     /// <summary>ln of the prior density in ln(1+z) of a kind at a redshift, weight of the kind included.</summary>
-    public static double LnDensity(ObjectKind kind, double lnShift, MatchSettings settings) => kind switch
+    public static double LnDensity(ObjectKind kind, double lnShift, double resolution, MatchSettings settings) => kind switch
     {
         ObjectKind.Star => Math.Log(settings.PriorStar) + Velocities(lnShift * KmSPerLn, 60, 200),
         ObjectKind.Nebula => Math.Log(settings.PriorNebula) + Velocities(lnShift * KmSPerLn, 40, 120),
-        ObjectKind.Galaxy => Math.Log(settings.PriorGalaxy) + Flat(lnShift, 1.2) + Distant(lnShift, settings),
-        ObjectKind.Quasar => Math.Log(settings.PriorQuasar) + Flat(lnShift, 0.4) + Distant(lnShift, settings),
+        ObjectKind.Galaxy => Math.Log(settings.PriorGalaxy) + Flat(lnShift, 1.2) + Distant(lnShift, settings) + Faint(resolution),
+        ObjectKind.Quasar => Math.Log(settings.PriorQuasar) + Flat(lnShift, 0.4) + Distant(lnShift, settings) + Faint(resolution),
         _ => Math.Log(CometShare) + Velocities(lnShift * KmSPerLn, 40, 120),
     };
 
@@ -38,6 +41,12 @@ internal static class RedshiftPrior
         if (settings.Expect is not null || kmS > 900) return 0;
         return kmS < 600 ? NearestPenalty : NearestPenalty * (900 - kmS) / 300;
     }
+
+    /// <summary>
+    /// High resolving power spreads the light thin and is spent on bright objects, which are stars: the share of others is taken
+    /// to fall with the square of it (common practice).
+    /// </summary>
+    private static double Faint(double resolution) => Math.Min(0, 2 * Math.Log(OrdinaryResolution / resolution));
 
     private static double Normal(double x, double sigma) => Math.Exp(-0.5 * x * x / (sigma * sigma)) / (sigma * 2.5066282746310002);
 
