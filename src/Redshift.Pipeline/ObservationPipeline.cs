@@ -47,11 +47,13 @@ public sealed class ObservationPipeline(PipelineSettings settings)
     private static ObservationResult Answer(ObservationResult result, NormalizedObservation normalized, MatchResult match)
     {
         var decision = match.Decision;
-        var confidence = Calibration.Confidence(decision, match);
+        var fit = decision.Answer.Fit;
+        var error = RedshiftError.Of(fit, normalized.Resolution);
+        var tolerance = PosteriorSum.ToleranceKmS(fit.Model.Kind, normalized.Resolution);
+        var confidence = Calibration.Confidence(match, error * Velocity.SpeedOfLightKmS, tolerance);
         var verdict = Calibration.Verdict(confidence, decision.LnOddsFeatures, normalized.HasContinuum);
         result = result with { Verdict = verdict, Confidence = confidence, LnOdds = decision.LnOdds, LnOddsFeatures = decision.LnOddsFeatures, Misfit = match.Misfit, Candidates = decision.Candidates };
         if (verdict == Verdict.Nothing) return result;
-        var fit = decision.Answer.Fit;
         var z = Math.Exp(fit.LnShift) - 1;
         var native = NativeModel.Fit(normalized, fit, match.Error);
         return AnswerLines.Measure(normalized, match, native).AddTo(result with
@@ -60,7 +62,7 @@ public sealed class ObservationPipeline(PipelineSettings settings)
             KindConfidence = confidence * decision.KindShare,
             Z = z,
             ZFile = z,
-            ZErr = RedshiftError.Of(fit, normalized.Resolution) * (1 + z),
+            ZErr = error * (1 + z),
             SpectralType = fit.Model.Template?.SpectralType ?? "",
             Next = decision.Next,
             NextConfidence = decision.Next is { } next ? (1 - confidence) * next.Probability / Math.Max(1e-12, decision.Candidates.Sum(c => c.Probability) - decision.Candidates[0].Probability) : null,

@@ -26,8 +26,21 @@ internal static class RedshiftError
     /// </summary>
     private static double Floor(Refined fit) => fit.Model.Kind switch
     {
-        ObjectKind.Star or ObjectKind.Nebula => 2,
+        ObjectKind.Star => StarFloor(fit.Model.Template?.SpectralType ?? ""),
+        ObjectKind.Nebula => 2,
         ObjectKind.Quasar => fit.LnShift > Math.Log(6) ? 500 : 180,
         _ => fit.LnShift > Math.Log(2.6) ? 180 : 12,
+    };
+
+    /// <summary>
+    /// Lines as wide as those of white dwarfs, and band heads as crude as those of M stars, are computed no better than to this velocity:
+    /// the scatter found on simulated stars whose lines and bands have other shapes than the engine's.
+    /// </summary>
+    private static double StarFloor(string spectralType) => spectralType.Length == 0 ? 2 : spectralType[0] switch
+    {
+        'D' => 110,
+        'M' => 35,
+        'O' or 'B' => 20,
+        _ => 2,
     };
 }
