@@ -11,7 +11,7 @@ namespace Redshift.Pipeline.Numerics;
 internal sealed class FourierTransform
 {
     [ThreadStatic]
-    private static Dictionary<int, FourierTransform>? PerThread;
+    private static Dictionary<int, FourierTransform>? _perThread;
 
     private readonly float[][] _cos;
     private readonly float[][] _sin;
@@ -33,8 +33,8 @@ internal sealed class FourierTransform
     /// <summary>A transform of this length for the calling thread, kept for the next call.</summary>
     public static FourierTransform OfLength(int length)
     {
-        PerThread ??= [];
-        if (!PerThread.TryGetValue(length, out var transform)) PerThread[length] = transform = new FourierTransform(length);
+        _perThread ??= [];
+        if (!_perThread.TryGetValue(length, out var transform)) _perThread[length] = transform = new FourierTransform(length);
         return transform;
     }
 
