@@ -4,8 +4,8 @@ namespace Redshift.Pipeline.Match.Models;
 internal static class Forest
 {
     /// <summary>ln of the wavelength of Lyman alpha in Å.</summary>
-    public const double LnLymanAlpha = 7.1030456;
-    private const double LnLymanBeta = 6.9331568;
+    public const double LnLymanAlpha = 7.1030506;
+    private const double LnLymanBeta = 6.9331520;
     private const double LnLymanLimit = 6.8153695;
 
     /// <summary>
