@@ -26,11 +26,11 @@ internal static class HalfNormalEvidence
         return LnTail(v / root) + 0.5 * v * v / m - LnTail(mean / spread) - 0.5 * mean * mean * precision - 0.5 * Math.Log(m * spread * spread);
     }
 
-    /// <summary>ln Φ(x), the normal distribution's share below x, to some 1e-3 (asymptotic series of Mills' ratio below −3).</summary>
+    /// <summary>ln Φ(x), the normal distribution's share below x, to some 1e-3 (continued fraction of Mills' ratio below −3).</summary>
     public static double LnTail(double x)
     {
         if (x > 3) return 0;
-        if (x < -3) return -0.5 * x * x - Math.Log(-x * 2.5066282746310002) + Math.Log(1 - 1 / (x * x) + 3 / (x * x * x * x));
+        if (x < -3) return -0.5 * x * x - Math.Log(2.5066282746310002 * (-x + 1 / (-x + 2 / (-x + 3 / (-x + 4 / -x)))));
         // Abramowitz & Stegun 26.2.17, |error| < 7.5e-8.
         var t = 1 / (1 + 0.2316419 * Math.Abs(x));
         var tail = Math.Exp(-0.5 * x * x) * 0.3989422804014327
