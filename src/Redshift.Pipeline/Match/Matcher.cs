@@ -1,5 +1,4 @@
 using Redshift.Pipeline.Match.Fit;
-using Redshift.Pipeline.Match.Models;
 using Redshift.Pipeline.Match.Posterior;
 using Redshift.Pipeline.Match.Search;
 using Redshift.Pipeline.Normalize;
@@ -21,9 +20,6 @@ internal sealed class Matcher(MatchSettings settings)
     /// <summary>Peaks of each kind that are climbed however far below, and those that are fitted in full after a first look.</summary>
     private const int AlwaysClimbed = 2;
     private const int FittedInFull = 6;
-
-    /// <summary>Places of quasars at which all variants are tried.</summary>
-    private const int PlacesWithVariants = 4;
 
     /// <summary>Cells of the exact fits at most.</summary>
     private const int MostFitCells = 12000;
@@ -68,15 +64,8 @@ internal sealed class Matcher(MatchSettings settings)
 
     /// <summary>The best peaks of each kind by fits without partners.</summary>
     private static List<Peak> FirstLook(ModelFit fit, List<Peak> peaks) =>
-        [.. Look(fit, peaks).GroupBy(p => p.Model.Kind).SelectMany(g => g.Key == ObjectKind.Quasar ? Variants(fit, g) : g.Take(FittedInFull))];
-
-    private static IEnumerable<Peak> Look(ModelFit fit, IEnumerable<Peak> peaks) =>
-        peaks.Select(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift, mixed: false) }).OrderByDescending(p => p.LnEvidence);
-
-    /// <summary>At the best places of quasars, the best of all widths, winds, host galaxies and broad absorption.</summary>
-    private static IEnumerable<Peak> Variants(ModelFit fit, IEnumerable<Peak> quasars) =>
-        quasars.DistinctBy(p => p.LnShift).Take(FittedInFull).SelectMany((p, rank) => rank >= PlacesWithVariants ? [p]
-            : Look(fit, ModelLibrary.Instance.Quasars.Select(m => p with { Model = m })).Take(2));
+        [.. peaks.ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift, mixed: false) })
+            .GroupBy(p => p.Model.Kind).SelectMany(g => g.OrderByDescending(p => p.LnEvidence).Take(FittedInFull))];
 
     private static List<Peak> Leaders(List<Peak> peaks)
     {

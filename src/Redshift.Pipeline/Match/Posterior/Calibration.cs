@@ -24,7 +24,7 @@ internal static class Calibration
     private const double Turn = 6;
 
     /// <summary>Below these ln odds against a featureless spectrum there is no evidence of an object.</summary>
-    private const double NoFeatures = 4;
+    private const double NoFeatures = 8;
 
     /// <summary>Calibrated probability of an answer.</summary>
     /// <param name="match">What matching gave.</param>

@@ -11,9 +11,6 @@ internal sealed class GridSearch
     /// <summary>Peaks nearer than this many cells are one.</summary>
     private const int Separation = 5;
 
-    /// <summary>Broad lines place a quasar no better than this.</summary>
-    private const double QuasarSeparationKmS = 2500;
-
     private const double KmSPerLn = 299792.458;
 
     /// <summary>Stars beyond this velocity are not bound to the Galaxy.</summary>
@@ -116,20 +113,7 @@ internal sealed class GridSearch
             peaks.AddRange(Highest(total, _firstShift, stride, 8, _ => model));
         }
 
-        return Distinct(peaks, 14);
-    }
-
-    /// <summary>The best peak at each place: widths and winds are variants of one redshift, not rivals.</summary>
-    private static List<Peak> Distinct(List<Peak> peaks, int count)
-    {
-        var kept = new List<Peak>();
-        foreach (var peak in peaks.OrderByDescending(p => p.LnEvidence))
-        {
-            if (kept.Count == count) break;
-            if (!kept.Exists(k => Math.Abs(k.LnShift - peak.LnShift) < QuasarSeparationKmS / KmSPerLn)) kept.Add(peak);
-        }
-
-        return kept;
+        return [.. peaks.OrderByDescending(p => p.LnEvidence).Take(14)];
     }
 
     private List<Peak> Nebulae()
