@@ -17,7 +17,7 @@ internal sealed record Refined(FitModel Model, double LnShift, double Sigma, dou
 /// <summary>Climbs from a peak of the search to the maximum of the exact evidence.</summary>
 internal static class Refinement
 {
-    private const int MostSteps = 6;
+    private const int MostSteps = 40;
 
     /// <summary>Fits a parabola through three points, moves to its top, and narrows the step, until the step matches the peak's own width.</summary>
     /// <param name="fit">The fit.</param>
