@@ -38,6 +38,19 @@ public class RefinementTests
         Assert.Equal(left.LnEvidence, right.LnEvidence, 0.05);
     }
 
+    [Theory]
+    [InlineData(-1000)]
+    [InlineData(1000)]
+    public void Broad_lines_are_climbed_from_afar(double offsetKmS)
+    {
+        var broad = new EmissionGroup { Name = "broad", Lines = [new(6564.608, 1), new(4862.683, 0.4)], Mean = 0, Spread = 200, Absent = 0.1, Broad = true };
+        var run = Spectra.Run(LnWavelengths(6000, 8700), x => 1 + Line(x, 6564.608 * Math.Exp(LnShift), 4710) + 0.54 * Line(x, 4862.683 * Math.Exp(LnShift), 4710), 0.1, 3);
+        var fit = new ModelFit(FitPixels.Build([run], ModelError.Uniform, Cells.Step));
+        var top = Refinement.Climb(fit, Model with { Groups = [broad], BroadKmS = 2000 }, LnShift + offsetKmS / 299792.458, 0.5 * Cells.Step);
+        Assert.Equal(LnShift, top.LnShift, 4 * top.Sigma);
+        Assert.InRange(top.Sigma * 299792.458, 5, 60);
+    }
+
     [Fact]
     public void The_top_is_no_lower_than_its_surroundings()
     {
