@@ -16,8 +16,8 @@ public class HonestyTests
     private readonly ObservationPipeline _pipeline = new(new PipelineSettings());
 
     /// <summary>
-    /// Errors right, too small, too large, absent; a flux of any unit. Nobody is told of an object, but not all are called nothing, because
-    /// darkness fits the trough shortward of Lyman alpha of a quasar at the end of the grid as well as it fits a smooth spectrum.
+    /// Errors right, too small, too large, absent; a flux of any unit. Darkness also fits the trough shortward of Lyman alpha of a quasar
+    /// at the end of the grid, which must not count as its features.
     /// </summary>
     [Theory]
     [InlineData(1.0, 1.0)]
@@ -31,9 +31,7 @@ public class HonestyTests
         var ln = SyntheticSpectrum.LnWavelengths(3700, 9200);
         var results = Enumerable.Range(1, Seeds).Select(seed => SyntheticSpectrum.Noisy(ln, _ => 0, sigma, (ulong)seed))
             .Select(noise => _pipeline.Analyze(SyntheticSpectrum.Observation(SyntheticSpectrum.Spectrum(ln, noise, stated)))).ToList();
-        Assert.All(results, r => Assert.True(r.Verdict is Verdict.Nothing || (r.Verdict is Verdict.Unsettled && r.Kind is ObjectKind.Quasar && r.Z > 5.5), $"{r.Verdict} {r.Kind} {r.Z}"));
-        Assert.All(results, r => Assert.Equal(r.Verdict is Verdict.Nothing, r.Z is null));
-        Assert.InRange(results.Count(r => r.Verdict is Verdict.Nothing), Seeds / 3, Seeds);
+        Assert.All(results, r => Assert.Equal((Verdict.Nothing, null), (r.Verdict, r.Z)));
     }
 
     [Fact]
