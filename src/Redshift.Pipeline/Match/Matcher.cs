@@ -21,6 +21,9 @@ internal sealed class Matcher(MatchSettings settings)
     private const int AlwaysClimbed = 2;
     private const int FittedInFull = 6;
 
+    /// <summary>Peaks of each kind that are fitted in full whatever the first look says.</summary>
+    private const int AlwaysFitted = 3;
+
     /// <summary>Cells of the exact fits at most.</summary>
     private const int MostFitCells = 12000;
 
@@ -62,10 +65,14 @@ internal sealed class Matcher(MatchSettings settings)
         return (ModelError.Measure(pixels, runs, fit.Curves().Model), Leaders(exact));
     }
 
-    /// <summary>The best peaks of each kind by fits without partners.</summary>
+    /// <summary>
+    /// The best peaks of each kind by fits without partners, and the first ones of whoever found them: a template that is wrong on its own
+    /// may be right in a mixture, and must not take its strong lines down with it.
+    /// </summary>
     private static List<Peak> FirstLook(ModelFit fit, List<Peak> peaks) =>
-        [.. peaks.ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift, mixed: false) })
-            .GroupBy(p => p.Model.Kind).SelectMany(g => g.OrderByDescending(p => p.LnEvidence).Take(FittedInFull))];
+        [.. peaks.GroupBy(p => p.Model.Kind).SelectMany(g =>
+            g.OrderByDescending(p => fit.LnEvidence(p.Model, p.LnShift, mixed: false)).Take(FittedInFull)
+                .Union(g.OrderByDescending(p => p.LnEvidence).Take(AlwaysFitted)))];
 
     private static List<Peak> Leaders(List<Peak> peaks)
     {

@@ -79,11 +79,11 @@ public sealed class MeasurementTests
     [Fact]
     public void A_line_on_unusable_pixels_is_masked_and_a_missing_one_has_a_limit()
     {
-        var result = new ObservationPipeline(new PipelineSettings()).Analyze(Galaxy(masked: "H alpha", without: "H gamma"));
+        var result = new ObservationPipeline(new PipelineSettings()).Analyze(Galaxy(masked: "H alpha", without: "H beta"));
 
         Assert.Equal(Z, result.ZFile!.Value, 1e-4);
         Assert.Equal(LineState.Masked, result.Lines.Single(l => l.Line == "H alpha").State);
-        Assert.DoesNotContain(result.Lines, l => l.Line == "H gamma" && l.State == LineState.Matched);
+        Assert.DoesNotContain(result.Lines, l => l.Line == "H beta" && l.State == LineState.Matched);
     }
 
     [Fact]
