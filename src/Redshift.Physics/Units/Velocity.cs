@@ -7,7 +7,7 @@ namespace Redshift.Physics.Units;
 public readonly struct Velocity : IEquatable<Velocity>, IComparable<Velocity>
 {
     /// <summary>Speed of light in vacuum in km/s, exact (SI definition of the metre).</summary>
-    public const double SpeedOfLightKmS = 299792.458;
+    public const double SpeedOfLightKmS = Constants.Codata2022.SpeedOfLightKmS;
 
     private Velocity(double kmS) => KmS = kmS;
 

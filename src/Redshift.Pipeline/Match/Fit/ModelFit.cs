@@ -1,3 +1,4 @@
+using Redshift.Physics.Units;
 using Redshift.Pipeline.Match.Models;
 using Redshift.Pipeline.Numerics;
 
@@ -18,7 +19,7 @@ internal sealed class ModelFit
     /// <summary>Prior σ of a change of all lines' depth together: veiling, metallicity.</summary>
     private const double ContrastSpread = 0.3;
 
-    private const double KmSPerLn = 299792.458;
+    private const double KmSPerLn = Velocity.SpeedOfLightKmS;
     private const double InverseRootTwoPi = 0.3989422804014327;
 
     private readonly FitPixels _pixels;

@@ -1,3 +1,4 @@
+using Redshift.Physics.Units;
 using Redshift.Pipeline.Results;
 
 namespace Redshift.Pipeline.Match.Models;
@@ -5,7 +6,7 @@ namespace Redshift.Pipeline.Match.Models;
 /// <summary>A quasar continuum behind a broad outflow: troughs 3,000–12,000 km/s blueward of N V, Si IV and C IV (Weymann et al. 1991, ApJ 373, 23).</summary>
 internal static class BroadAbsorption
 {
-    private const double KmSPerLn = 299792.458;
+    private const double KmSPerLn = Velocity.SpeedOfLightKmS;
 
     private static readonly (double RestA, double Depth)[] Lines = [(1240.8, 0.7), (1396.8, 0.45), (1549.1, 0.7)];
 

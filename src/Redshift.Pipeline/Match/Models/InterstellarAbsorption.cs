@@ -1,3 +1,5 @@
+using Redshift.Physics.Units;
+
 namespace Redshift.Pipeline.Match.Models;
 
 /// <summary>
@@ -8,7 +10,7 @@ internal static class InterstellarAbsorption
 {
     private const double SigmaKmS = 230;
     private const double OutflowKmS = -150;
-    private const double KmSPerLn = 299792.458;
+    private const double KmSPerLn = Velocity.SpeedOfLightKmS;
 
     private static readonly (double RestA, double EquivalentWidthA)[] Lines =
     [

@@ -1,3 +1,5 @@
+using Redshift.Physics.Units;
+
 namespace Redshift.Pipeline.Match.Models;
 
 /// <summary>
@@ -8,7 +10,7 @@ internal static class LineSpreadLevels
 {
     public const int Count = 36;
 
-    private const double Smallest = 12 / 299792.458;
+    private const double Smallest = 12 / Velocity.SpeedOfLightKmS;
     private const double Ratio = 1.1666666666666667;
     private static readonly double LogRatio = Math.Log(Ratio);
 

@@ -1,3 +1,5 @@
+using Redshift.Physics.Units;
+
 namespace Redshift.Pipeline.Match.Models;
 
 /// <summary>
@@ -9,7 +11,7 @@ internal static class QuasarLines
     /// <summary>The groups with the high-ionisation lines at the composite's blueshift, and with the strong wind that many z &gt; 5 quasars show.</summary>
     public static IReadOnlyList<(string Name, IReadOnlyList<EmissionGroup> Groups)> Winds { get; } = [("calm", Groups(500)), ("windy", Groups(2200))];
 
-    private static EmissionGroup[] Groups(double blueshiftKmS) => Groups(1 - blueshiftKmS / 299792.458, 0.5 * blueshiftKmS);
+    private static EmissionGroup[] Groups(double blueshiftKmS) => Groups(1 - blueshiftKmS / Velocity.SpeedOfLightKmS, 0.5 * blueshiftKmS);
 
     private static EmissionGroup[] Groups(double blue, double spread) =>
     [

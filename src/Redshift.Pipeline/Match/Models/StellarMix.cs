@@ -1,4 +1,5 @@
 using Redshift.Physics.Stars;
+using Redshift.Physics.Units;
 using Redshift.Pipeline.Numerics;
 
 namespace Redshift.Pipeline.Match.Models;
@@ -33,6 +34,6 @@ internal sealed record StellarMix(string Name, double Metallicity, double Greate
             for (var i = 0; i < sum.Length; i++) sum[i] += (float)share * flux[i];
         }
 
-        return GaussianFilter.Convolve(sum, DispersionKmS / 299792.458 / TemplateGrid.Step);
+        return GaussianFilter.Convolve(sum, DispersionKmS / Velocity.SpeedOfLightKmS / TemplateGrid.Step);
     }
 }

@@ -1,4 +1,5 @@
 using System.Collections.Concurrent;
+using Redshift.Physics.Units;
 using Redshift.Pipeline.Numerics;
 using Redshift.Pipeline.Results;
 
@@ -34,7 +35,7 @@ internal sealed class Template
         Name = original.Name + " rotating";
         Kind = original.Kind;
         SpectralType = original.SpectralType;
-        _flattened = GaussianFilter.Convolve(original._flattened, sigmaKmS / 299792.458 / TemplateGrid.Step);
+        _flattened = GaussianFilter.Convolve(original._flattened, sigmaKmS / Velocity.SpeedOfLightKmS / TemplateGrid.Step);
     }
 
     public string Name { get; }

@@ -1,9 +1,11 @@
+using Redshift.Physics.Units;
+
 namespace Redshift.Pipeline.Match.Models;
 
 /// <summary>The rest-frame axis of the computed spectra: vacuum, even in ln λ, 20 km/s a step, 880 Å to 25,000 Å.</summary>
 internal static class TemplateGrid
 {
-    public const double Step = 20 / 299792.458;
+    public const double Step = 20 / Velocity.SpeedOfLightKmS;
 
     public const int Count = 50_160;
 

@@ -1,3 +1,4 @@
+using Redshift.Physics.Units;
 using Redshift.Pipeline.Results;
 
 namespace Redshift.Pipeline.Match.Posterior;
@@ -27,7 +28,7 @@ internal sealed record Decision
 /// <summary>Sums the hypotheses over kinds within the tolerance of the answered kind.</summary>
 internal static class PosteriorSum
 {
-    private const double KmSPerLn = 299792.458;
+    private const double KmSPerLn = Velocity.SpeedOfLightKmS;
 
     /// <summary>Tolerance in km/s within which a redshift of a kind counts as the same.</summary>
     public static double ToleranceKmS(ObjectKind kind, double resolution) => kind switch

@@ -1,3 +1,4 @@
+using Redshift.Physics.Units;
 using Redshift.Pipeline.Match.Fit;
 using Redshift.Pipeline.Results;
 
@@ -6,7 +7,7 @@ namespace Redshift.Pipeline.Match.Posterior;
 /// <summary>1σ of a redshift: the curvature of the likelihood, and floors for what no likelihood knows.</summary>
 internal static class RedshiftError
 {
-    private const double KmSPerLn = 299792.458;
+    private const double KmSPerLn = Velocity.SpeedOfLightKmS;
 
     /// <summary>Wavelength calibration and the shape of the line spread are rarely known better than to this share of its FWHM.</summary>
     private const double ShareOfResolution = 0.06;

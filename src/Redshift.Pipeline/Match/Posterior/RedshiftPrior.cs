@@ -1,3 +1,4 @@
+using Redshift.Physics.Units;
 using Redshift.Pipeline.Results;
 using Redshift.Pipeline.Settings;
 
@@ -15,7 +16,7 @@ internal static class RedshiftPrior
     /// <summary>ln prior of a galaxy or quasar at the velocities of stars.</summary>
     private const double NearestPenalty = -5000;
 
-    private const double KmSPerLn = 299792.458;
+    private const double KmSPerLn = Velocity.SpeedOfLightKmS;
 
     /// <summary>ln of the prior density in ln(1+z) of a kind at a redshift, weight of the kind included.</summary>
     public static double LnDensity(ObjectKind kind, double lnShift, double resolution, MatchSettings settings) => kind switch

@@ -1,3 +1,4 @@
+using Redshift.Physics.Units;
 using Redshift.Pipeline.Match.Fit;
 using Redshift.Pipeline.Normalize;
 
@@ -10,7 +11,7 @@ namespace Redshift.Pipeline.Match.Search;
 internal sealed class Cells
 {
     /// <summary>Cell width in ln λ.</summary>
-    public const double Step = 69 / 299792.458;
+    public const double Step = 69 / Velocity.SpeedOfLightKmS;
 
     /// <summary>Empty cells kept on both sides, as wide as the widest filter reaches.</summary>
     public const int Margin = 320;

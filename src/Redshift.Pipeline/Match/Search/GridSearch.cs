@@ -1,3 +1,4 @@
+using Redshift.Physics.Units;
 using Redshift.Pipeline.Match.Fit;
 using Redshift.Pipeline.Match.Models;
 using Redshift.Pipeline.Results;
@@ -11,7 +12,7 @@ internal sealed class GridSearch
     /// <summary>Peaks nearer than this many cells are one.</summary>
     private const int Separation = 5;
 
-    private const double KmSPerLn = 299792.458;
+    private const double KmSPerLn = Velocity.SpeedOfLightKmS;
 
     /// <summary>Stars beyond this velocity are not bound to the Galaxy.</summary>
     private const double FastestStarKmS = 1200;
