@@ -1,0 +1,9 @@
+namespace Redshift.Pipeline.Report.Formats;
+
+/// <summary>A table to be written in some format.</summary>
+/// <param name="Name">Name of the table, such as <c>catalogue</c>.</param>
+/// <param name="Description">One sentence.</param>
+/// <param name="Columns">Its columns.</param>
+/// <param name="Rows">Its rows. Formats that state lengths before the data go through them several times; they are never held all at once.</param>
+/// <typeparam name="TRow">What a row is made from.</typeparam>
+public sealed record Table<TRow>(string Name, string Description, IReadOnlyList<Column<TRow>> Columns, IEnumerable<TRow> Rows);
