@@ -76,13 +76,13 @@ internal sealed class LinesCommand
 
     private static Column<SpectralLine>[] Columns(RedshiftValue redshift, bool air) =>
     [
-        new("line", "", "", "Name", ColumnType.Text, line => Cell.Of(line.Name)),
-        new("family", "", "", "Family", ColumnType.Text, line => Cell.Of(Lower(line.Family.ToString()))),
-        new("side", "", "", "Absorption, emission or both", ColumnType.Text, line => Cell.Of(Lower(line.Kind.ToString()))),
-        new("rest_vacuum_a", "Angstrom", "", "At rest in vacuum", ColumnType.Real, line => Cell.Fixed(line.VacuumAngstrom, 4)),
-        new("rest_air_a", "Angstrom", "", "At rest in air", ColumnType.Real, line => line.VacuumAngstrom < AirRefraction.ShortestVacuumAngstrom
+        new("line", "", "", "Name", CellType.Text, line => Cell.Of(line.Name)),
+        new("family", "", "", "Family", CellType.Text, line => Cell.Of(Lower(line.Family.ToString()))),
+        new("side", "", "", "Absorption, emission or both", CellType.Text, line => Cell.Of(Lower(line.Kind.ToString()))),
+        new("rest_vacuum_a", "Angstrom", "", "At rest in vacuum", CellType.Real, line => Cell.Fixed(line.VacuumAngstrom, 4)),
+        new("rest_air_a", "Angstrom", "", "At rest in air", CellType.Real, line => line.VacuumAngstrom < AirRefraction.ShortestVacuumAngstrom
             ? Cell.Empty : Cell.Fixed(line.AirAngstrom, 4)),
-        new(air ? "observed_air_a" : "observed_vacuum_a", "Angstrom", "", "Observed", ColumnType.Real, line => Cell.Fixed(Observed(line, redshift, air), 4)),
+        new(air ? "observed_air_a" : "observed_vacuum_a", "Angstrom", "", "Observed", CellType.Real, line => Cell.Fixed(Observed(line, redshift, air), 4)),
     ];
 
     // Below 2000 A nobody observes in air and wavelengths are given in vacuum (the convention of AirRefraction).

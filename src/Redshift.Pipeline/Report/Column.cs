@@ -8,4 +8,4 @@ namespace Redshift.Pipeline.Report;
 /// <param name="Type">What its cells hold, where they are not empty.</param>
 /// <param name="Value">The cell of a row.</param>
 /// <typeparam name="TRow">What a row is made from.</typeparam>
-public sealed record Column<TRow>(string Name, string Unit, string Ucd, string Description, ColumnType Type, Func<TRow, Cell> Value);
+public sealed record Column<TRow>(string Name, string Unit, string Ucd, string Description, CellType Type, Func<TRow, Cell> Value);

@@ -11,11 +11,11 @@ public sealed record ColumnGuide(string Table, string Name, string Unit, string 
     /// <summary>The columns of the guide itself.</summary>
     public static IReadOnlyList<Column<ColumnGuide>> Columns { get; } =
     [
-        new("table", "", "meta.id;meta.table", "File that has the column", ColumnType.Text, r => Cell.Of(r.Table)),
-        new("name", "", "meta.id", "Name of the column", ColumnType.Text, r => Cell.Of(r.Name)),
-        new("unit", "", "meta.unit", "Unit", ColumnType.Text, r => Cell.Of(r.Unit)),
-        new("ucd", "", "meta.ucd", "Unified content descriptor", ColumnType.Text, r => Cell.Of(r.Ucd)),
-        new("description", "", "meta.note", "Meaning", ColumnType.Text, r => Cell.Of(r.Description)),
+        new("table", "", "meta.id;meta.table", "File that has the column", CellType.Text, r => Cell.Of(r.Table)),
+        new("name", "", "meta.id", "Name of the column", CellType.Text, r => Cell.Of(r.Name)),
+        new("unit", "", "meta.unit", "Unit", CellType.Text, r => Cell.Of(r.Unit)),
+        new("ucd", "", "meta.ucd", "Unified content descriptor", CellType.Text, r => Cell.Of(r.Ucd)),
+        new("description", "", "meta.note", "Meaning", CellType.Text, r => Cell.Of(r.Description)),
     ];
 
     /// <summary>The rows for the columns of one table.</summary>

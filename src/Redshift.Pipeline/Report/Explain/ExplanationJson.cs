@@ -9,9 +9,9 @@ public static class ExplanationJson
 {
     private static readonly Column<ReadingNote>[] ReadingColumns =
     [
-        new("role", "", "", "What was needed", ColumnType.Text, note => Cell.Of(note.Role)),
-        new("choice", "", "", "What fills it", ColumnType.Text, note => Cell.Of(note.Choice)),
-        new("why", "", "", "The reason", ColumnType.Text, note => Cell.Of(note.Why)),
+        new("role", "", "", "What was needed", CellType.Text, note => Cell.Of(note.Role)),
+        new("choice", "", "", "What fills it", CellType.Text, note => Cell.Of(note.Choice)),
+        new("why", "", "", "The reason", CellType.Text, note => Cell.Of(note.Why)),
     ];
 
     /// <summary>The JSON text.</summary>

@@ -27,7 +27,7 @@ internal sealed class FitsFormat : ITableFormat
         var rows = 0L;
         // Some readers stumble over fields without any width.
         var widths = Enumerable.Repeat(1, table.Columns.Count).ToArray();
-        var texts = Enumerable.Range(0, widths.Length).Where(i => table.Columns[i].Type == ColumnType.Text).ToArray();
+        var texts = Enumerable.Range(0, widths.Length).Where(i => table.Columns[i].Type == CellType.Text).ToArray();
         foreach (var row in table.Rows)
         {
             rows++;
@@ -43,8 +43,8 @@ internal sealed class FitsFormat : ITableFormat
         string Text(long row) => column.Value(cursor.At(row)).Text;
         var definition = column.Type switch
         {
-            ColumnType.Whole => ColumnDefinition.Int32s(name, row => Whole(Text(row))) with { Null = Unknown },
-            ColumnType.Real => ColumnDefinition.Doubles(name, row => Real(Text(row))),
+            CellType.Whole => ColumnDefinition.Int32s(name, row => Whole(Text(row))) with { Null = Unknown },
+            CellType.Real => ColumnDefinition.Doubles(name, row => Real(Text(row))),
             _ => ColumnDefinition.Strings(name, width, Text),
         };
         return definition with { Unit = column.Unit, Ucd = column.Ucd, Comment = column.Description };

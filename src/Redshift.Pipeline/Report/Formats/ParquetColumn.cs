@@ -11,10 +11,10 @@ internal abstract class ParquetColumn(DataField field)
     public DataField Field { get; } = field;
 
     /// <summary>Makes a column.</summary>
-    public static ParquetColumn Create(string name, ColumnType type) => type switch
+    public static ParquetColumn Create(string name, CellType type) => type switch
     {
-        ColumnType.Whole => new Numbers<int>(name),
-        ColumnType.Real => new Numbers<double>(name),
+        CellType.Whole => new Numbers<int>(name),
+        CellType.Real => new Numbers<double>(name),
         _ => new Texts(name),
     };
 

@@ -54,8 +54,8 @@ internal sealed class VoTableFormat : ITableFormat
         StartLine(writer);
         writer.WriteStartElement("FIELD");
         writer.WriteAttributeString("name", name);
-        writer.WriteAttributeString("datatype", column.Type switch { ColumnType.Whole => "int", ColumnType.Real => "double", _ => "char" });
-        if (column.Type == ColumnType.Text)
+        writer.WriteAttributeString("datatype", column.Type switch { CellType.Whole => "int", CellType.Real => "double", _ => "char" });
+        if (column.Type == CellType.Text)
             writer.WriteAttributeString("arraysize", "*");
         if (column.Unit.Length > 0)
             writer.WriteAttributeString("unit", column.Unit);

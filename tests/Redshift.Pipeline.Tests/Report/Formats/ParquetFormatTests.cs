@@ -26,9 +26,9 @@ public sealed class ParquetFormatTests : IDisposable
         const int rows = 25_000;
         Redshift.Pipeline.Report.Column<int>[] columns =
         [
-            new("n", "", "", "", ColumnType.Whole, n => n % 7 == 0 ? Cell.Empty : Cell.Of(n)),
-            new("x", "", "", "", ColumnType.Real, n => Cell.Fixed(n / 8.0, 3)),
-            new("t", "", "", "", ColumnType.Text, n => Cell.Of(n % 3 == 0 ? "" : $"t{n}")),
+            new("n", "", "", "", CellType.Whole, n => n % 7 == 0 ? Cell.Empty : Cell.Of(n)),
+            new("x", "", "", "", CellType.Real, n => Cell.Fixed(n / 8.0, 3)),
+            new("t", "", "", "", CellType.Text, n => Cell.Of(n % 3 == 0 ? "" : $"t{n}")),
         ];
         Check(new Table<int>("numbers", "", columns, Enumerable.Range(0, rows)));
     }
@@ -55,8 +55,8 @@ public sealed class ParquetFormatTests : IDisposable
     private static object? Typed<TRow>(Redshift.Pipeline.Report.Column<TRow> column, TRow row) => column.Value(row).Text switch
     {
         "" => null,
-        var text when column.Type == ColumnType.Whole => int.Parse(text, CultureInfo.InvariantCulture),
-        var text when column.Type == ColumnType.Real => double.Parse(text, CultureInfo.InvariantCulture),
+        var text when column.Type == CellType.Whole => int.Parse(text, CultureInfo.InvariantCulture),
+        var text when column.Type == CellType.Real => double.Parse(text, CultureInfo.InvariantCulture),
         var text => text,
     };
 

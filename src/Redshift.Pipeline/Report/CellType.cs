@@ -1,7 +1,7 @@
 namespace Redshift.Pipeline.Report;
 
 /// <summary>What the cells of a column hold; formats with types need to know it even where all cells are empty.</summary>
-public enum ColumnType
+public enum CellType
 {
     /// <summary>Plain printable ASCII.</summary>
     Text,

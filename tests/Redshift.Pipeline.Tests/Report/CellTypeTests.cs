@@ -5,7 +5,7 @@ using Xunit;
 
 namespace Redshift.Pipeline.Tests.Report;
 
-public sealed class ColumnTypeTests
+public sealed class CellTypeTests
 {
     [Fact]
     public void Catalogue_cells_are_of_the_type_of_their_column() => Check(CatalogueColumns.With(["AIRMASS"]), Examples.Full());
@@ -25,10 +25,10 @@ public sealed class ColumnTypeTests
         Assert.All(filled, column => Assert.Equal(column.Type, TypeOf(column.Value(row))));
     }
 
-    private static ColumnType TypeOf(Cell cell)
+    private static CellType TypeOf(Cell cell)
     {
         if (!cell.IsNumber)
-            return ColumnType.Text;
-        return long.TryParse(cell.Text, NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture, out _) ? ColumnType.Whole : ColumnType.Real;
+            return CellType.Text;
+        return long.TryParse(cell.Text, NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture, out _) ? CellType.Whole : CellType.Real;
     }
 }
