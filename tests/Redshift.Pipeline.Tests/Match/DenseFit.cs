@@ -27,10 +27,10 @@ internal sealed class DenseFit
             for (var c = 0; c < columns.Length; c++) _design[p, _coefficients + c] = columns[c].Values[p];
         }
 
-        var weighted = _design.Transpose() * Matrix<double>.Build.DiagonalOfDiagonalArray(Array.ConvertAll(pixels.Weight, w => (double)w));
+        var weighted = _design.Transpose() * Matrix<double>.Build.DiagonalOfDiagonalArray([.. pixels.Weight.Take(pixels.Count).Select(w => (double)w)]);
         var (precision, mean) = Prior(pixels, columns);
         var normal = (weighted * _design + precision).Cholesky();
-        var right = weighted * Vector<double>.Build.DenseOfEnumerable(pixels.Flux.Select(f => (double)f)) + precision * mean;
+        var right = weighted * Vector<double>.Build.DenseOfEnumerable(pixels.Flux.Take(pixels.Count).Select(f => (double)f)) + precision * mean;
         _solution = normal.Solve(right);
         LnEvidence = 0.5 * (right * _solution) - 0.5 * normal.DeterminantLn - columns.Sum(c => Math.Log(c.Spread)) - 0.5 * (mean * (precision * mean));
     }

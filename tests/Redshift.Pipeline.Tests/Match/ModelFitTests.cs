@@ -124,7 +124,7 @@ public class ModelFitTests
 
     private static double Evidence(PixelRun run) => new ModelFit(Pixels(run)).LnEvidence(Model, LnShift);
 
-    private static double Null(FitPixels pixels) => new DenseFit(pixels, [.. pixels.Flux.Select(_ => 1f)]).LnEvidence;
+    private static double Null(FitPixels pixels) => new DenseFit(pixels, [.. pixels.Flux.Take(pixels.Count).Select(_ => 1f)]).LnEvidence;
 
     private static FitPixels Pixels(double[] ln, Func<double, double> flux, ulong seed) => Pixels(Spectra.Run(ln, flux, Sigma, seed));
 
@@ -143,12 +143,12 @@ public class ModelFitTests
             : line.Share / line.RestA * Math.Exp(-0.5 * u * u) / (sigma * Math.Sqrt(2 * Math.PI)));
     }
 
-    private static float[] Column(FitPixels pixels, EmissionGroup group) => [.. pixels.LnWavelength.Select(x => (float)Profile(x, group))];
+    private static float[] Column(FitPixels pixels, EmissionGroup group) => [.. pixels.LnWavelength.Take(pixels.Count).Select(x => (float)Profile(x, group))];
 
     private static double Star(double ln) => Interpolated(Stars.Broadened(LineSpreadLevels.Nearest(70 / 299792.458)), ln);
 
     private static float[] Rendered(Template template, FitPixels pixels) =>
-        [.. pixels.LnWavelength.Select((x, p) => (float)Interpolated(template.Broadened(LineSpreadLevels.Nearest(pixels.SigmaLn[p])), x))];
+        [.. pixels.LnWavelength.Take(pixels.Count).Select((x, p) => (float)Interpolated(template.Broadened(LineSpreadLevels.Nearest(pixels.SigmaLn[p])), x))];
 
     private static double Interpolated(float[] rest, double ln)
     {

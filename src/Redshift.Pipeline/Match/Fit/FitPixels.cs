@@ -7,29 +7,34 @@ namespace Redshift.Pipeline.Match.Fit;
 /// <summary>
 /// The pixels on which models are compared, all spectra of the observation one after the other, each with its own smooth nuisance.
 /// All kinds are fitted to the same pixels with the same nuisance, so that their evidences can be compared.
+/// The arrays are a vector longer than there are pixels, so that sums may read, and mask, beyond the last one.
 /// </summary>
 internal sealed class FitPixels
 {
     /// <summary>Emission lines are no Gaussians: their model is wrong by this share of what stands above the continuum.</summary>
     private const double LineError = 0.08;
 
+    private readonly int[] _intervalOfCoefficient;
+
     private FitPixels(int count, int coefficients)
     {
-        LnWavelength = new double[count];
-        Flux = new float[count];
-        Weight = new float[count];
-        SigmaLn = new float[count];
-        Continuum = new float[count];
-        Level = new byte[count];
+        _intervalOfCoefficient = new int[coefficients];
+        Count = count;
+        var padded = count + Kernels.Lanes;
+        LnWavelength = new double[padded];
+        Flux = new float[padded];
+        Weight = new float[padded];
+        SigmaLn = new float[padded];
+        Continuum = new float[padded];
+        TemplateIndex = new int[padded];
+        TemplateFraction = new float[padded];
         SplineFirst = new int[count];
-        Spline = new float[4][];
-        for (var j = 0; j < 4; j++) Spline[j] = new float[count];
-        SplinePairs = new float[10][];
-        for (var j = 0; j < 10; j++) SplinePairs[j] = new float[count];
+        Spline = [new float[padded], new float[padded], new float[padded], new float[padded]];
         PriorMatrix = new double[coefficients * (BandedCholesky.Band + 1)];
     }
 
-    public int Count => Flux.Length;
+    /// <summary>Number of pixels.</summary>
+    public int Count { get; }
 
     public double[] LnWavelength { get; }
 
@@ -43,8 +48,14 @@ internal sealed class FitPixels
     /// <summary>Smooth continuum, floored at a share of the noise so that priors on line strengths stay proper.</summary>
     public float[] Continuum { get; }
 
-    /// <summary>Level of <see cref="LineSpreadLevels"/>.</summary>
-    public byte[] Level { get; }
+    /// <summary>Place on <see cref="TemplateGrid"/> of each pixel at redshift zero, rounded down.</summary>
+    public int[] TemplateIndex { get; }
+
+    /// <summary>What the place on the template grid was rounded by.</summary>
+    public float[] TemplateFraction { get; }
+
+    /// <summary>Stretches of pixels of the same one of <see cref="LineSpreadLevels"/>.</summary>
+    public List<(int Start, int End, int Level)> Levels { get; } = [];
 
     /// <summary>First spline coefficient of a pixel.</summary>
     public int[] SplineFirst { get; }
@@ -52,11 +63,8 @@ internal sealed class FitPixels
     /// <summary>The four basis values at each pixel, times the baseline.</summary>
     public float[][] Spline { get; }
 
-    /// <summary>Products of the basis values, (j, k) with k ≤ j at j(j+1)/2 + k.</summary>
-    public float[][] SplinePairs { get; }
-
-    /// <summary>Stretches of pixels that share their four coefficients.</summary>
-    public List<(int Start, int End)> Intervals { get; } = [];
+    /// <summary>Stretches of pixels that share their four coefficients, and the first of these.</summary>
+    public List<(int Start, int End, int First)> Intervals { get; } = [];
 
     /// <summary>Smoothness prior of all splines.</summary>
     public double[] PriorMatrix { get; }
@@ -65,6 +73,9 @@ internal sealed class FitPixels
 
     /// <summary>Index of the first pixel of each spectrum, and the end.</summary>
     public required int[] Starts { get; init; }
+
+    /// <summary>The same pixels under the intergalactic medium; made when first asked for, as most objects are near.</summary>
+    public ForestPixels Forest => field ??= new(this);
 
     /// <summary>Lays out the pixels of an observation.</summary>
     /// <param name="spectra">The spectra, perhaps binned.</param>
@@ -99,16 +110,16 @@ internal sealed class FitPixels
             var modelVariance = (share * share + excess * excess) * Math.Max(1, errorWidth / run.Width[i]);
             Weight[p] = run.Weight[i] <= 0 ? 0 : (float)(1 / (1 / run.Weight[i] + modelVariance));
             SigmaLn[p] = run.SigmaLn[i];
-            Level[p] = (byte)LineSpreadLevels.Nearest(run.SigmaLn[i]);
+            var place = (run.LnWavelength[i] - TemplateGrid.LnStart) / TemplateGrid.Step;
+            TemplateIndex[p] = (int)Math.Floor(place);
+            TemplateFraction[p] = (float)(place - TemplateIndex[p]);
             Continuum[p] = Math.Max(run.Continuum[i], 0.5f * run.Baseline[i]);
             SplineFirst[p] = coefficient + spline.Evaluate(run.LnWavelength[i], four);
             for (var j = 0; j < 4; j++) Spline[j][p] = four[j] * run.Baseline[i];
-            for (var j = 0; j < 4; j++)
-                for (var k = 0; k <= j; k++) SplinePairs[j * (j + 1) / 2 + k][p] = Spline[j][p] * Spline[k][p];
         }
 
         AddIntervals(at, at + run.Flux.Length);
-
+        AddLevels(at, at + run.Flux.Length);
         SmoothFit.AddPrior(PriorMatrix, coefficient, spline.Count);
     }
 
@@ -117,8 +128,48 @@ internal sealed class FitPixels
         for (var p = start + 1; p <= end; p++)
         {
             if (p < end && SplineFirst[p] == SplineFirst[start]) continue;
-            Intervals.Add((start, p));
+            _intervalOfCoefficient[SplineFirst[start]] = Intervals.Count;
+            Intervals.Add((start, p, SplineFirst[start]));
             start = p;
         }
+    }
+
+    private void AddLevels(int start, int end)
+    {
+        var level = LineSpreadLevels.Nearest(SigmaLn[start]);
+        for (var p = start + 1; p <= end; p++)
+        {
+            var next = p == end ? -1 : SigmaLn[p] == SigmaLn[p - 1] ? level : LineSpreadLevels.Nearest(SigmaLn[p]);
+            if (next == level) continue;
+            Levels.Add((start, p, level));
+            (start, level) = (p, next);
+        }
+    }
+
+    /// <summary>Index in <see cref="Intervals"/> of the stretch that a pixel lies in.</summary>
+    public int IntervalOf(int pixel) => _intervalOfCoefficient[SplineFirst[pixel]];
+
+    /// <summary>The first pixel of a spectrum at or above a wavelength.</summary>
+    public int Find(int spectrum, double lnWavelength)
+    {
+        int from = Starts[spectrum], to = Starts[spectrum + 1];
+        // Pixels are nearly even in ln λ: a step of a line through the ends is a good guess, and a walk in doubling steps brackets the rest.
+        double first = LnWavelength[from], last = LnWavelength[to - 1];
+        if (lnWavelength <= first) return from;
+        if (lnWavelength > last) return to;
+        var guess = from + (int)((to - 1 - from) * ((lnWavelength - first) / (last - first)));
+        int low = guess, high = guess, step = 1;
+        while (low > from && LnWavelength[low] >= lnWavelength) (low, step) = (Math.Max(from, low - step), 2 * step);
+        step = 1;
+        while (high < to - 1 && LnWavelength[high] < lnWavelength) (high, step) = (Math.Min(to - 1, high + step), 2 * step);
+        // Below is less than the value, high is not.
+        while (high - low > 1)
+        {
+            var middle = (low + high) / 2;
+            if (LnWavelength[middle] < lnWavelength) low = middle;
+            else high = middle;
+        }
+
+        return high;
     }
 }

@@ -4,7 +4,11 @@ namespace Redshift.Pipeline.Match.Models;
 /// <param name="RestA">Rest wavelength in vacuum, Å.</param>
 /// <param name="Share">Flux over that of the group's reference line.</param>
 /// <param name="WidthKmS">σ added to the group's own, km/s: blends and multiplets that are wider than a line.</param>
-internal readonly record struct GroupLine(double RestA, double Share, double WidthKmS = 0);
+internal readonly record struct GroupLine(double RestA, double Share, double WidthKmS = 0)
+{
+    /// <summary>ln of the rest wavelength in Å.</summary>
+    public double LnRest { get; } = Math.Log(RestA);
+}
 
 /// <summary>Emission lines whose ratios are tied, with what is expected of their strength before the spectrum is seen.</summary>
 internal sealed class EmissionGroup

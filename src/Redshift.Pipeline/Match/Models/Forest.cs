@@ -5,8 +5,15 @@ internal static class Forest
 {
     /// <summary>ln of the wavelength of Lyman alpha in Å.</summary>
     public const double LnLymanAlpha = 7.1030506;
-    private const double LnLymanBeta = 6.9331520;
-    private const double LnLymanLimit = 6.8153695;
+
+    /// <summary>ln of the wavelength of Lyman beta in Å.</summary>
+    public const double LnLymanBeta = 6.9331520;
+
+    /// <summary>ln of the wavelength of the Lyman limit in Å.</summary>
+    public const double LnLymanLimit = 6.8153695;
+
+    /// <summary>Scatter of a two-state forest, as a share; see <see cref="Scatter"/>.</summary>
+    public const double ScatterShare = 0.45;
 
     /// <summary>
     /// Transmission at an observed wavelength: τ = 0.00247 (1+z)^3.9 and more steeply beyond z = 5.5, z being that of the absorbing gas
@@ -19,11 +26,20 @@ internal static class Forest
     {
         var lnRest = lnObserved - lnShift;
         if (lnRest >= LnLymanAlpha) return 1;
-        var tau = OpticalDepth(lnObserved - LnLymanAlpha);
-        if (lnRest < LnLymanBeta) tau += 0.35 * OpticalDepth(lnObserved - LnLymanBeta);
-        if (lnRest < LnLymanLimit) tau += Math.Max(0, 3 * (Math.Exp(lnShift) - 1.8));
-        return Math.Exp(-tau);
+        var transmission = AlphaTransmission(lnObserved);
+        if (lnRest < LnLymanBeta) transmission *= BetaTransmission(lnObserved);
+        if (lnRest < LnLymanLimit) transmission *= LimitTransmission(lnShift);
+        return transmission;
     }
+
+    /// <summary>What the gas lets pass whose Lyman alpha falls on an observed wavelength.</summary>
+    public static double AlphaTransmission(double lnObserved) => Math.Exp(-OpticalDepth(lnObserved - LnLymanAlpha));
+
+    /// <summary>What the gas lets pass whose Lyman beta falls on an observed wavelength.</summary>
+    public static double BetaTransmission(double lnObserved) => Math.Exp(-0.35 * OpticalDepth(lnObserved - LnLymanBeta));
+
+    /// <summary>What is left below the Lyman limit of an object.</summary>
+    public static double LimitTransmission(double lnShift) => Math.Exp(-Math.Max(0, 3 * (Math.Exp(lnShift) - 1.8)));
 
     /// <summary>The same as an instrument sees it, the step at Lyman alpha rounded by the line spread.</summary>
     /// <param name="lnObserved">ln of the observed vacuum wavelength in Å.</param>
@@ -46,7 +62,7 @@ internal static class Forest
     /// Scatter of the transmission about its mean in pixels of some 100 km/s: the forest is a random process, between dark and clear.
     /// A two-state process has √(F(1−F)); real forests, with the instrument's smoothing, have about half of that (common practice).
     /// </summary>
-    public static double Scatter(double transmission) => 0.45 * Math.Sqrt(Math.Max(0, transmission * (1 - transmission)));
+    public static double Scatter(double transmission) => ScatterShare * Math.Sqrt(Math.Max(0, transmission * (1 - transmission)));
 
     private static double OpticalDepth(double lnAbsorber) =>
         lnAbsorber <= 0 ? 0 : 0.00247 * Math.Exp(3.9 * lnAbsorber) * (lnAbsorber > 1.87 ? Math.Exp(7 * (lnAbsorber - 1.87)) : 1);

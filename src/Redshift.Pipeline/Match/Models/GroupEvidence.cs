@@ -3,7 +3,7 @@ using System.Runtime.CompilerServices;
 namespace Redshift.Pipeline.Match.Models;
 
 /// <summary>
-/// <see cref="HalfNormalEvidence.LnMixture"/> from tables, for the search, which needs it some hundred thousand times a spectrum.
+/// <see cref="HalfNormalEvidence"/> from tables, for the search, which needs it some hundred thousand times a spectrum.
 /// Linear interpolation is good to a few thousandths, far below what separates peaks.
 /// </summary>
 internal sealed class GroupEvidence

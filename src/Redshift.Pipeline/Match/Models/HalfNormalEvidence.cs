@@ -12,11 +12,14 @@ internal static class HalfNormalEvidence
     /// <param name="mean">Prior mean of the amplitude.</param>
     /// <param name="spread">Prior σ of the amplitude, positive.</param>
     /// <param name="absent">Prior probability that the amplitude is zero.</param>
-    public static double LnMixture(double gradient, double curvature, double mean, double spread, double absent)
-    {
-        var bayes = LnBayesFactor(gradient, curvature, mean, spread);
-        return bayes > 30 ? bayes + Math.Log(1 - absent) : Math.Log(absent + (1 - absent) * Math.Exp(bayes));
-    }
+    public static double LnMixture(double gradient, double curvature, double mean, double spread, double absent) =>
+        LnMixture(LnBayesFactor(gradient, curvature, mean, spread), absent);
+
+    /// <summary>ln of (1−absent)·BF + absent.</summary>
+    /// <param name="bayes">ln BF, see <see cref="LnBayesFactor"/>.</param>
+    /// <param name="absent">Prior probability that the amplitude is zero.</param>
+    public static double LnMixture(double bayes, double absent) =>
+        bayes > 30 ? bayes + Math.Log(1 - absent) : Math.Log(absent + (1 - absent) * Math.Exp(bayes));
 
     /// <summary>ln of the likelihood averaged over the prior, over that at amplitude zero.</summary>
     public static double LnBayesFactor(double gradient, double curvature, double mean, double spread)
