@@ -1,5 +1,6 @@
 using System.CommandLine;
 using System.CommandLine.Parsing;
+using Redshift.Pipeline.Compare;
 using Redshift.Pipeline.Report;
 using Redshift.Pipeline.Settings;
 
@@ -37,6 +38,7 @@ internal static class CommandLine
             RunCommand.Build(),
             ExplainCommand.Build(),
             LinesCommand.Build(),
+            CompareCommand.Build(),
         };
         root.SetAction((Action<ParseResult>)(_ => throw new UsageException("no command given; see zladder --help")));
         return root;
@@ -56,7 +58,7 @@ internal static class CommandLine
     private static (int Status, string Message) Judge(Exception problem) => problem switch
     {
         OperationCanceledException => (ExitCode.Interrupted, "interrupted; the output folder is as it was before"),
-        UsageException or SettingsException => (ExitCode.Usage, problem.Message),
+        UsageException or SettingsException or TableFileException => (ExitCode.Usage, problem.Message),
         FolderInUseException => (ExitCode.FolderInUse, problem.Message),
         IOException or UnauthorizedAccessException => (ExitCode.Stopped, "could not go on: " + problem.Message),
         _ => (ExitCode.Stopped, $"a fault of this program ({problem.GetType().Name}: {problem.Message}); please report it"),

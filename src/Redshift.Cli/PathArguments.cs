@@ -20,12 +20,7 @@ internal sealed class PathArguments
     /// <summary>Makes the argument and the option and adds them to a command.</summary>
     public PathArguments(Command command)
     {
-        // A mistyped option would otherwise be taken for a path.
-        _paths.Validators.Add(result =>
-        {
-            foreach (var token in result.Tokens.Where(token => token.Value.StartsWith('-')))
-                result.AddError($"there is no option {token.Value}");
-        });
+        MistypedOption.Refuse(_paths);
         command.Add(_paths);
         command.Add(_list);
     }
