@@ -57,7 +57,7 @@ internal static class CommandLine
 
     private static (int Status, string Message) Judge(Exception problem) => problem switch
     {
-        OperationCanceledException => (ExitCode.Interrupted, "interrupted; the output folder is as it was before"),
+        OperationCanceledException => (ExitCode.Interrupted, "interrupted"),
         UsageException or SettingsException or TableFileException => (ExitCode.Usage, problem.Message),
         FolderInUseException => (ExitCode.FolderInUse, problem.Message),
         IOException or UnauthorizedAccessException => (ExitCode.Stopped, "could not go on: " + problem.Message),

@@ -1,5 +1,6 @@
 using System.Diagnostics;
 using System.Globalization;
+using Redshift.Pipeline.Ledger;
 using Redshift.Pipeline.Report;
 
 namespace Redshift.Cli;
@@ -15,23 +16,28 @@ internal sealed class Progress : IDisposable
     private readonly TextWriter _out;
     private readonly bool _redraws;
     private readonly TimeSpan _interval;
-    private readonly int _files;
+    private readonly double _bytes;
     private readonly Lock _lock = new();
     private readonly Stopwatch _watch = Stopwatch.StartNew();
     private TimeSpan _last;
+    private double _settled;
+    private int _rejects;
     private bool _drawn;
 
-    private Progress(TextWriter output, bool redraws, int files)
+    private Progress(TextWriter output, bool redraws, long bytes)
     {
         _out = output;
         _redraws = redraws;
-        _files = files;
+        _bytes = Math.Max(1, bytes);
         _interval = TimeSpan.FromSeconds(redraws ? 0.2 : 10);
     }
 
-    /// <summary>Starts for a number of files; a dumb terminal counts as none.</summary>
-    public static Progress Start(int files) => new(
-        Console.Error, !Console.IsErrorRedirected && Environment.GetEnvironmentVariable("TERM") != "dumb", files);
+    /// <summary>Number of spectra measured so far.</summary>
+    public int Measured { get; private set; }
+
+    /// <summary>Starts for inputs of a total size; a dumb terminal counts as none.</summary>
+    public static Progress Start(long bytes) => new(
+        Console.Error, !Console.IsErrorRedirected && Environment.GetEnvironmentVariable("TERM") != "dumb", bytes);
 
     /// <summary>Prints a line of its own; safe to call from several threads.</summary>
     public void Say(string message)
@@ -43,14 +49,15 @@ internal sealed class Progress : IDisposable
         }
     }
 
-    /// <summary>Takes note of an outcome of the file with this number.</summary>
-    public void Update(int file, Tally tally)
+    /// <summary>Takes note of a step of the run.</summary>
+    public void Update(LedgerEntry entry)
     {
+        Count(entry);
         if (_watch.Elapsed - _last < _interval)
             return;
         _last = _watch.Elapsed;
         lock (_lock)
-            Draw((double)file / _files, tally);
+            Draw(Math.Min(1, _settled / _bytes));
     }
 
     /// <inheritdoc/>
@@ -60,13 +67,30 @@ internal sealed class Progress : IDisposable
             Clear();
     }
 
-    private void Draw(double done, Tally tally)
+    private void Count(LedgerEntry entry)
+    {
+        _settled += entry.Bytes;
+        if (entry is SpectrumDone { Reject: null })
+            Measured++;
+        if ((entry as SpectrumDone)?.Reject is { } reject)
+            Refuse(reject.ToString());
+        if ((entry as FileEnded)?.Spoilt is { } spoilt)
+            Refuse(spoilt.ToString());
+    }
+
+    private void Refuse(string message)
+    {
+        _rejects++;
+        Say("rejected: " + message);
+    }
+
+    private void Draw(double done)
     {
         Clear();
         if (_redraws)
-            _out.Write(Bar(done) + Text(done, tally));
+            _out.Write(Bar(done) + Text(done));
         else
-            _out.WriteLine(Text(done, tally));
+            _out.WriteLine(Text(done));
         _drawn = _redraws;
     }
 
@@ -83,7 +107,17 @@ internal sealed class Progress : IDisposable
         return new string('#', full) + new string('.', BarWidth - full) + " ";
     }
 
-    private string Text(double done, Tally tally) => string.Create(
+    private string Text(double done) => string.Create(
         CultureInfo.InvariantCulture,
-        $"{100 * done:F0} % of the files, {tally.Results} spectra ({tally.Results / _watch.Elapsed.TotalSeconds:F0} a second), {tally.Rejects} rejects");
+        $"{100 * done:F0} %, {Measured} spectra ({Measured / _watch.Elapsed.TotalSeconds:F0} a second), {_rejects} rejects, {Left(done)} left");
+
+    private string Left(double done)
+    {
+        if (done <= 0)
+            return "unknown time";
+        var left = _watch.Elapsed * ((1 - done) / done);
+        return left.TotalHours < 1
+            ? left.ToString(@"m\:ss", CultureInfo.InvariantCulture)
+            : string.Create(CultureInfo.InvariantCulture, $"{left.TotalHours:F1} h");
+    }
 }

@@ -1,9 +1,6 @@
 using System.CommandLine;
 using System.Diagnostics;
 using Redshift.Pipeline.Batch;
-using Redshift.Pipeline.Report;
-using Redshift.Pipeline.Report.Plots;
-using Redshift.Pipeline.Results;
 
 namespace Redshift.Cli;
 
@@ -24,6 +21,14 @@ internal sealed class RunCommand
     private readonly Option<int?> _jobs = Count("--jobs", "Number of spectra measured at the same time; as many as there are processors unless given", 1);
     private readonly Option<int?> _maxRejects = Count("--max-rejects", "End with status 4 where more than N spectra or files cannot be used", 0);
     private readonly Option<bool> _plots = new("--plots") { Description = "Draw every spectrum with its answer into the folder plots" };
+
+    private readonly Option<bool> _again = new("--again") { Description = "Measure everything again, also what an earlier run into the same folder did" };
+
+    private readonly Option<bool> _verify = new("--verify")
+    {
+        Description = "Read all files and compare their content with the ledger; otherwise size and time tell whether a file changed",
+    };
+
     private readonly Option<bool> _json = new("--json") { Description = "Print the summary as JSON" };
 
     private RunCommand()
@@ -34,6 +39,8 @@ internal sealed class RunCommand
         _command.Add(_plots);
         _command.Add(_jobs);
         _command.Add(_maxRejects);
+        _command.Add(_again);
+        _command.Add(_verify);
         _command.Add(_json);
         _command.SetAction(RunAsync);
     }
@@ -49,31 +56,11 @@ internal sealed class RunCommand
         var settings = _shared.Settings(parsed);
         var files = InputFiles.Find(_paths.Read(parsed), parsed.GetRequiredValue(_out));
         var jobs = parsed.GetValue(_jobs) ?? Workers.Available(Environment.GetEnvironmentVariable);
-        using var folder = new ReportFolder(parsed.GetRequiredValue(_out), settings.Load.Keep);
-        using var progress = Progress.Start(files.Count);
-        var tally = new Tally();
-        Action<ObservationResult>? draw = parsed.GetValue(_plots) ? new PlotFolder(folder.Path, progress.Say).Draw : null;
-        await foreach (var outcome in new BatchRun(settings, jobs, draw).RunAsync(files, token).ConfigureAwait(false))
-        {
-            Record(outcome, folder, progress);
-            tally.Count(outcome);
-            progress.Update(outcome.File, tally);
-        }
-
-        folder.Complete();
-        progress.Dispose();
-        Summary.Print(tally, folder.Path, watch.Elapsed, parsed.GetValue(_json));
+        using var session = new Session(parsed.GetRequiredValue(_out), settings, jobs, parsed.GetValue(_plots));
+        var measured = await session.MeasureAsync(files, parsed.GetValue(_again), parsed.GetValue(_verify), token).ConfigureAwait(false);
+        var tally = Tally.Of(session.Ledger);
+        Summary.Print(tally, measured, parsed.GetRequiredValue(_out), watch.Elapsed, parsed.GetValue(_json));
         return tally.Results == 0 || tally.Rejects > parsed.GetValue(_maxRejects) ? ExitCode.Unusable : ExitCode.Done;
-    }
-
-    private static void Record(BatchOutcome outcome, ReportFolder folder, Progress progress)
-    {
-        if (outcome.Result is { } result)
-            folder.Add(result);
-        if (outcome.Reject is not { } reject)
-            return;
-        folder.Add(reject);
-        progress.Say("rejected: " + reject);
     }
 
     private static Option<int?> Count(string name, string description, int least) => new(name)

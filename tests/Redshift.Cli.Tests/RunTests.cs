@@ -105,7 +105,7 @@ public sealed class RunTests : IDisposable
     [Fact]
     public void A_folder_in_use_is_status_5()
     {
-        using var busy = new ReportFolder(_folder.Out(), []);
+        using var busy = new OutputFolder(_folder.Out());
         var outcome = Zladder.Run("run", _folder.Spectra, "--out", _folder.Out());
 
         Assert.Equal(5, outcome.Status);

@@ -1,3 +1,4 @@
+using System.Globalization;
 using Redshift.Pipeline.Results;
 
 namespace Redshift.Pipeline.Report.Plots;
@@ -11,11 +12,9 @@ public sealed class PlotFolder(string report, Action<string> complain)
     /// <exception cref="IOException">The picture cannot be written.</exception>
     public void Draw(ObservationResult result)
     {
-        var name = string.Concat(result.Observation.Source.Select(Plain));
-        var path = Path.Combine(report, "plots", $"{name}.{result.Observation.Row}.png");
         try
         {
-            SpectrumPicture.Save(result, path);
+            SpectrumPicture.Save(result, PathOf(result.Observation.Source, result.Observation.Row));
         }
         catch (Exception problem) when (problem is not (IOException or UnauthorizedAccessException))
         {
@@ -23,6 +22,12 @@ public sealed class PlotFolder(string report, Action<string> complain)
             complain($"no picture of {result.Observation.Source}: a fault of this program ({problem.GetType().Name}: {problem.Message})");
         }
     }
+
+    /// <summary>Whether the picture of a spectrum is there.</summary>
+    public bool Has(string source, int row) => File.Exists(PathOf(source, row));
+
+    private string PathOf(string source, int row) =>
+        Path.Combine(report, "plots", string.Create(CultureInfo.InvariantCulture, $"{string.Concat(source.Select(Plain))}.{row}.png"));
 
     // Only letters that every file system and every shell takes as they are.
     private static char Plain(char letter) => char.IsAsciiLetterOrDigit(letter) || letter is '/' or '.' or '-' or '_' ? letter : '_';

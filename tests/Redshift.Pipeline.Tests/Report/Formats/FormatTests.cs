@@ -1,6 +1,8 @@
+using Redshift.Pipeline.Ledger;
 using Redshift.Pipeline.Report;
 using Redshift.Pipeline.Report.Formats;
 using Redshift.Pipeline.Results;
+using Redshift.Pipeline.Tests.Ledger;
 using Redshift.Testing;
 using Xunit;
 
@@ -25,15 +27,14 @@ public sealed class FormatTests : IDisposable
     [Fact]
     public void Csv_is_what_a_run_writes()
     {
-        using (var report = new ReportFolder(_folder.File("out"), ["AIRMASS"]))
+        using (var ledger = LedgerFile.Open(_folder.Path))
         {
-            report.Add(Examples.Full());
-            report.Add(Examples.Nothing());
-            report.Complete();
+            FilledLedger.Fill(ledger, ["AIRMASS"], Examples.Full(), Examples.Nothing());
+            CatalogueFiles.Write(ledger, _folder.Path);
         }
 
         var table = new Table<ObservationResult>("catalogue", "", CatalogueColumns.With(["AIRMASS"]), [Examples.Full(), Examples.Nothing()]);
-        Assert.Equal(File.ReadAllBytes(Path.Combine(_folder.File("out"), "catalogue.csv")), Written(table, "csv"));
+        Assert.Equal(File.ReadAllBytes(_folder.File("catalogue.csv")), Written(table, "csv"));
     }
 
     [Theory]

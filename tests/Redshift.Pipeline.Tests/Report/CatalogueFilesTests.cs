@@ -1,10 +1,12 @@
+using Redshift.Pipeline.Ledger;
 using Redshift.Pipeline.Observations;
 using Redshift.Pipeline.Report;
+using Redshift.Pipeline.Tests.Ledger;
 using Xunit;
 
 namespace Redshift.Pipeline.Tests.Report;
 
-public sealed class ReportFolderTests : IDisposable
+public sealed class CatalogueFilesTests : IDisposable
 {
     private readonly string _folder = Directory.CreateTempSubdirectory("report").FullName;
 
@@ -89,36 +91,36 @@ public sealed class ReportFolderTests : IDisposable
     public void Files_are_ascii_with_line_feeds()
     {
         Write();
-        foreach (var file in Directory.GetFiles(_folder))
+        foreach (var file in Directory.GetFiles(_folder, "*.csv"))
             Assert.DoesNotContain(File.ReadAllBytes(file), letter => letter is not (byte)'\n' and (< 0x20 or > 0x7e));
     }
 
     [Fact]
-    public void Nothing_appears_before_the_report_is_complete()
+    public void Nothing_appears_before_a_table_is_complete()
     {
-        File.WriteAllText(Path.Combine(_folder, "catalogue.csv"), "earlier");
-        using (var report = new ReportFolder(_folder, []))
-            report.Add(Examples.Full());
+        Write();
+        var before = Lines("lines.csv");
+        using var ledger = LedgerFile.Open(_folder);
+        FilledLedger.Fill(ledger, [], Examples.Full(), Examples.Nothing() with { Lines = [Examples.HAlpha()] });
 
-        Assert.Equal("earlier", File.ReadAllText(Path.Combine(_folder, "catalogue.csv")));
-        Assert.Equal(["catalogue.csv"], Directory.GetFiles(_folder).Select(Path.GetFileName));
+        Assert.Throws<OperationCanceledException>(() => CatalogueFiles.Write(ledger, _folder, new CancellationToken(canceled: true)));
+        Assert.Equal(before, Lines("lines.csv"));
+        Assert.Empty(Directory.GetFiles(_folder, "*.unfinished"));
     }
 
     [Fact]
     public void A_second_run_into_the_same_folder_is_refused()
     {
-        using var first = new ReportFolder(_folder, []);
+        using var first = new OutputFolder(_folder);
 
-        Assert.Throws<FolderInUseException>(() => new ReportFolder(_folder, []));
+        Assert.Throws<FolderInUseException>(() => new OutputFolder(_folder));
     }
 
     private void Write()
     {
-        using var report = new ReportFolder(_folder, ["AIRMASS"]);
-        report.Add(Examples.Full());
-        report.Add(Examples.Nothing());
-        report.Add(new Reject("night1/c.fits", 3, "HDU 1", "text \"x\"", "a number"));
-        report.Complete();
+        using var ledger = LedgerFile.Open(_folder);
+        FilledLedger.Fill(ledger, ["AIRMASS"], Examples.Nothing(), Examples.Full(), new Reject("night1/c.fits", 3, "HDU 1", "text \"x\"", "a number"));
+        CatalogueFiles.Write(ledger, _folder);
     }
 
     private string[] Lines(string name) => File.ReadAllText(Path.Combine(_folder, name)).Split('\n');

@@ -1,0 +1,103 @@
+using System.Threading.Channels;
+using Redshift.Pipeline.Ledger;
+using Redshift.Pipeline.Load;
+using Redshift.Pipeline.Observations;
+using Redshift.Pipeline.Settings;
+
+namespace Redshift.Pipeline.Batch;
+
+/// <summary>Reads one file after the other: what is new in it goes to the workers, what cannot be used is reported.</summary>
+/// <param name="settings">How files are read.</param>
+/// <param name="fingerprint">What the answers depend on beside the files.</param>
+/// <param name="work">Takes the spectra.</param>
+/// <param name="entries">Takes the reports.</param>
+internal sealed class FileReader(
+    LoadSettings settings, string fingerprint, ChannelWriter<PendingSpectrum> work, ChannelWriter<LedgerEntry> entries)
+{
+    /// <summary>Reads a file to its end.</summary>
+    /// <exception cref="OperationCanceledException">The token ended the run.</exception>
+    public async Task ReadAsync(FileWork item, CancellationToken token)
+    {
+        var file = new OpenFile(item.File, entries);
+        var stamp = item.File.Problem is null ? FileStamp.Of(item.File.Path) : FileStamp.None;
+        if (!TryHash(item.File, out var hash, out var problem))
+        {
+            await entries.WriteAsync(new FileBegun(file.Source, FileStamp.None, "", "", Keeps: false), token).ConfigureAwait(false);
+            await file.ReportAsync(StoredOutcome.Of(problem), 0, problem).ConfigureAwait(false);
+        }
+        else
+        {
+            var known = item.Known?.Hash == hash ? item.Known : null;
+            await entries.WriteAsync(new FileBegun(file.Source, stamp, hash, fingerprint, known is not null), token).ConfigureAwait(false);
+            file.Bytes = stamp.Size;
+            if (known is not { Complete: true })
+                await ReadSpectraAsync(item.File, file, known, token).ConfigureAwait(false);
+            if (FileStamp.Of(item.File.Path) != stamp)
+                file.Spoilt = Changed(item.File);
+        }
+
+        await file.LeaveAsync().ConfigureAwait(false);
+    }
+
+    private async Task ReadSpectraAsync(InputFile input, OpenFile file, EarlierWork? known, CancellationToken token)
+    {
+        using var reading = new FileReading(file.Source, settings);
+        if (Guarded<Reject?>(file.Source, null, () => reading.Open(input.Path), static fault => fault) is { } refused)
+        {
+            await file.ReportAsync(StoredOutcome.Of(refused), 0, refused).ConfigureAwait(false);
+            return;
+        }
+
+        var rows = Enumerable.Range(0, reading.Rows).Where(row => known?.Done.Contains(row) != true).ToList();
+        file.ShareAmong(rows.Count);
+        foreach (var row in rows)
+        {
+            token.ThrowIfCancellationRequested();
+            var (observation, reject) = Guarded(file.Source, row, () => reading.Read(row), static fault => new LoadOutcome(null, fault));
+            if (observation is null)
+                await file.ReportAsync(StoredOutcome.Of(reject!), 0, reject).ConfigureAwait(false);
+            else
+                await SendAsync(new(file, observation), token).ConfigureAwait(false);
+        }
+    }
+
+    private ValueTask SendAsync(PendingSpectrum spectrum, CancellationToken token)
+    {
+        spectrum.File.Enter();
+        return work.WriteAsync(spectrum, token);
+    }
+
+    private static bool TryHash(InputFile file, out string hash, out Reject problem)
+    {
+        (hash, problem) = ("", file.Reject!);
+        if (file.Reject is not null)
+            return false;
+        try
+        {
+            hash = ContentHash.Of(file.Path);
+            return true;
+        }
+        catch (Exception trouble) when (trouble is IOException or UnauthorizedAccessException)
+        {
+            problem = new(file.Source, null, "file", trouble.Message, "a readable file");
+            return false;
+        }
+    }
+
+    private static Reject Changed(InputFile file) => File.Exists(file.Path)
+        ? new(file.Source, null, "file", "another size or time after reading than before", "a file that nobody writes; run again when it is complete")
+        : new(file.Source, null, "file", "that it vanished while it was read", "a file that stays; run again when it is back");
+
+    // A fault of our own in one file must not cost the night: it becomes a reject that says so.
+    private static T Guarded<T>(string source, int? row, Func<T> read, Func<Reject, T> refuse)
+    {
+        try
+        {
+            return read();
+        }
+        catch (Exception problem) when (problem is not OperationCanceledException)
+        {
+            return refuse(Fault.In(source, row, "reading", problem));
+        }
+    }
+}
