@@ -13,19 +13,6 @@ internal static class Kernels
     /// <summary>All bits in the first <paramref name="count"/> lanes, none in the others.</summary>
     public static Vector256<float> Mask(int count) => Vector256.LessThan(Indices, Vector256.Create(count)).AsSingle();
 
-    /// <summary>exp(−u²/2) to some 2e-7: a power of two and a Taylor series to the sixth order about it.</summary>
-    public static Vector256<float> Gaussian(Vector256<float> u)
-    {
-        const float Ln2 = 0.69314718f;
-        var power = u * u * (-0.5f / Ln2);
-        var whole = Vector256.Floor(power + Vector256.Create(0.5f));
-        var x = (power - whole) * Ln2;
-        var one = Vector256<float>.One;
-        var series = one + x * (one + x * (Vector256.Create(1f / 2) + x * (Vector256.Create(1f / 6) + x * (Vector256.Create(1f / 24) + x * (Vector256.Create(1f / 120) + x * (1f / 720))))));
-        var exponent = Vector256.ShiftLeft(Vector256.ConvertToInt32(Vector256.Max(whole, Vector256.Create(-126f))) + Vector256.Create(127), 23);
-        return series * exponent.AsSingle();
-    }
-
     /// <summary>Σ aᵢ·bᵢ.</summary>
     public static float Dot(ReadOnlySpan<float> a, ReadOnlySpan<float> b)
     {

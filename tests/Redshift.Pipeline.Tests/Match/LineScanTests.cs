@@ -33,7 +33,7 @@ public class LineScanTests
     public void Slices_add_up_to_the_sum_over_all_cells(double sigma)
     {
         var scanned = new float[1200];
-        new LineScan(Data, sigma).Add(Group, 0, 1, scanned);
+        new LineScan(Data, sigma).Add(Group, 0, scanned);
         Gen.Int[420, scanned.Length - 1].Sample(shift =>
         {
             var expected = BruteForce(sigma, shift);
@@ -46,9 +46,8 @@ public class LineScanTests
     public void A_stride_takes_every_so_manieth_shift()
     {
         float[] all = new float[900], strided = new float[300];
-        var scan = new LineScan(Data, 0.001);
-        scan.Add(Group, 100, 1, all);
-        scan.Add(Group, 100, 3, strided);
+        new LineScan(Data, 0.001).Add(Group, 100, all);
+        new LineScan(Data, 0.001, 3).Add(Group, 100, strided);
         Assert.Equal(Enumerable.Range(0, 300).Select(s => all[3 * s]), strided);
     }
 
@@ -56,7 +55,7 @@ public class LineScanTests
     public void Planted_lines_make_the_highest_peak()
     {
         var scanned = new float[4000];
-        new LineScan(Data, Data.SigmaLn).Add(Group, 0, 1, scanned);
+        new LineScan(Data, Data.SigmaLn).Add(Group, 0, scanned);
         var best = Array.IndexOf(scanned, scanned.Max());
         Assert.Equal(Math.Log(1 + RedshiftOfLines) / Cells.Step, best, 1.0);
     }

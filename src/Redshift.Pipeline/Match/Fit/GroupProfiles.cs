@@ -66,7 +66,7 @@ internal sealed class GroupProfiles(FitPixels pixels)
         {
             var low = (Vector256.Create(pixels.LnWavelength, p) - middle) * scale;
             var high = (Vector256.Create(pixels.LnWavelength, p + 4) - middle) * scale;
-            var profile = Kernels.Gaussian(Vector256.Narrow(low, high)) * height;
+            var profile = VectorMath.Gaussian(Vector256.Narrow(low, high)) * height;
             if (end - p < Kernels.Lanes) profile &= Kernels.Mask(end - p);
             (Vector256.Create(_canvas, p) + profile).CopyTo(_canvas, p);
         }

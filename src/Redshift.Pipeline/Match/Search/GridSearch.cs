@@ -103,15 +103,18 @@ internal sealed class GridSearch
     {
         var peaks = new List<Peak>();
         var steps = ForestSteps();
-        foreach (var model in _library.Quasars.Where(m => m.Template is null))
+        foreach (var width in _library.Quasars.Where(m => m.Template is null).GroupBy(m => m.BroadKmS))
         {
             // Steps of a fifth of the line's σ lose nothing; narrow lines are left to the exact fits.
-            var stride = Math.Max(1, (int)(0.2 * model.BroadKmS / KmSPerLn / Cells.Step));
-            var total = new float[_shifts / stride];
-            for (var s = 0; s < total.Length; s++) total[s] = steps[s * stride];
-            var broad = new LineScan(_cells, Width(model.BroadKmS));
-            foreach (var group in model.Groups.Where(g => g.Broad)) broad.Add(group, _firstShift, stride, total);
-            peaks.AddRange(Highest(total, _firstShift, stride, 8, _ => model));
+            var stride = Math.Max(1, (int)(0.2 * width.Key / KmSPerLn / Cells.Step));
+            var broad = new LineScan(_cells, Width(width.Key), stride);
+            foreach (var model in width)
+            {
+                var total = new float[_shifts / stride];
+                for (var s = 0; s < total.Length; s++) total[s] = steps[s * stride];
+                foreach (var group in model.Groups.Where(g => g.Broad)) broad.Add(group, _firstShift, total);
+                peaks.AddRange(Highest(total, _firstShift, stride, 8, _ => model));
+            }
         }
 
         return [.. peaks.OrderByDescending(p => p.LnEvidence).Take(14)];
@@ -128,7 +131,7 @@ internal sealed class GridSearch
     private void AddNarrowGroups(FitModel model, float[] total, int firstShift)
     {
         var narrow = new LineScan(_cells, Width(model.NarrowKmS));
-        foreach (var group in model.Groups) narrow.Add(group, firstShift, 1, total);
+        foreach (var group in model.Groups) narrow.Add(group, firstShift, total);
     }
 
     private double Width(double kmS) => Math.Sqrt(_cells.SigmaLn * _cells.SigmaLn + kmS * kmS / (KmSPerLn * KmSPerLn));
