@@ -107,7 +107,8 @@ public sealed class MetadataTests : IDisposable
 
     [Theory]
     [InlineData(5000, 1, 0, WavelengthMedium.Air)]
-    [InlineData(1150, 50, 0, WavelengthMedium.Vacuum)]
+    [InlineData(1150, 30, 0, WavelengthMedium.Vacuum)]
+    [InlineData(1150, 150, 0, WavelengthMedium.Air)]
     [InlineData(11000, 5, 0, WavelengthMedium.Vacuum)]
     [InlineData(3.58, 1e-4, 1, WavelengthMedium.Vacuum)]
     public void Medium_that_nobody_states_follows_the_default_with_a_caution(double crval, double cdelt, long flag, WavelengthMedium expected)

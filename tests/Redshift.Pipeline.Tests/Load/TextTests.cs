@@ -49,6 +49,31 @@ public sealed class TextTests : IDisposable
     }
 
     [Fact]
+    public void Cells_left_empty_are_missing_values()
+    {
+        var lines = Enumerable.Range(0, LoadBench.Pixels).Select(static i => i switch
+        {
+            5 => $"{5000 + i},,0.5",
+            6 => $"{5000 + i},1{i % 7}.0,",
+            _ => $"{5000 + i},1{i % 7}.0,0.5",
+        });
+        var spectrum = LoadBench.One(_bench.Text("wave,flux,err\n" + string.Join('\n', lines))).Spectra[0];
+        Assert.Equal([4, 0, 0, 4], spectrum.InverseVariance[4..8].Select(static value => Math.Round(value, 9)));
+        Assert.Equal([14, 0, 16, 10], spectrum.Flux[4..8]);
+    }
+
+    [Theory]
+    [InlineData("wave,flux\n")]
+    [InlineData("wave,flux,\n")]
+    [InlineData("")]
+    public void Comma_behind_the_last_cell_adds_no_column(string head)
+    {
+        var spectrum = LoadBench.One(_bench.Text(head + Lines("{0},{1},"))).Spectra[0];
+        Assert.Equal(LoadBench.Pixels, spectrum.Count);
+        Assert.False(spectrum.HasErrors);
+    }
+
+    [Fact]
     public void Remarks_settle_medium_and_frame()
     {
         var observation = LoadBench.One(_bench.Text("# Wavelengths are in vacuum, corrected to the heliocentric frame\n" + Lines("{0} {1}")));

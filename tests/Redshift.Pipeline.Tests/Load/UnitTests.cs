@@ -79,7 +79,10 @@ public sealed class UnitTests : IDisposable
     [InlineData(1150, 1, 1)] // far ultraviolet
     [InlineData(5000, 1, 1)]
     [InlineData(843, 13, 1)] // ultraviolet, already divided by 1 + z
+    [InlineData(778, 21, 1)] // the same, to 2100
     [InlineData(370, 10, 10)]
+    [InlineData(300, 34, 10)] // from the atmosphere's end to the K band
+    [InlineData(800, 26, 10)] // infrared, with the red end of the optical
     [InlineData(846, 0.4, 10)] // the calcium triplet
     [InlineData(994, 23, 10)] // near infrared
     [InlineData(0.99, 0.02, 1e4)]
@@ -131,6 +134,20 @@ public sealed class UnitTests : IDisposable
             [ColumnDefinition.Doubles("WAVELENGTH", LoadBench.Linear(5000, 10)), ColumnDefinition.Doubles("FLUX", LoadBench.Flux()) with { Unit = unit }])).Spectra[0];
         Assert.Equal(unit, spectrum.FluxUnit);
         Assert.Equal(LoadBench.Flux(), spectrum.Flux);
+    }
+
+    [Theory]
+    [InlineData("mag")]
+    [InlineData("mag/arcsec2")]
+    [InlineData("ABmag")]
+    [InlineData("mag(ST)")]
+    [InlineData("log(erg/s/cm2/Angstrom)")]
+    [InlineData("dex")]
+    public void Magnitudes_and_logarithms_are_refused(string unit)
+    {
+        var reject = LoadBench.Refused(_bench.Fits(writer => writer.WriteTable("", LoadBench.Pixels,
+            [ColumnDefinition.Doubles("WAVELENGTH", LoadBench.Linear(5000, 10)), ColumnDefinition.Doubles("FLUX", LoadBench.Flux()) with { Unit = unit }])));
+        Assert.Equal(("HDU 1 column FLUX", $"values in {unit}"), (reject.Place, reject.Found));
     }
 
     [Fact]

@@ -21,6 +21,9 @@ internal readonly partial record struct FluxUnit(string Text, double? ErgPerSeco
     /// <summary>Factor to flux per Å at a vacuum wavelength: f(λ) = f(ν) c/λ².</summary>
     public double PerAngstrom(double angstrom) => ErgPerSecondCm2Hz!.Value * SpectralUnit.LightAngstromPerSecond / (angstrom * angstrom);
 
+    /// <summary>Whether values in the unit are logarithms, as magnitudes are, of a flux that their zero point would have to tell.</summary>
+    public static bool IsLogarithmic(string unit) => LogarithmPattern().IsMatch(unit);
+
     private static double? PerFrequency(string unit)
     {
         var lower = unit.ToLowerInvariant();
@@ -54,6 +57,9 @@ internal readonly partial record struct FluxUnit(string Text, double? ErgPerSeco
 
     [GeneratedRegex(@"(?:^|[\s\d*.\(])(M|k|m|u|µ|μ|n|micro)?(?:Jy|jy|JY|Jansky|jansky|JANSKY)", RegexOptions.CultureInvariant)]
     private static partial Regex JanskyPattern();
+
+    [GeneratedRegex(@"\b(?:AB|ST|Vega|m)?mag(?:nitude)?s?\b|^\s*(?:log(?:10)?|ln|dex)\b|^\s*dB$", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant)]
+    private static partial Regex LogarithmPattern();
 
     [GeneratedRegex(@"\bW(att)?\b", RegexOptions.CultureInvariant)]
     private static partial Regex WattPattern();

@@ -12,7 +12,7 @@ namespace Redshift.Pipeline.Load.Assembly;
 /// <param name="normalised">Whether the flux is divided by a continuum, so that its unit, if any, is a leftover.</param>
 internal sealed class SpectrumBuilder(SpectrumSources sources, WavelengthMedium medium, StatedResolution? resolution, bool normalised)
 {
-    private readonly FluxUnit _unit = normalised ? new("", null) : FluxUnit.Parse(sources.Flux.Label.Unit);
+    private readonly FluxUnit _unit = normalised ? new("", null) : UnitOf(sources.Flux);
     private WavelengthGrid? _shared;
 
     /// <summary>Whether another resolution than the column or matrix of the file is used.</summary>
@@ -33,6 +33,10 @@ internal sealed class SpectrumBuilder(SpectrumSources sources, WavelengthMedium 
             .Select((run, i) => Build(run, Label(i, grid.Runs.Count), flux, inverseVariance, hasErrors, fwhm))
             .Where(IsUsable)];
     }
+
+    private static FluxUnit UnitOf(NumberArray flux) => FluxUnit.IsLogarithmic(flux.Label.Unit)
+        ? throw new LoadException(flux.Place, $"values in {flux.Label.Unit}", "a flux, counts or a normalised intensity, but no magnitudes or logarithms")
+        : FluxUnit.Parse(flux.Label.Unit);
 
     private static LoadException Unequal(WavelengthSource wavelength, int wavelengths, int fluxes) =>
         new(wavelength.Place, $"{wavelengths} wavelengths for {fluxes} fluxes", "as many of one as of the other");

@@ -10,6 +10,9 @@ internal static partial class MediumFinder
     /// <summary>Spectroscopists give wavelengths below these 2000 Å in vacuum, and whoever observes there is above the air.</summary>
     public const double AirBegins = 2000;
 
+    // The ozone of the atmosphere lets nothing shorter through: a spectrum that ends below was taken from space.
+    private const double AtmosphereBegins = 3200;
+
     // Sky lines and lamps beyond 9500 Å are tabulated in vacuum by most infrared pipelines.
     private const double InfraredBegins = 9500;
 
@@ -27,11 +30,12 @@ internal static partial class MediumFinder
 
     /// <summary>The default for a file that does not state its medium, with the reason.</summary>
     /// <param name="shortest">Shortest wavelength in Å.</param>
+    /// <param name="longest">Longest wavelength in Å.</param>
     /// <param name="isLogarithmic">Whether the axis is equidistant in the logarithm, as coadded surveys write it.</param>
     /// <param name="listsWavelengths">Whether wavelengths are listed in a binary table or array.</param>
-    public static (WavelengthMedium Medium, string Why) Default(double shortest, bool isLogarithmic, bool listsWavelengths)
+    public static (WavelengthMedium Medium, string Why) Default(double shortest, double longest, bool isLogarithmic, bool listsWavelengths)
     {
-        if (shortest < AirBegins) return (WavelengthMedium.Vacuum, "assumed: it begins below 2000 A");
+        if (longest < AtmosphereBegins) return (WavelengthMedium.Vacuum, "assumed: it ends before the atmosphere lets light through");
         if (shortest > InfraredBegins) return (WavelengthMedium.Vacuum, "assumed: it lies in the infrared");
         if (isLogarithmic) return (WavelengthMedium.Vacuum, "assumed: the axis is logarithmic");
         return listsWavelengths

@@ -19,8 +19,9 @@ internal static class WavelengthGuess
     /// <summary>Whether values said to be in Å can only be the decimal logarithm of it.</summary>
     public static bool LooksLogarithmic(double low, double high) => low >= LowestLogarithm && high <= HighestLogarithm && high - low < 1.3;
 
-    // Spectra in Å hardly begin below the Lyman limit at 912; those in nm end before 2600 on the ground. From 800 to 1300 it is a
-    // toss: a range that crosses the border between red and infrared detectors at 1050 nm is an ultraviolet one in Å.
+    // Spectra in Å hardly begin below the Lyman limit at 912; those in nm end before 2600 on the ground. From 600 to 1300 it is a
+    // toss: a range that crosses the border between red and infrared detectors at 1050 nm, but does not reach the end of the K band
+    // at 2300 nm, is an ultraviolet one in Å.
     private static bool LooksNanometre(double low, double high) =>
-        high <= 2600 && (low < 800 || (low < 900 && high < 1300) || (low < 1100 && high > 1800));
+        high <= 2600 && (low < 600 || (low < 900 && high is < 1300 or > 2300) || (low is >= 900 and < 1100 && high > 1800));
 }

@@ -29,9 +29,16 @@ internal sealed class LineCollector
     /// <exception cref="LoadException">There were no numbers.</exception>
     public TextTable ToTable()
     {
+        DropEmptyColumns();
         if (_columns.Count > 0) return HeaderLines.Assemble(_columns, _names, _units, _remarks);
         var found = _names is null ? "no line of numbers" : $"no line of numbers, but '{Shown(string.Join(' ', _names))}'";
         throw new LoadException("text", found, "columns of numbers, or a FITS file");
+    }
+
+    // A separator at the end of every line begins a column that nobody names or fills.
+    private void DropEmptyColumns()
+    {
+        while (_columns.Count > (_names?.Length ?? 0) && _columns[^1].TrueForAll(double.IsNaN)) _columns.RemoveAt(_columns.Count - 1);
     }
 
     private void AddOther(string line)

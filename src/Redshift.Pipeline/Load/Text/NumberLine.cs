@@ -8,12 +8,15 @@ internal static partial class NumberLine
 {
     private static readonly char[] Blanks = [' ', '\t', '\r', '\f', '\u00a0'];
 
-    /// <summary>The fields of a line: split at commas, semicolons or bars where there are any, else at blanks.</summary>
+    /// <summary>
+    /// The fields of a line: split at commas, semicolons or bars where there are any, else at blanks. Between separators a field can
+    /// be empty; bars at the ends are a frame.
+    /// </summary>
     public static string[] Fields(string line)
     {
         foreach (var separator in (ReadOnlySpan<char>)[';', '|', ','])
             if (line.Contains(separator, StringComparison.Ordinal))
-                return [.. line.Trim().Trim(separator).Split(separator).Select(static field => field.Trim().Trim('"'))];
+                return [.. line.Trim().Trim('|').Split(separator).Select(static field => field.Trim().Trim('"'))];
         return line.Split(Blanks, StringSplitOptions.RemoveEmptyEntries);
     }
 
