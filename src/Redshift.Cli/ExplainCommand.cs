@@ -52,15 +52,15 @@ internal sealed class ExplainCommand
         if (!File.Exists(path))
             throw new UsageException($"there is no file {path}");
         var (observation, reject) = Find(SpectrumLoader.Load(path, HarmlessText.ForTable(Path.GetFileName(path)), settings.Load), row);
+        if (parsed.GetValue(_layout))
+            PrintLayout(observation, SpectrumLoader.Describe(path, row, settings.Load), parsed.GetValue(_json));
         if (observation is null)
         {
             Console.Error.WriteLine("rejected: " + HarmlessText.Printable(reject!.ToString()));
             return ExitCode.Unusable;
         }
 
-        if (parsed.GetValue(_layout))
-            PrintLayout(observation, parsed.GetValue(_json));
-        else
+        if (!parsed.GetValue(_layout))
             Explain(parsed, new ObservationPipeline(settings).Analyze(observation), settings.Load.Keep);
         return ExitCode.Done;
     }
@@ -78,12 +78,12 @@ internal sealed class ExplainCommand
         throw new UsageException($"there is no row {row}: the file holds {count} {(count == 1 ? "spectrum" : "spectra")}, counted from 0");
     }
 
-    private static void PrintLayout(Observation observation, bool json)
+    private static void PrintLayout(Observation? observation, FileDescription file, bool json)
     {
         if (json)
-            Console.WriteLine(ExplanationJson.BuildLayout(observation));
+            Console.WriteLine(ExplanationJson.BuildLayout(observation, file));
         else
-            Explanation.WriteLayout(Console.Out, observation);
+            Explanation.WriteLayout(Console.Out, observation, file);
     }
 
     private void Explain(ParseResult parsed, Pipeline.Results.ObservationResult result, IReadOnlyList<string> keep)

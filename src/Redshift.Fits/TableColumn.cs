@@ -10,14 +10,13 @@ namespace Redshift.Fits;
 /// </summary>
 public sealed class TableColumn
 {
-    private readonly TableHdu _table;
     private readonly ColumnShape _shape;
     private readonly ColumnCells _cells;
     private readonly Scaling _scaling;
 
     internal TableColumn(TableHdu table, int index, ColumnShape shape, ColumnCells cells, Scaling scaling)
     {
-        _table = table;
+        Table = table;
         _shape = shape;
         _cells = cells;
         _scaling = scaling;
@@ -26,6 +25,9 @@ public sealed class TableColumn
         var axes = Fits.Dimensions.TryParse(Text("TDIM"));
         Dimensions = axes is not null && (IsVariableLength || Fits.Dimensions.Fit(axes, Repeat)) ? axes : [Repeat];
     }
+
+    /// <summary>The table it is a column of.</summary>
+    public TableHdu Table { get; }
 
     /// <summary>0-based place in the table.</summary>
     public int Index { get; }
@@ -94,8 +96,8 @@ public sealed class TableColumn
     public double[] ReadColumn()
     {
         RequireScalar();
-        if (_table.RowCount > Array.MaxLength) throw Unsupported("has more rows than an array can hold");
-        var values = new double[_table.RowCount];
+        if (Table.RowCount > Array.MaxLength) throw Unsupported("has more rows than an array can hold");
+        var values = new double[Table.RowCount];
         ReadColumn(0, values);
         return values;
     }
@@ -177,9 +179,9 @@ public sealed class TableColumn
 
     internal Window ViewCell(long row) => _cells.ViewCell(row);
 
-    private string? Text(string stem) => _table.Header.GetString(Keywords.Indexed(stem, Index + 1));
+    private string? Text(string stem) => Table.Header.GetString(Keywords.Indexed(stem, Index + 1));
 
-    private Card? Card(string stem) => _table.Header.Find(Keywords.Indexed(stem, Index + 1));
+    private Card? Card(string stem) => Table.Header.Find(Keywords.Indexed(stem, Index + 1));
 
     private int StringLength(int cell)
     {
@@ -218,11 +220,11 @@ public sealed class TableColumn
 
     private void RequireRows(long first, int count)
     {
-        if (first >= 0 && first <= _table.RowCount - count) return;
+        if (first >= 0 && first <= Table.RowCount - count) return;
         throw new ArgumentOutOfRangeException(
-            nameof(first), string.Create(CultureInfo.InvariantCulture, $"{count} rows from {first} are outside the {_table.RowCount} of the table"));
+            nameof(first), string.Create(CultureInfo.InvariantCulture, $"{count} rows from {first} are outside the {Table.RowCount} of the table"));
     }
 
     private FitsUnsupportedException Unsupported(string what) =>
-        new(_table.Layout.Where, string.Create(CultureInfo.InvariantCulture, $"column {Index + 1} '{Name}' {what}"));
+        new(Table.Layout.Where, string.Create(CultureInfo.InvariantCulture, $"column {Index + 1} '{Name}' {what}"));
 }

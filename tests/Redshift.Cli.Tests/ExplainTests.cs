@@ -34,6 +34,30 @@ public sealed class ExplainTests : IDisposable
     }
 
     [Fact]
+    public void Rule_that_the_layout_prints_can_be_pasted()
+    {
+        _folder.WriteFits("odd.fits", "INSTRUME= 'Prism 3'");
+        var first = Zladder.Run("explain", _folder.At("odd.fits"), "--layout").Output;
+        var pipeline = _folder.Out("pasted.toml");
+        File.WriteAllText(pipeline, first[first.IndexOf("[[load]]", StringComparison.Ordinal)..]);
+        var again = Zladder.Run("explain", _folder.At("odd.fits"), "--layout", "--pipeline", pipeline).Output;
+
+        Assert.Contains("when = { INSTRUME = \"Prism 3\" }\nwavelength = \"HDU 0 axis\"\nflux = \"HDU 0\"\n", first, StringComparison.Ordinal);
+        Assert.Equal(first[first.IndexOf("[[load]]", StringComparison.Ordinal)..], again[again.IndexOf("[[load]]", StringComparison.Ordinal)..]);
+    }
+
+    [Fact]
+    public void Layout_of_a_file_that_is_refused_shows_what_it_holds()
+    {
+        _folder.WriteFits("sky.fits", "BUNIT   = 'mag'");
+        var outcome = Zladder.Run("explain", _folder.At("sky.fits"), "--layout");
+
+        Assert.Equal(4, outcome.Status);
+        Assert.StartsWith("What the file holds\n  HDU 0  image of ", outcome.Output, StringComparison.Ordinal);
+        Assert.StartsWith("rejected: sky.fits: HDU 0: found values in mag; expected a flux", outcome.Errors, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void A_file_that_is_no_spectrum_is_status_4_with_the_reason()
     {
         var outcome = Zladder.Run("explain", _folder.At("notes.md"));

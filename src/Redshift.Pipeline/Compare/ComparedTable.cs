@@ -2,6 +2,7 @@ using System.Globalization;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Load.Metadata;
 using Redshift.Pipeline.Report;
+using Redshift.Pipeline.Settings;
 
 namespace Redshift.Pipeline.Compare;
 
@@ -77,7 +78,7 @@ public sealed class ComparedTable : IDisposable
     {
         string Text(int column) => column < 0 ? "" : HarmlessText.ForTable(cells[column]);
         double? Number(int column) => column < 0 ? null : ReadNumber(place, _file.Names[column], cells[column]);
-        double? Angle(int column, Func<string, string, double?> read) => column < 0 ? null : ReadAngle(place, _file.Names[column], cells[column], read);
+        double? Angle(int column, Func<string, AngleUnit, double?> read) => column < 0 ? null : ReadAngle(place, _file.Names[column], cells[column], read);
         return new()
         {
             Source = Text(_source),
@@ -101,11 +102,11 @@ public sealed class ComparedTable : IDisposable
             : throw Wrong(place, column, text, "a number, or nothing");
     }
 
-    private double? ReadAngle(string place, string column, string text, Func<string, string, double?> read)
+    private double? ReadAngle(string place, string column, string text, Func<string, AngleUnit, double?> read)
     {
         if (text.Length == 0)
             return null;
-        return read(text, "") ?? throw Wrong(place, column, text, "an angle in degrees, or sexagesimal such as 12:29:06.7 or +02:03:08");
+        return read(text, AngleUnit.Degree) ?? throw Wrong(place, column, text, "an angle in degrees, or sexagesimal such as 12:29:06.7 or +02:03:08");
     }
 
     private double? Redshift(string place, double? z) => z is <= -1

@@ -1,8 +1,3 @@
-using Redshift.Fits;
-using Redshift.Pipeline.Load.Assembly;
-using Redshift.Pipeline.Load.Layouts;
-using Redshift.Pipeline.Load.Metadata;
-using Redshift.Pipeline.Load.Text;
 using Redshift.Pipeline.Observations;
 using Redshift.Pipeline.Settings;
 
@@ -25,5 +20,16 @@ public static class SpectrumLoader
             yield break;
         }
         for (var row = 0; row < reading.Rows; row++) yield return reading.Read(row);
+    }
+
+    /// <summary>Says what a file holds and how it is read, for a person who wants to write a rule for it.</summary>
+    /// <param name="path">Where the file is.</param>
+    /// <param name="row">Which of its observations.</param>
+    /// <param name="settings">What the pipeline file says about reading.</param>
+    public static FileDescription Describe(string path, int row, LoadSettings settings)
+    {
+        using var reading = new FileReading(path, settings);
+        var refused = reading.Open(path);
+        return new(reading.Contents(), refused is null && row < reading.Rows ? reading.Rule(row) : null);
     }
 }

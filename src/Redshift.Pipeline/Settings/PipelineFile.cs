@@ -7,10 +7,10 @@ namespace Redshift.Pipeline.Settings;
 public static class PipelineFile
 {
     // Limits beyond which a value is a slip of the pen: prisms have R = 30, the finest spectrographs 200,000.
-    private const double LowestResolution = 10;
-    private const double HighestResolution = 1e6;
-    private const double LowestFwhmA = 1e-3;
-    private const double HighestFwhmA = 1000;
+    internal const double LowestResolution = 10;
+    internal const double HighestResolution = 1e6;
+    internal const double LowestFwhmA = 1e-3;
+    internal const double HighestFwhmA = 1000;
 
     /// <summary>Reads a file.</summary>
     /// <exception cref="SettingsException">The file cannot be read, or says something that cannot be used.</exception>
@@ -36,7 +36,7 @@ public static class PipelineFile
     {
         var root = new SectionReader(TomlNode.Parse(text, file));
         var read = root.Section("read");
-        var rules = root.Sections("load").Select(ReadRule).ToList();
+        var rules = root.Sections("load").Select(LoadRuleReader.Read).ToList();
         var match = root.Section("match");
         root.RejectOthers();
         return new()
@@ -59,29 +59,6 @@ public static class PipelineFile
         section.NotBoth("resolution", "fwhm_a");
         section.RejectOthers();
         return settings;
-    }
-
-    private static LoadRule ReadRule(SectionReader section)
-    {
-        var rule = new LoadRule
-        {
-            When = section.Pairs("when"),
-            Hdu = section.TextOrInteger("hdu"),
-            Wavelength = section.Text("wavelength"),
-            WavelengthUnit = section.Text("wavelength_unit"),
-            Flux = section.Text("flux"),
-            Error = section.Text("error"),
-            InverseVariance = section.Text("inverse_variance"),
-            Mask = section.Text("mask"),
-            Medium = section.Choice("medium", Words.Media),
-            Frame = section.Choice("frame", Words.Frames),
-            Resolution = section.Number("resolution", LowestResolution, HighestResolution),
-            FwhmA = section.Number("fwhm_a", LowestFwhmA, HighestFwhmA),
-        };
-        section.NotBoth("resolution", "fwhm_a");
-        section.NotBoth("error", "inverse_variance");
-        section.RejectOthers();
-        return rule;
     }
 
     private static MatchSettings ReadMatch(SectionReader section)

@@ -35,46 +35,6 @@ public sealed record LoadSettings
     public IReadOnlyList<LoadRule> Rules { get; init; } = [];
 }
 
-/// <summary>Spells out the roles of an odd file; chosen by header values.</summary>
-public sealed record LoadRule
-{
-    /// <summary>Header keywords and the values they must have; empty matches all files.</summary>
-    public IReadOnlyDictionary<string, string> When { get; init; } = new Dictionary<string, string>();
-
-    /// <summary>HDU index or EXTNAME that holds the spectrum.</summary>
-    public string? Hdu { get; init; }
-
-    /// <summary>Column, image row (<c>row 0</c>) or HDU with the wavelength.</summary>
-    public string? Wavelength { get; init; }
-
-    /// <summary>Unit of the wavelength, e.g. <c>nm</c> or <c>log10(Angstrom)</c>.</summary>
-    public string? WavelengthUnit { get; init; }
-
-    /// <summary>Column, image row or HDU with the flux.</summary>
-    public string? Flux { get; init; }
-
-    /// <summary>Column, image row or HDU with the error.</summary>
-    public string? Error { get; init; }
-
-    /// <summary>Column, image row or HDU with the inverse variance.</summary>
-    public string? InverseVariance { get; init; }
-
-    /// <summary>Column, image row or HDU with the mask; non-zero is bad.</summary>
-    public string? Mask { get; init; }
-
-    /// <summary>Medium of the wavelengths.</summary>
-    public WavelengthMedium? Medium { get; init; }
-
-    /// <summary>Frame of the wavelengths.</summary>
-    public VelocityFrame? Frame { get; init; }
-
-    /// <summary>Resolving power.</summary>
-    public double? Resolution { get; init; }
-
-    /// <summary>Instrumental FWHM in Å.</summary>
-    public double? FwhmA { get; init; }
-}
-
 /// <summary>What the match stage searches, and how much it expects it.</summary>
 public sealed record MatchSettings
 {

@@ -22,6 +22,10 @@ internal sealed class SectionReader(TomlNode table)
         ? number.ToString(CultureInfo.InvariantCulture)
         : Text(key);
 
+    /// <summary>A number within limits, or a text.</summary>
+    public (double? Number, string? Text) NumberOrText(string key, double low, double high) =>
+        Find(key) is { Value: string } ? (null, Text(key)) : (Number(key, low, high), null);
+
     /// <summary>One of several words.</summary>
     public T? Choice<T>(string key, IReadOnlyDictionary<string, T> words) where T : struct
     {
@@ -73,12 +77,22 @@ internal sealed class SectionReader(TomlNode table)
         return section.Keys.ToDictionary(pair => pair.Key, pair => section.TextOrInteger(pair.Key)!);
     }
 
-    /// <summary>Refuses two keys that say the same thing in two ways.</summary>
-    public void NotBoth(string first, string second)
+    /// <summary>Refuses keys that say the same thing in several ways.</summary>
+    public void NotBoth(params string[] keys)
     {
-        if (Keys.ContainsKey(first) && Keys.TryGetValue(second, out var node))
-            throw node.Unlike($"only one of {first} and {second}", "both");
+        if (keys.Where(Keys.ContainsKey).ToList() is [var first, var second, ..])
+            throw Keys[second].Unlike($"only one of {first} and {second}", "both");
     }
+
+    /// <summary>Refuses one of two keys without the other.</summary>
+    public void Together(string first, string second)
+    {
+        if (Keys.ContainsKey(first) != Keys.ContainsKey(second))
+            throw (Keys.GetValueOrDefault(first) ?? Keys[second]).Unlike($"both {first} and {second}", "only one of them");
+    }
+
+    /// <summary>The error that a key is missing.</summary>
+    public SettingsException Without(string key) => table.Unlike($"a table with the key {key}", "none");
 
     /// <summary>Refuses every key that nobody has asked for.</summary>
     /// <exception cref="SettingsException">There is one; the nearest known key is named.</exception>

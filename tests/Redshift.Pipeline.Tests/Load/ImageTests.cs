@@ -66,6 +66,21 @@ public sealed class ImageTests : IDisposable
         Assert.Equal([4, 4, 4, 4, 0, 4], observation.Spectra[0].InverseVariance[..6]);
     }
 
+    [Theory]
+    [InlineData("AIRORVAC", "air", WavelengthMedium.Air)]
+    [InlineData("CTYPE1", "AWAV", WavelengthMedium.Air)]
+    [InlineData("CTYPE1", "WAVE", WavelengthMedium.Vacuum)]
+    [InlineData("COMMENT", "vacuum wavelengths", WavelengthMedium.Vacuum)]
+    public void Medium_and_frame_are_looked_for_beside_the_wavelengths(string keyword, string text, WavelengthMedium expected)
+    {
+        var observation = _bench.One(writer =>
+        {
+            writer.WriteImage("FLUX", LoadBench.Flux(), [N]);
+            writer.WriteImage("WAVELENGTH", LoadBench.Linear(5000, 10), [N], [keyword == "COMMENT" ? Card.Commentary(keyword, text) : Card.Of(keyword, text), Card.Of("SPECSYS", "BARYCENT")]);
+        });
+        Assert.Equal((expected, false, VelocityFrame.Barycentric), (observation.Medium, observation.MediumAssumed, observation.Frame));
+    }
+
     [Fact]
     public void Three_arms_with_matrices_are_one_observation_a_row()
     {

@@ -45,7 +45,54 @@ internal sealed class LoadBench : IDisposable
         return Path(path);
     }
 
-    public IReadOnlyList<LoadOutcome> Path(string path) => [.. SpectrumLoader.Load(path, "night/spectrum.fits", Settings)];
+    /// <summary>Loads and describes a file of hostile bytes.</summary>
+    public IReadOnlyList<LoadOutcome> Damaged(byte[] bytes)
+    {
+        var path = _folder.File("damaged.fits");
+        File.WriteAllBytes(path, bytes);
+        _ = SpectrumLoader.Describe(path, 0, Settings);
+        return Load(path, Settings);
+    }
+
+    /// <summary>Loads a file, and again by the rule that describes how it was read: both readings must be the same.</summary>
+    public IReadOnlyList<LoadOutcome> Path(string path)
+    {
+        var outcomes = Load(path, Settings);
+        if (SpectrumLoader.Describe(path, 0, Settings).Rule is not { } rule) return outcomes;
+        var pasted = Settings with { Rules = PipelineFile.Parse(rule, "pasted.toml").Load.Rules };
+        AssertSame(outcomes, Load(path, pasted), rule);
+        return outcomes;
+    }
+
+    private static IReadOnlyList<LoadOutcome> Load(string path, LoadSettings settings) => [.. SpectrumLoader.Load(path, "night/spectrum.fits", settings)];
+
+    private static void AssertSame(IReadOnlyList<LoadOutcome> expected, IReadOnlyList<LoadOutcome> actual, string rule)
+    {
+        Assert.True(expected.Count == actual.Count, $"{actual.Count} outcomes instead of {expected.Count} by\n{rule}{actual[0].Reject}");
+        foreach (var (one, other) in expected.Zip(actual))
+        {
+            Assert.Equal(one.Reject?.Row, other.Reject?.Row);
+            Assert.True(one.Reject is null == other.Reject is null, $"{other.Reject} by\n{rule}");
+            if (one.Observation is { } before) AssertSame(before, other.Observation!, rule);
+        }
+    }
+
+    private static void AssertSame(Observation before, Observation after, string rule)
+    {
+        var (facts, again) = (before with { Spectra = [], Notes = [], Kept = [], Cautions = [] }, after with { Spectra = [], Notes = [], Kept = [], Cautions = [] });
+        Assert.True(facts == again, $"{again}\ninstead of\n{facts}\nby\n{rule}");
+        Assert.Equal(before.Cautions, after.Cautions);
+        Assert.Equal(before.Kept, after.Kept);
+        Assert.Equal(before.Spectra.Select(static one => one.Label), after.Spectra.Select(static one => one.Label));
+        foreach (var (one, other) in before.Spectra.Zip(after.Spectra))
+        {
+            Assert.True(one.Wavelength.SequenceEqual(other.Wavelength), $"other wavelengths by\n{rule}");
+            Assert.True(one.Flux.SequenceEqual(other.Flux), $"another flux by\n{rule}");
+            Assert.True(one.InverseVariance.SequenceEqual(other.InverseVariance), $"other errors by\n{rule}");
+            Assert.Equal(one.FwhmKmS, other.FwhmKmS);
+            Assert.Equal((one.HasErrors, one.FluxUnit, one.ResolutionFrom), (other.HasErrors, other.FluxUnit, other.ResolutionFrom));
+        }
+    }
 
     public Observation One(Action<FitsWriter> write) => One(Fits(write));
 

@@ -122,6 +122,13 @@ internal static class Examples
         Cautions = ["rival-redshift", "word-without-advice"],
     };
 
+    public static FileDescription File() => new(
+    [
+        new("HDU 1 COADD", "table of 4000 rows and 2 columns", ""),
+        new("HDU 1 column LOGLAM", "double", "looks like wavelength by name LOGLAM"),
+        new("HDU 1 column FLUX", "single", "looks like flux by name FLUX, in erg/s/cm2/A"),
+    ], "[[load]]\nflux = \"HDU 1 column FLUX\"\n");
+
     public static Observation Read() => Observation() with
     {
         Notes =

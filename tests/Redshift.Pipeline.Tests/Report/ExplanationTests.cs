@@ -19,7 +19,7 @@ public sealed class ExplanationTests
     public void Layout_is_as_approved()
     {
         using var output = new StringWriter { NewLine = "\n" };
-        Explanation.WriteLayout(output, Examples.Read());
+        Explanation.WriteLayout(output, Examples.Read(), Examples.File());
         Check(output.ToString(), "layout.txt");
     }
 

@@ -33,8 +33,18 @@ public sealed class PipelineFileTests
             frame = "rest"
             fwhm_a = 2.5
 
+            [[load.arm]]
+            name = "blue"
+            resolution = "HDU 4"
+            [[load.arm]]
+            name = "red"
+            resolution = 900
+
             [[load]]
             inverse_variance = "IVAR"
+            ra = "X"
+            dec = "Y"
+            angle_unit = "radian"
 
             [match]
             expect = "nebula"
@@ -52,7 +62,8 @@ public sealed class PipelineFileTests
         Assert.Equal(("1", "row 0", "nm"), (rule.Hdu, rule.Wavelength, rule.WavelengthUnit));
         Assert.Equal(("FLUX", "SIGMA", "BAD", 2.5), (rule.Flux, rule.Error, rule.Mask, rule.FwhmA));
         Assert.Equal((WavelengthMedium.Vacuum, VelocityFrame.Rest), (rule.Medium, rule.Frame));
-        Assert.Equal("IVAR", settings.Load.Rules[1].InverseVariance);
+        Assert.Equal([("blue", null, "HDU 4"), ("red", 900, null)], rule.Arms.Select(static arm => (arm.Name, arm.Resolution, arm.ResolutionPlace)));
+        Assert.Equal(("IVAR", AngleUnit.Radian), (settings.Load.Rules[1].InverseVariance, settings.Load.Rules[1].AngleUnit));
         Assert.Equal((ObjectKind.Nebula, 0.0, 1.5, 3.0), (settings.Match.Expect, settings.Match.ZMin, settings.Match.ZMax, settings.Match.PriorQuasar));
     }
 
@@ -72,6 +83,11 @@ public sealed class PipelineFileTests
     [InlineData("read = 5", 1, 8, "the number 5", "a table")]
     [InlineData("[load]\nhdu = 1", 1, 1, "a table", "a list of tables, written [[load]]")]
     [InlineData("[[load]]\nwhen = { INSTRUME = 2.5 }", 2, 21, "the number 2.5", "a text in quotes")]
+    [InlineData("[[load]]\nerror = \"A\"\nvariance = \"B\"", 3, 12, "both", "only one of error and variance")]
+    [InlineData("[[load]]\nmask = \"A\"\ngood = \"B\"", 3, 8, "both", "only one of mask and good")]
+    [InlineData("[[load]]\nra = \"A\"", 2, 6, "only one of them", "both ra and dec")]
+    [InlineData("[[load]]\n[[load.arm]]\nresolution = 500", 2, 1, "none", "a table with the key name")]
+    [InlineData("[[load]]\nresolution = 5", 2, 14, "the number 5", "a number from 10 to 1000000")]
     [InlineData("[match]\nz_range = [1.5, 0.2]", 2, 11, "[1.5, 0.2]", "the lower number first")]
     [InlineData("[match]\nz_range = [0, 20]", 2, 15, "the number 20", "a number from -0.01 to 7.5")]
     [InlineData("[match]\nz_range = 0.5", 2, 11, "the number 0.5", "two numbers")]

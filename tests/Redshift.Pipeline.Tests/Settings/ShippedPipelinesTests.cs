@@ -23,7 +23,8 @@ public sealed class ShippedPipelinesTests
 
         Assert.Equal(2000, settings.Load.Resolution);
         Assert.Equal(VelocityFrame.Topocentric, settings.Load.Frame);
-        Assert.Equal("SIGMA", Assert.Single(settings.Load.Rules).Error);
+        var rule = Assert.Single(settings.Load.Rules);
+        Assert.Equal(("SIGMA", "blue"), (rule.Error, Assert.Single(rule.Arms).Name));
         Assert.Equal(ObjectKind.Galaxy, settings.Match.Expect);
     }
 

@@ -11,10 +11,11 @@ internal static class FrameChoice
     /// <summary>Settles the frame of a layout.</summary>
     public static Setting<VelocityFrame> Make(Layout layout, LoadSettings settings, LoadRule? rule)
     {
-        if ((settings.Frame ?? rule?.Frame) is { } given) return new(given, false, "the pipeline file");
+        if ((rule?.Frame ?? settings.Frame) is { } given) return new(given, false, "the pipeline file");
         foreach (var remark in layout.Remarks)
             if (FrameFinder.FromText(remark) is { } frame) return new(frame, false, $"the remark '{remark.Trim()}'");
-        var (found, where) = FrameFinder.Find(layout.Header);
-        return new(found, found == VelocityFrame.Unknown, where);
+        foreach (var header in layout.WavelengthHeaders)
+            if (FrameFinder.Find(header) is var (found, where)) return new(found, false, where);
+        return new(VelocityFrame.Unknown, true, "nothing states it");
     }
 }

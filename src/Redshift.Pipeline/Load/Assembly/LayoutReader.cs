@@ -1,6 +1,7 @@
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Load.Layouts;
 using Redshift.Pipeline.Load.Metadata;
+using Redshift.Pipeline.Load.Rules;
 using Redshift.Pipeline.Load.SpectralAxis;
 using Redshift.Pipeline.Observations;
 using Redshift.Pipeline.Report;
@@ -12,6 +13,7 @@ namespace Redshift.Pipeline.Load.Assembly;
 internal sealed class LayoutReader
 {
     private readonly Layout _layout;
+    private readonly LoadRule? _rule;
     private readonly string _source;
     private readonly ObservationFacts _facts;
     private readonly Setting<WavelengthMedium> _medium;
@@ -25,11 +27,12 @@ internal sealed class LayoutReader
     public LayoutReader(Layout layout, string source, LoadSettings settings, LoadRule? rule)
     {
         _layout = layout;
+        _rule = rule;
         _source = source;
-        _facts = ObservationFacts.Read(layout.Header, settings);
+        _facts = ObservationFacts.Read(layout.Header, settings, rule);
         _medium = MediumChoice.Make(layout, settings, rule);
         _frame = FrameChoice.Make(layout, settings, rule);
-        var resolution = ResolutionFinder.Find(layout.Header, settings, rule);
+        var resolution = ResolutionFinder.Find(layout.Header, settings);
         var normalised = IsNormalised(layout);
         _builders = [.. layout.Spectra.Select(sources => new SpectrumBuilder(sources, _medium.Value, resolution, normalised))];
         _cautions = [.. Cautions()];
@@ -74,12 +77,15 @@ internal sealed class LayoutReader
         };
     }
 
+    /// <summary>The load rule that gives the same reading.</summary>
+    /// <param name="unitName">Name of the unit, where several of one name give a layout each; else null.</param>
+    public string Rule(string? unitName) => RuleText.Write(_layout, _rule, unitName, _medium, _frame);
+
     private IEnumerable<string> Cautions()
     {
         if (_medium.Assumed) yield return "check-medium";
         if (_frame.Value == VelocityFrame.Unknown) yield return "check-frame";
         if (_layout.Spectra.Any(static spectrum => spectrum.Wavelength.IsUnitAssumed)) yield return "check-wavelength-unit";
-        foreach (var caution in _layout.Cautions) yield return caution;
     }
 
     private LoadException Unusable() => new(

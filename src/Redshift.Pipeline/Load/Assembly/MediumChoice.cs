@@ -11,10 +11,12 @@ internal static class MediumChoice
     /// <summary>Settles the medium of a layout.</summary>
     public static Setting<WavelengthMedium> Make(Layout layout, LoadSettings settings, LoadRule? rule)
     {
-        if ((settings.Medium ?? rule?.Medium) is { } given) return new(given, false, "the pipeline file");
+        if ((rule?.Medium ?? settings.Medium) is { } given) return new(given, false, "the pipeline file");
         var wavelength = layout.Spectra[0].Wavelength;
         if (wavelength.Medium is { } own) return new(own, false, $"the coordinate itself ({wavelength.Place})");
-        if (MediumFinder.Stated(layout.Header) is { } stated) return new(stated.Medium, false, stated.Where);
+        if (layout.WavelengthHeader is { } listed && MediumFinder.OfType(listed) is { } typed) return new(typed, false, "CTYPE1 of the wavelengths");
+        foreach (var header in layout.WavelengthHeaders)
+            if (MediumFinder.Stated(header) is { } stated) return new(stated.Medium, false, stated.Where);
         foreach (var remark in layout.Remarks)
             if (MediumFinder.FromText(remark) is { } medium) return new(medium, false, $"the remark '{remark.Trim()}'");
         return Default(layout);
@@ -24,7 +26,7 @@ internal static class MediumChoice
     {
         var (shortest, longest) = Range(layout);
         if (longest < MediumFinder.AirBegins) return new(WavelengthMedium.Vacuum, false, "the convention below 2000 A");
-        var logarithmic = layout.Spectra[0].Wavelength.Unit.BeginsWithAny("log");
+        var logarithmic = layout.Spectra[0].Wavelength.Unit?.BeginsWithAny("log") == true;
         var (medium, why) = MediumFinder.Default(shortest, longest, logarithmic, layout.ListsWavelengths);
         return new(medium, true, why);
     }

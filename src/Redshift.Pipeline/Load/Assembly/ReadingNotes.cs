@@ -12,11 +12,12 @@ internal static class ReadingNotes
     {
         var spectrum = layout.Spectra[0];
         yield return new("wavelength", spectrum.Wavelength.Place, spectrum.Wavelength.Why);
-        yield return new("wavelength_unit", spectrum.Wavelength.Unit, spectrum.Wavelength.IsUnitAssumed ? "assumed" : "stated");
+        if (spectrum.Wavelength.Unit is { } unit)
+            yield return new("wavelength_unit", unit, spectrum.Wavelength.IsUnitAssumed ? "assumed" : "stated");
         yield return new("flux", spectrum.Flux.Place, Reason(spectrum.Flux));
         if (spectrum.Noise is { } noise) yield return new(NameOf(noise.Role), noise.Values.Place, Reason(noise.Values));
         else yield return new("error", "none", "nothing in the file is one");
-        if (spectrum.Mask is { } mask) yield return new("mask", mask.Place, mask.Why);
+        if (spectrum.Mask is { } mask) yield return new(mask.Key, mask.Place, mask.Why);
         if (layout is { Rows: > 1, Targets: { } targets }) yield return new("targets", targets.Place, "a row for each spectrum");
         if (layout.Spectra.Count > 1)
             yield return new("spectra of the object", string.Join(", ", layout.Spectra.Select(static one => one.Label)), "all of one observation");
@@ -27,13 +28,14 @@ internal static class ReadingNotes
     public static IEnumerable<ReadingNote> OfResolution(Layout layout, StatedResolution? resolution)
     {
         if (layout.Spectra[0].Width is { } width && resolution is not { From: ResolutionSource.Pipeline })
-            yield return new("resolution", width.Place, "a value for each pixel");
+            yield return new(width.Key, width.Place, width.Unit is { } unit ? $"a value for each pixel, in {unit}" : "a value or a response for each pixel");
         else if (resolution is { } stated)
             yield return new("resolution", stated.Power is { } power ? $"{power:0.#}" : $"{stated.FwhmA:0.###} A", stated.Where);
         else yield return new("resolution", "none", "nobody states it: it is estimated");
     }
 
-    private static string NameOf(Role role) => role switch
+    /// <summary>The key of a load rule for noise of a role.</summary>
+    public static string NameOf(Role role) => role switch
     {
         Role.InverseVariance => "inverse_variance",
         Role.Variance => "variance",

@@ -12,11 +12,16 @@ namespace Redshift.Pipeline.Load.Assembly;
 /// <param name="normalised">Whether the flux is divided by a continuum, so that its unit, if any, is a leftover.</param>
 internal sealed class SpectrumBuilder(SpectrumSources sources, WavelengthMedium medium, StatedResolution? resolution, bool normalised)
 {
-    private readonly FluxUnit _unit = normalised ? new("", null) : UnitOf(sources.Flux);
+    private readonly FluxUnit _unit = sources.FluxUnit is { } stated ? FluxUnit.Parse(stated)
+        : normalised ? new("", null)
+        : UnitOf(sources.Flux);
+
+    private readonly StatedResolution? _resolution = sources.Resolution ?? resolution;
+
     private WavelengthGrid? _shared;
 
     /// <summary>Whether another resolution than the column or matrix of the file is used.</summary>
-    private bool Overridden => resolution is { From: ResolutionSource.Pipeline };
+    private bool Overridden => _resolution is { From: ResolutionSource.Pipeline };
 
     /// <summary>Reads one row.</summary>
     /// <returns>The usable spectra of it; none where fewer than <see cref="WavelengthGrid.ShortestRun"/> pixels are usable.</returns>
@@ -117,7 +122,7 @@ internal sealed class SpectrumBuilder(SpectrumSources sources, WavelengthMedium 
     {
         var (values, inverseVariance) = (run.Take(flux), run.Take(weights));
         if (_unit.ErgPerSecondCm2Hz is not null) ToPerAngstrom(run.Vacuum, values, inverseVariance, hasErrors);
-        var widths = fwhm is null ? resolution?.FwhmKmS(run.Vacuum) : run.Take(fwhm);
+        var widths = fwhm is null ? _resolution?.FwhmKmS(run.Vacuum) : run.Take(fwhm);
         return new()
         {
             Label = label,
@@ -126,7 +131,7 @@ internal sealed class SpectrumBuilder(SpectrumSources sources, WavelengthMedium 
             InverseVariance = inverseVariance,
             HasErrors = hasErrors,
             FwhmKmS = widths,
-            ResolutionFrom = fwhm is not null ? ResolutionSource.File : resolution?.From ?? ResolutionSource.Estimate,
+            ResolutionFrom = fwhm is not null ? ResolutionSource.File : _resolution?.From ?? ResolutionSource.Estimate,
             FluxUnit = _unit.Text,
         };
     }

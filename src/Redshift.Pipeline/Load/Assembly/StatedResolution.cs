@@ -10,6 +10,10 @@ namespace Redshift.Pipeline.Load.Assembly;
 /// <param name="Where">The keyword or setting.</param>
 internal sealed record StatedResolution(double? Power, double? FwhmA, ResolutionSource From, string Where)
 {
+    /// <summary>What the pipeline file states; null where it states nothing.</summary>
+    public static StatedResolution? FromPipeline(double? power, double? width) =>
+        power is null && width is null ? null : new(power, power is null ? width : null, ResolutionSource.Pipeline, "the pipeline file");
+
     /// <summary>FWHM in km/s at vacuum wavelengths in Å.</summary>
     public float[] FwhmKmS(double[] vacuum)
     {

@@ -22,18 +22,27 @@ internal static class ApertureReader
         var all = new SpectrumSources
         {
             Wavelength = new ApertureWavelengths(axes, family.Flux.Index),
-            Flux = Rows(family, length, rows, 0),
+            Flux = Rows(family, length, rows, bands, 0),
             Noise = ErrorBand(family, bands) is { } band
-                ? (Role.Error, Rows(family, length, rows, band))
+                ? (Role.Error, Rows(family, length, rows, bands, band))
                 : ImageReader.NoiseOf(family, length, rows),
+            Mask = family.Array(Role.Mask, length, rows) is { } mask && mask.Length == length ? new(mask) : null,
         };
-        return AreOrders(axes, rows, length)
-            ? new([.. Enumerable.Range(0, rows).Select(row => all.AtRow(row, rows == 1 ? "" : $"order {axes[row].Beam}"))], 1)
+        return rows > 1 && AreOrders(axes, rows, length)
+            ? new(Orders(all, new(axes, family.Flux.Index)), 1)
             : new([all], rows) { Targets = TargetTable.For(family.File, rows) };
     }
 
-    private static ImageArray Rows(ImageFamily family, int length, int rows, int band) =>
-        new(family.Flux, length, rows, (long)band * rows * length, length) { Place = $"HDU {family.Flux.Index}", Label = family.FluxLabel };
+    /// <summary>The rows as orders of one object, by the numbers of their beams.</summary>
+    public static IReadOnlyList<SpectrumSources> Orders(SpectrumSources all, ApertureWavelengths axes) =>
+        [.. Enumerable.Range(0, all.Flux.Rows).Select(row => all.AtRow(row, axes.OrderLabel(row), axes.Place))];
+
+    private static ImageArray Rows(ImageFamily family, int length, int rows, int bands, int band) =>
+        new(family.Flux, length, rows, (long)band * rows * length, length)
+        {
+            Place = bands == 1 ? $"HDU {family.Flux.Index}" : $"HDU {family.Flux.Index} band {band}",
+            Label = family.FluxLabel,
+        };
 
     private static int? ErrorBand(ImageFamily family, int bands)
     {

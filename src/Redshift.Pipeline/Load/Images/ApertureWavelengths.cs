@@ -10,11 +10,14 @@ internal sealed class ApertureWavelengths(IReadOnlyList<ApertureAxis> axes, int 
     /// <inheritdoc/>
     public override string Place => $"HDU {hdu} axis";
 
+    /// <summary>The order of a row.</summary>
+    public string OrderLabel(int row) => $"order {axes[row].Beam}";
+
     /// <inheritdoc/>
     public override string Why => axes[0].Why;
 
     /// <inheritdoc/>
-    public override string Unit => axes[0].Unit;
+    public override string? Unit => null;
 
     /// <inheritdoc/>
     public override WavelengthMedium? Medium => null;

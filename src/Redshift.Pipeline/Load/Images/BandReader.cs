@@ -30,7 +30,7 @@ internal static class BandReader
             Mask = roles.MaskOf(flux),
             Width = roles.WidthOf(flux),
         }], apertures)
-        { Notes = [new("bands", string.Join(", ", names), "the names in the header, or the usual ones")] };
+        { ListsWavelengths = listed is not null, Notes = [new("bands", string.Join(", ", names), "the names in the header, or the usual ones")] };
     }
 
     /// <summary>Whether the first row of an image holds wavelengths.</summary>
@@ -82,7 +82,7 @@ internal static class BandReader
     private static ImageArray Band(ImageFamily family, int length, string name, int band, int apertures) =>
         new ImageArray(family.Flux, length, apertures, (long)band * length * apertures, length)
         {
-            Place = $"HDU {family.Flux.Index} row {band}",
+            Place = $"HDU {family.Flux.Index} {(apertures == 1 ? "row" : "band")} {band}",
             Label = new(name, RoleGuesser.Of(new(name)).Role == Role.Wavelength ? "" : family.FluxLabel.Unit),
         };
 

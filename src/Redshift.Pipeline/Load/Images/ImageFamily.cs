@@ -69,13 +69,24 @@ internal sealed class ImageFamily
     }
 
     /// <summary>An array of a sibling beside a flux of this length and number of rows; null where the shapes do not match.</summary>
-    public NumberArray? Array(Role role, int length, int rows)
+    public NumberArray? Array(Role role, int length, int rows) =>
+        Sibling(role, length) is { } hdu ? ArrayOf(hdu, length, rows) : null;
+
+    /// <summary>The wavelengths of a sibling, and the sibling.</summary>
+    public (NumberArray? Array, ImageHdu? Hdu) Wavelengths(int length, int rows) =>
+        Sibling(Role.Wavelength, length) is { } hdu && ArrayOf(hdu, length, rows) is { } array ? (array, hdu) : (null, null);
+
+    /// <summary>An image as the companion of spectra: shared by all, or with one or more values a pixel for each.</summary>
+    /// <param name="hdu">The image.</param>
+    /// <param name="length">Pixels of a spectrum.</param>
+    /// <param name="rows">Number of spectra.</param>
+    /// <returns>Null where the shapes do not match.</returns>
+    public static NumberArray? ArrayOf(ImageHdu hdu, int length, int rows)
     {
-        if (Sibling(role, length) is not { } hdu) return null;
-        var perRow = hdu.Count / (rows * (long)length);
         var place = $"HDU {hdu.Index}";
         if (hdu.Count == length) return new ImageArray(hdu, length) { Place = place, Label = LabelOf(hdu) };
-        if (hdu.Count % (rows * (long)length) != 0 || perRow > 64) return null;
+        var perRow = hdu.Count / (rows * (long)length);
+        if (hdu.Count % (rows * (long)length) != 0 || perRow is < 1 or > 64) return null;
         var elements = checked((int)(perRow * length));
         return new ImageArray(hdu, elements, rows, 0, elements) { Place = place, Label = LabelOf(hdu) };
     }

@@ -26,12 +26,16 @@ internal static class ImageReader
         while (dimensions > 1 && lengths[dimensions - 1] == 1) dimensions--;
         return dimensions switch
         {
-            1 => Stack(family, lengths[0], 1),
+            1 => OneAxis(family, lengths[0]),
             2 => TwoAxes(family, lengths[0], lengths[1]),
             3 => ThreeAxes(family, lengths[0], lengths[1], lengths[2]),
             _ => throw Unfit(family, "at most three axes"),
         };
     }
+
+    private static UnitContent OneAxis(ImageFamily family, int length) => ApertureAxis.ReadAll(family.Header) is { Count: > 0 } apertures
+        ? ApertureReader.Read(family, length, 1, 1, apertures)
+        : Stack(family, length, 1);
 
     private static UnitContent TwoAxes(ImageFamily family, int length, int rows)
     {
@@ -75,7 +79,7 @@ internal static class ImageReader
     {
         if (length < FewestPixels) throw Unfit(family, $"at least {FewestPixels} pixels along the first axis");
         var flux = new ImageArray(family.Flux, length, rows, 0, length) { Place = $"HDU {family.Flux.Index}", Label = family.FluxLabel };
-        var listed = family.Array(Role.Wavelength, length, rows);
+        var (listed, wavelengthHdu) = family.Wavelengths(length, rows);
         var sources = new SpectrumSources
         {
             Wavelength = listed is null ? AxisOf(family, length) : new ArrayWavelengths(listed),
@@ -85,7 +89,7 @@ internal static class ImageReader
             Width = WidthOf(family, length, rows),
         };
         var targets = rows > 1 ? TargetTable.For(family.File, rows) : null;
-        return new([sources], rows) { ListsWavelengths = listed is not null, Targets = targets };
+        return new([sources], rows) { ListsWavelengths = listed is not null, WavelengthHdu = wavelengthHdu, Targets = targets };
     }
 
     /// <summary>Noise from a sibling image.</summary>
@@ -116,7 +120,7 @@ internal static class ImageReader
     private static UnitContent SidewaysTable(ImageFamily family, int columns)
     {
         var arrays = Enumerable.Range(0, columns)
-            .Select(column => new ImageColumnArray(family.Flux, column) { Place = $"HDU {family.Flux.Index} column {column}", Label = new("") })
+            .Select(column => new ImageColumnArray(family.Flux, column) { Place = $"HDU {family.Flux.Index} column {column + 1}", Label = new("") })
             .ToList<NumberArray>();
         return BandReader.ByContent(family, arrays);
     }

@@ -25,10 +25,10 @@ internal sealed class ArrayWavelengths : WavelengthSource
     public override string Place => _array.Place;
 
     /// <inheritdoc/>
-    public override string Why => _stated is { } unit ? $"unit {unit}" : $"unit {Judged} judged by the size of the values";
+    public override string Why => _stated is null ? $"unit {Judged} judged by the size of the values" : $"unit {Unit}";
 
     /// <inheritdoc/>
-    public override string Unit => (_stated ?? Judged).ToString();
+    public override string Unit => Suited(_array.Read(0)).ToString();
 
     /// <inheritdoc/>
     public override WavelengthMedium? Medium => MediumOf(_array.Label);

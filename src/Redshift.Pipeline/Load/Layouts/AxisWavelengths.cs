@@ -14,7 +14,7 @@ internal sealed class AxisWavelengths(PixelAxis axis, int hdu) : WavelengthSourc
     public override string Why => axis.Why;
 
     /// <inheritdoc/>
-    public override string Unit => axis.Unit;
+    public override string? Unit => axis.Unit;
 
     /// <inheritdoc/>
     public override WavelengthMedium? Medium => axis.Medium;

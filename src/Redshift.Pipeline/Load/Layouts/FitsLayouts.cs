@@ -52,6 +52,7 @@ internal static class FitsLayouts
             Spectra = content.Spectra,
             Rows = content.Rows,
             Header = ScopeOf(unit.Hdu, file),
+            WavelengthHeader = content.WavelengthHdu is { } hdu ? ScopeOf(hdu, file) : null,
             Targets = content.Targets,
             Notes = content.Notes,
             ListsWavelengths = content.ListsWavelengths,
@@ -70,7 +71,7 @@ internal static class FitsLayouts
         return Single(units[0], file) with
         {
             Spectra = [.. contents.SelectMany(static arm => arm.Content.Labelled(arm.Arm))],
-            Targets = contents[0].Content.Targets ?? (rows > 1 ? TargetTable.For(file, rows) : null),
+            Targets = contents[0].Content.Targets ?? TargetTable.For(units[0].Hdu, file, rows),
             Notes = [.. contents[0].Content.Notes, new("spectra", Places(units), "the arms that the names give")],
         };
     }

@@ -15,6 +15,12 @@ internal sealed record Layout
     /// <summary>The headers that speak of them.</summary>
     public required HeaderScope Header { get; init; }
 
+    /// <summary>The headers that speak of the wavelengths, where these have a unit of their own.</summary>
+    public HeaderScope? WavelengthHeader { get; init; }
+
+    /// <summary>The headers that can speak of the wavelengths, those of their own unit first.</summary>
+    public IEnumerable<HeaderScope> WavelengthHeaders => WavelengthHeader is { } own ? [own, Header] : [Header];
+
     /// <summary>Comment lines of a text file.</summary>
     public IReadOnlyList<string> Remarks { get; init; } = [];
 
@@ -23,9 +29,6 @@ internal sealed record Layout
 
     /// <summary>What was found and chosen beside the roles.</summary>
     public IReadOnlyList<ReadingNote> Notes { get; init; } = [];
-
-    /// <summary>What to check already because of the layout.</summary>
-    public IReadOnlyList<string> Cautions { get; init; } = [];
 
     /// <summary>Whether the wavelengths are listed in a binary table or an array, as pipelines of surveys and space telescopes do.</summary>
     public bool ListsWavelengths { get; init; }

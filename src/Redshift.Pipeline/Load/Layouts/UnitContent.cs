@@ -1,3 +1,4 @@
+using Redshift.Fits;
 using Redshift.Pipeline.Load.Metadata;
 using Redshift.Pipeline.Observations;
 
@@ -11,6 +12,9 @@ internal sealed record UnitContent(IReadOnlyList<SpectrumSources> Spectra, int R
     /// <summary>Whether wavelengths are listed and not computed from an axis.</summary>
     public bool ListsWavelengths { get; init; }
 
+    /// <summary>The unit with the wavelengths, where it is another than that with the flux.</summary>
+    public Hdu? WavelengthHdu { get; init; }
+
     /// <summary>The table of the rows' targets.</summary>
     public TargetTable? Targets { get; init; }
 
@@ -19,5 +23,5 @@ internal sealed record UnitContent(IReadOnlyList<SpectrumSources> Spectra, int R
 
     /// <summary>The spectra with the name of their arm before their own labels.</summary>
     public IEnumerable<SpectrumSources> Labelled(string arm) =>
-        Spectra.Select(spectrum => spectrum with { Label = $"{arm} {spectrum.Label}".Trim() });
+        Spectra.Select(spectrum => spectrum with { Arm = arm, Label = $"{arm} {spectrum.Label}".Trim() });
 }

@@ -13,8 +13,8 @@ internal abstract class WavelengthSource
     /// <summary>How it was read.</summary>
     public abstract string Why { get; }
 
-    /// <summary>The unit as a load rule states it.</summary>
-    public abstract string Unit { get; }
+    /// <summary>The unit as a load rule states it; null where the description leaves no choice.</summary>
+    public abstract string? Unit { get; }
 
     /// <summary>The medium where the coordinate itself states it.</summary>
     public abstract WavelengthMedium? Medium { get; }

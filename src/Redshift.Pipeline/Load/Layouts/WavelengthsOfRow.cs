@@ -12,7 +12,7 @@ internal sealed class WavelengthsOfRow(WavelengthSource all, int fixedRow) : Wav
     public override string Why => all.Why;
 
     /// <inheritdoc/>
-    public override string Unit => all.Unit;
+    public override string? Unit => all.Unit;
 
     /// <inheritdoc/>
     public override WavelengthMedium? Medium => all.Medium;

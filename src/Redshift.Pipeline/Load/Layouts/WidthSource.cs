@@ -5,7 +5,10 @@ using Redshift.Pipeline.Load.SpectralAxis;
 namespace Redshift.Pipeline.Load.Layouts;
 
 /// <summary>The instrumental width of each pixel, in any of the forms in which files state it.</summary>
-internal sealed class WidthSource(NumberArray values, Role role)
+/// <param name="values">The widths.</param>
+/// <param name="role">Their form: FWHM, standard deviation, resolving power or matrix.</param>
+/// <param name="statedUnit">The unit that the pipeline file states; null for that of the label.</param>
+internal sealed class WidthSource(NumberArray values, Role role, string? statedUnit = null)
 {
     private static readonly double FwhmPerSigma = Math.Sqrt(8 * Math.Log(2));
 
@@ -15,16 +18,27 @@ internal sealed class WidthSource(NumberArray values, Role role)
     // A "resolution" above this is a resolving power, below it a width in Å.
     private const double LowestPower = 20;
 
-    private readonly SpectralUnit? _unit = SpectralUnit.Parse(values.Label.Unit);
+    private readonly SpectralUnit? _unit = SpectralUnit.Parse(statedUnit ?? values.Label.Unit);
 
-    private readonly bool _inPixels = values.Label.Unit.BeginsWithAny("pix")
-        || (role == Role.Sigma && !values.Label.Words.Contains("wresl"));
+    private readonly bool _inPixels = (statedUnit ?? values.Label.Unit).BeginsWithAny("pix")
+        || (statedUnit is null && role == Role.Sigma && !values.Label.Words.Contains("wresl"));
 
     /// <summary>Where it is.</summary>
     public string Place => values.Place;
 
+    /// <summary>The key of a load rule for widths of this form.</summary>
+    public string Key => role switch
+    {
+        Role.Sigma => "sigma",
+        Role.Resolution => "resolution",
+        _ => "fwhm",
+    };
+
+    /// <summary>The unit as a load rule states it; null for resolving powers and matrices.</summary>
+    public string? Unit => role == Role.Resolution ? null : _unit?.ToString() ?? (_inPixels ? "pixel" : "Angstrom");
+
     /// <summary>The widths of one row of many.</summary>
-    public WidthSource AtRow(int row) => new(new FixedRow(values, row), role);
+    public WidthSource AtRow(int row) => new(new FixedRow(values, row), role, statedUnit);
 
     /// <summary>Whether the width is one along the spectrum: a FWHM without a unit may be that of the slit profile.</summary>
     public bool IsSpectral => role != Role.Fwhm || values.Label.Unit.Length > 0;

@@ -7,13 +7,13 @@ namespace Redshift.Pipeline.Load.Metadata;
 /// <summary>The frame of the wavelengths, from cards that say it was applied; a mere value of the correction says nothing.</summary>
 internal static partial class FrameFinder
 {
-    /// <summary>The frame and where it is stated; unknown where it is not.</summary>
-    public static (VelocityFrame Frame, string Where) Find(HeaderScope header)
+    /// <summary>The frame and where it is stated; null where it is not.</summary>
+    public static (VelocityFrame Frame, string Where)? Find(HeaderScope header)
     {
         foreach (var keyword in (ReadOnlySpan<string>)["SPECSYS", "SPECSYSA", "VELFRAME"])
             if (header.Text(keyword) is { } system && FromName(system) is { } frame) return (frame, $"keyword {keyword}");
         if (FromFlags(header) is { } flagged) return flagged;
-        return FromRemarks(header.Cards) ?? (VelocityFrame.Unknown, "nothing states it");
+        return FromRemarks(header.Cards);
     }
 
     /// <summary>A frame by the names of the FITS Standard 4.0, table 27, also when written out.</summary>

@@ -19,6 +19,14 @@ internal static partial class MediumFinder
     private static readonly string[] MediumKeywords =
         ["AIRORVAC", "VACORAIR", "AIR_VAC", "AIRVAC", "WAVEMED", "WAVE_MED", "MEDIUM", "WAVETYPE", "VACAIR", "WAVESYS", "WAVETAG"];
 
+    /// <summary>What the type of an array of wavelengths says (FITS Standard 4.0, table 25); null where it has none of these types.</summary>
+    public static WavelengthMedium? OfType(HeaderScope header) => header.Text("CTYPE1", "CTYPE")?.ToUpperInvariant() switch
+    {
+        "AWAV" => WavelengthMedium.Air,
+        "WAVE" => WavelengthMedium.Vacuum,
+        _ => null,
+    };
+
     /// <summary>What the cards state, and where; null where they are silent.</summary>
     public static (WavelengthMedium Medium, string Where)? Stated(HeaderScope header)
     {

@@ -1,3 +1,4 @@
+using Redshift.Pipeline.Load.Rules;
 using Redshift.Pipeline.Settings;
 
 namespace Redshift.Pipeline.Load.Metadata;
@@ -18,11 +19,19 @@ internal sealed record ObservationFacts(
     IReadOnlyList<KeyValuePair<string, string>> Kept)
 {
     /// <summary>Reads them from the headers.</summary>
-    public static ObservationFacts Read(HeaderScope header, LoadSettings settings) => new(
-        header.Text("OBJECT", "OBJNAME", "TARGNAME", "TARGET", "DESIG", "TARGETID", "OBJ_NAME", "SRCNAME") ?? "",
-        SkyPosition.Find(header),
+    public static ObservationFacts Read(HeaderScope header, LoadSettings settings, LoadRule? rule) => new(
+        header.Text([.. Ruled(rule?.Target), "OBJECT", "OBJNAME", "TARGNAME", "TARGET", "DESIG", "TARGETID", "OBJ_NAME", "SRCNAME"]) ?? "",
+        RuledPosition(header, rule) ?? SkyPosition.Find(header),
         ExposureTime.Middle(header),
         ExposureTime.Seconds(header),
         header.Text("INSTRUME", "BSS_INST", "SPECTROG", "INSTRUMENT") ?? "",
         [.. settings.Keep.Select(keyword => KeyValuePair.Create(keyword, header.Text(keyword) ?? ""))]);
+
+    private static IEnumerable<string> Ruled(string? reference) =>
+        reference is not null && TargetRules.Keyword(reference) is { } keyword ? [keyword] : [];
+
+    private static (double Ra, double Dec)? RuledPosition(HeaderScope header, LoadRule? rule) =>
+        header.Find([.. Ruled(rule?.Ra)]) is { } ra && header.Find([.. Ruled(rule?.Dec)]) is { } dec
+            ? SkyPosition.Read(ra, dec, rule!.AngleUnit)
+            : null;
 }

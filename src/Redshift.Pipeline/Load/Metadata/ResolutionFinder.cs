@@ -15,15 +15,8 @@ internal static class ResolutionFinder
     private static readonly string[] WidthKeywords = ["FWHM_A", "SPECFWHM", "RESFWHM", "RESOL-SP", "LSFFWHM", "SPEC_FWH", "DISPRES"];
 
     /// <summary>The resolution, or null where nobody states one.</summary>
-    public static StatedResolution? Find(HeaderScope header, LoadSettings settings, LoadRule? rule)
-    {
-        if (FromPipeline(settings.Resolution, settings.FwhmA) is { } overall) return overall;
-        if (FromPipeline(rule?.Resolution, rule?.FwhmA) is { } ruled) return ruled;
-        return FromPower(header) ?? FromWidth(header);
-    }
-
-    private static StatedResolution? FromPipeline(double? power, double? width) =>
-        power is null && width is null ? null : new(power, power is null ? width : null, ResolutionSource.Pipeline, "the pipeline file");
+    public static StatedResolution? Find(HeaderScope header, LoadSettings settings) =>
+        StatedResolution.FromPipeline(settings.Resolution, settings.FwhmA) ?? FromPower(header) ?? FromWidth(header);
 
     private static StatedResolution? FromPower(HeaderScope header)
     {

@@ -1,37 +1,47 @@
 using System.Globalization;
+using System.Text.RegularExpressions;
+using Redshift.Pipeline.Settings;
 
 namespace Redshift.Pipeline.Load.Metadata;
 
 /// <summary>Reads right ascensions and declinations in degrees, hours, radians or sexagesimal form.</summary>
-internal static class SkyAngle
+internal static partial class SkyAngle
 {
-    /// <summary>Degrees of a right ascension, 0 to 360; null where the text is none.</summary>
-    /// <param name="text">The value as written.</param>
-    /// <param name="unit">Unit or comment that may name hours or radians.</param>
-    public static double? RightAscension(string text, string unit)
+    private const double HoursOfCircle = 24;
+
+    /// <summary>The unit that a unit string or a comment names; degrees where it names none.</summary>
+    public static AngleUnit UnitOf(string text)
     {
-        var isSexagesimal = Sexagesimal(text) is { } parts && parts.Count > 1;
+        if (RadianPattern().IsMatch(text)) return AngleUnit.Radian;
+        return HourPattern().IsMatch(text) ? AngleUnit.Hour : AngleUnit.Degree;
+    }
+
+    /// <summary>Degrees of a right ascension, 0 to 360; null where the text is none. Sexagesimal ones are in hours.</summary>
+    /// <param name="text">The value as written.</param>
+    /// <param name="unit">Unit of a plain number.</param>
+    public static double? RightAscension(string text, AngleUnit unit)
+    {
         if (Value(text) is not { } value) return null;
-        var degrees = isSexagesimal ? value * 15 : value * DegreesPerUnit(unit);
+        var isSexagesimal = Sexagesimal(text)!.Count > 1 && !text.Contains('d', StringComparison.Ordinal);
+        var degrees = value * DegreesPerUnit(isSexagesimal ? AngleUnit.Hour : unit, value);
         return degrees is >= -360 and <= 720 ? (degrees % 360 + 360) % 360 : null;
     }
 
     /// <summary>Degrees of a declination; null where the text is none.</summary>
-    public static double? Declination(string text, string unit)
+    public static double? Declination(string text, AngleUnit unit)
     {
         if (Value(text) is not { } value) return null;
-        var degrees = IsRadian(unit) ? double.RadiansToDegrees(value) : value;
+        var degrees = unit == AngleUnit.Radian ? double.RadiansToDegrees(value) : value;
         return degrees is >= -90 and <= 90 ? degrees : null;
     }
 
-    private static double DegreesPerUnit(string unit)
+    // More than 24 are no hours, whatever a comment such as "[hh:mm:ss]" says.
+    private static double DegreesPerUnit(AngleUnit unit, double value) => unit switch
     {
-        if (IsRadian(unit)) return 180 / Math.PI;
-        var lower = unit.Trim().ToLowerInvariant();
-        return lower is "h" or "hr" or "hrs" or "hour" or "hours" || lower.ContainsAny("[h", "decimal hour") ? 15 : 1;
-    }
-
-    private static bool IsRadian(string unit) => unit.Trim().ToLowerInvariant() is "rad" or "radian" or "radians";
+        AngleUnit.Radian => 180 / Math.PI,
+        AngleUnit.Hour when Math.Abs(value) <= HoursOfCircle => 15,
+        _ => 1,
+    };
 
     private static double? Value(string text)
     {
@@ -58,4 +68,10 @@ internal static class SkyAngle
         }
         return parts.Skip(1).All(static part => part is >= 0 and <= 60) ? parts : null;
     }
+
+    [GeneratedRegex(@"\brad(?:ian)?s?\b", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant)]
+    private static partial Regex RadianPattern();
+
+    [GeneratedRegex(@"^\s*(?:h|hrs?|hours?)\s*$|\bhours?\b|\[h", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant)]
+    private static partial Regex HourPattern();
 }

@@ -1,3 +1,6 @@
+using Redshift.Fits;
+using Redshift.Pipeline.Settings;
+
 namespace Redshift.Pipeline.Load.Metadata;
 
 /// <summary>Finds the target's position in a header; the target's own cards win over the telescope's.</summary>
@@ -16,10 +19,19 @@ internal static class SkyPosition
         foreach (var (raKeyword, decKeyword) in Keywords)
         {
             if (header.Find(raKeyword) is not { } raCard || header.Find(decKeyword) is not { } decCard) continue;
-            var ra = SkyAngle.RightAscension(HeaderScope.TextOf(raCard), raCard.Comment);
-            var dec = SkyAngle.Declination(HeaderScope.TextOf(decCard), decCard.Comment);
-            if (ra is { } alpha && dec is { } delta) return (alpha, delta);
+            if (Read(raCard, decCard, null) is { } position) return position;
         }
         return null;
+    }
+
+    /// <summary>The position in two cards, or null where they hold none.</summary>
+    /// <param name="ra">Right ascension.</param>
+    /// <param name="dec">Declination.</param>
+    /// <param name="unit">Unit of plain numbers; null where the comments tell it.</param>
+    public static (double Ra, double Dec)? Read(Card ra, Card dec, AngleUnit? unit)
+    {
+        var alpha = SkyAngle.RightAscension(HeaderScope.TextOf(ra), unit ?? SkyAngle.UnitOf(ra.Comment));
+        var delta = SkyAngle.Declination(HeaderScope.TextOf(dec), unit ?? SkyAngle.UnitOf(dec.Comment));
+        return alpha is { } rightAscension && delta is { } declination ? (rightAscension, declination) : null;
     }
 }

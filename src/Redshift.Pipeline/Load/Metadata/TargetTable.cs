@@ -1,10 +1,12 @@
 using System.Globalization;
+using System.Text.RegularExpressions;
 using Redshift.Fits;
+using Redshift.Pipeline.Settings;
 
 namespace Redshift.Pipeline.Load.Metadata;
 
 /// <summary>A table with one row a spectrum that names the targets: a fibre table, or the table of the spectra itself.</summary>
-internal sealed class TargetTable
+internal sealed partial record TargetTable
 {
     private static readonly string[] NameColumns =
     [
@@ -24,101 +26,124 @@ internal sealed class TargetTable
         "DECOBJ", "DELTA", "DELTA_J2000",
     ];
 
-    private readonly TableHdu _table;
-    private readonly TableColumn? _name;
-    private readonly TableColumn? _ra;
-    private readonly TableColumn? _dec;
-    private readonly TableColumn? _type;
-    private readonly TableColumn? _status;
-    private readonly string _angleUnit;
+    private static readonly string[] FibreColumns =
+        ["TYPE", "OBJTYPE", "FIBERTYPE", "FIBRETYPE", "TARGUSE", "TARGET_TYPE", "FIBTYPE", "FIB_TYPE", "FIBRE_TYPE", "FIBER_TYPE"];
 
-    /// <summary>Finds the columns of a table.</summary>
-    public TargetTable(TableHdu table)
-    {
-        _table = table;
-        _name = Column(NameColumns);
-        _ra = Column(RaColumns);
-        _dec = Column(DecColumns);
-        _type = Column("TYPE", "OBJTYPE", "FIBERTYPE", "FIBRETYPE", "TARGUSE", "TARGET_TYPE", "FIBTYPE");
-        _status = Column("STATUS", "FIBSTATUS", "FIBRE_STATUS");
-        _angleUnit = AngleUnit();
-    }
-
-    /// <summary>Whether the table says who the targets are.</summary>
-    public bool TellsTargets => _name is not null || (_ra is not null && _dec is not null) || _type is not null;
+    private static readonly string[] StatusColumns = ["STATUS", "FIBSTATUS", "FIB_STATUS", "FIBRE_STATUS", "FIBER_STATUS"];
 
     /// <summary>The table's place.</summary>
-    public string Place => $"HDU {_table.Index} {_table.Name}".TrimEnd();
+    public required string Place { get; init; }
 
-    /// <summary>Number of rows.</summary>
-    public long Count => _table.RowCount;
+    /// <summary>Names of the targets.</summary>
+    public TableColumn? Names { get; init; }
+
+    /// <summary>Right ascensions.</summary>
+    public TableColumn? Ra { get; init; }
+
+    /// <summary>Declinations.</summary>
+    public TableColumn? Dec { get; init; }
+
+    /// <summary>What the fibres look at.</summary>
+    public TableColumn? Fibres { get; init; }
+
+    /// <summary>Whether the fibres work.</summary>
+    public TableColumn? Status { get; init; }
+
+    /// <summary>Unit of positions that are plain numbers.</summary>
+    public AngleUnit Unit { get; init; }
+
+    /// <summary>The targets of spectra in a unit: told by its own table, else by the first with as many rows; null where none tells them.</summary>
+    /// <param name="hdu">Where the spectra are.</param>
+    /// <param name="file">The file.</param>
+    /// <param name="rows">Number of spectra.</param>
+    public static TargetTable? For(Hdu hdu, FitsFile file, long rows)
+    {
+        if (hdu is TableHdu own && own.RowCount == rows && Of(own) is { TellsTargets: true } targets) return targets;
+        return rows > 1 ? For(file, rows) : null;
+    }
 
     /// <summary>The companion table of a stack: the first with as many rows that tells targets.</summary>
     public static TargetTable? For(FitsFile file, long rows) => file.Hdus.OfType<TableHdu>()
         .Where(table => table.RowCount == rows)
-        .Select(static table => new TargetTable(table))
-        .FirstOrDefault(static table => table.TellsTargets);
+        .Select(Of)
+        .FirstOrDefault(static targets => targets.TellsTargets);
+
+    /// <summary>Whether the rows of a table are different objects by their names or positions.</summary>
+    public static bool HasSeveralTargets(TableHdu table)
+    {
+        var targets = Of(table);
+        return new[] { targets.Names, targets.Ra }.OfType<TableColumn>()
+            .Any(column => Enumerable.Range(0, (int)Math.Min(table.RowCount, 1000)).Select(row => Text(column, row)).Distinct().Skip(1).Any());
+    }
+
+    private static TargetTable Of(TableHdu table)
+    {
+        var (ra, dec) = (Column(table, RaColumns), Column(table, DecColumns));
+        return new()
+        {
+            Place = $"HDU {table.Index} {table.Name}".TrimEnd(),
+            Names = Column(table, NameColumns),
+            Ra = ra,
+            Dec = dec,
+            Fibres = Column(table, FibreColumns),
+            Status = Column(table, StatusColumns),
+            Unit = ra is null || dec is null ? AngleUnit.Degree : UnitOf(ra, dec, table.RowCount),
+        };
+    }
+
+    private bool TellsTargets => Names is not null || (Ra is not null && Dec is not null) || Fibres is not null;
 
     /// <summary>The target's name; empty where there is none.</summary>
-    public string Name(int row) => _name is null ? "" : Text(_name, row);
+    public string Name(int row) => Names is null ? "" : Text(Names, row);
 
     /// <summary>The target's position in degrees.</summary>
     public (double Ra, double Dec)? Position(int row)
     {
-        if (_ra is null || _dec is null) return null;
-        var ra = SkyAngle.RightAscension(Text(_ra, row), _angleUnit);
-        var dec = SkyAngle.Declination(Text(_dec, row), _angleUnit);
+        if (Ra is null || Dec is null) return null;
+        var ra = SkyAngle.RightAscension(Text(Ra, row), Unit);
+        var dec = SkyAngle.Declination(Text(Dec, row), Unit);
         return ra is { } alpha && dec is { } delta ? (alpha, delta) : null;
     }
 
-    /// <summary>What the fibre looks at, by its type or by its name.</summary>
+    /// <summary>What the fibre looks at, by its type, its status or its name.</summary>
     public FibreState State(int row)
     {
-        if (_type is { } type && FromWord(Text(type, row)) is not FibreState.Object and var byType) return byType;
-        if (_status is { } status && FromWord(Text(status, row)) is not FibreState.Object and var byStatus) return byStatus;
+        if (Fibres is { } fibres && FromWord(Text(fibres, row)) is not FibreState.Object and var byType) return byType;
+        if (Status is { } status && FromWord(Text(status, row)) is not FibreState.Object and var byStatus) return byStatus;
         return FromName(Name(row));
     }
 
     private static FibreState FromWord(string word) => word.ToUpperInvariant() switch
     {
-        "S" or "SKY" => FibreState.Sky,
-        "U" or "UNUSED" or "UNALLOCATED" or "UNASSIGNED" or "PARKED" or "F" or "GUIDE" => FibreState.Parked,
-        "N" or "BAD" or "BROKEN" or "DEAD" or "DISABLED" or "BRK" => FibreState.Broken,
-        _ => FibreState.Object,
+        "S" => FibreState.Sky,
+        "U" or "F" or "UNASSIGNED" or "GUIDE" or "FIDUCIAL" => FibreState.Parked,
+        "N" or "BAD" or "DISABLED" or "BRK" => FibreState.Broken,
+        _ => FromName(word),
     };
 
     private static FibreState FromName(string name)
     {
-        var upper = name.ToUpperInvariant();
-        if (upper.ContainsAny("PARKED", "UNALLOC"))
-            return FibreState.Parked;
-        if (upper.ContainsAny("BROKEN") || upper.BeginsWithAny("DEAD"))
-            return FibreState.Broken;
-        return upper == "SKY" || upper.BeginsWithAny("SKY_", "SKY ")
-            ? FibreState.Sky
-            : FibreState.Object;
+        if (ParkedPattern().IsMatch(name)) return FibreState.Parked;
+        if (BrokenPattern().IsMatch(name)) return FibreState.Broken;
+        return SkyPattern().IsMatch(name) ? FibreState.Sky : FibreState.Object;
     }
 
-    private TableColumn? Column(params ReadOnlySpan<string> names)
-    {
-        foreach (var name in names)
-            if (_table.Find(name) is { } column) return column;
-        return null;
-    }
+    private static TableColumn? Column(TableHdu table, string[] names) =>
+        names.Select(table.Find).FirstOrDefault(static column => column is not null);
 
     // Radians without a unit are told by the whole column: no fibre field lies within 2π degrees of zero in both coordinates.
-    private string AngleUnit()
+    private static AngleUnit UnitOf(TableColumn ra, TableColumn dec, long rows)
     {
-        if (_ra is null || _dec is null || !_ra.IsNumeric) return _ra?.Unit ?? "";
-        if (_ra.Unit is { Length: > 0 } unit) return unit;
-        var (ra, dec) = (Largest(_ra), Largest(_dec));
-        return _table.RowCount > 1 && ra <= 2 * Math.PI && dec <= Math.PI / 2 && ra > 0 ? "rad" : "";
+        if (ra.Unit is { Length: > 0 } unit) return SkyAngle.UnitOf(unit);
+        if (SkyAngle.UnitOf(ra.Comment ?? "") is not AngleUnit.Degree and var commented) return commented;
+        if (!ra.IsNumeric || rows < 2) return AngleUnit.Degree;
+        return Largest(ra, rows) is > 0 and <= 2 * Math.PI && Largest(dec, rows) <= Math.PI / 2 ? AngleUnit.Radian : AngleUnit.Degree;
     }
 
-    private double Largest(TableColumn column)
+    private static double Largest(TableColumn column, long rows)
     {
         var largest = 0.0;
-        for (var row = 0; row < Math.Min(_table.RowCount, 2000); row++)
+        for (var row = 0; row < Math.Min(rows, 2000); row++)
             if (double.TryParse(Text(column, row), CultureInfo.InvariantCulture, out var value))
                 largest = Math.Max(largest, Math.Abs(value));
         return largest;
@@ -133,4 +158,13 @@ internal sealed class TargetTable
             ? column.ReadIntegers(row)[0].ToString(CultureInfo.InvariantCulture)
             : column.IsNumeric ? column.ReadDoubles(row)[0].ToString("R", CultureInfo.InvariantCulture) : "";
     }
+
+    [GeneratedRegex(@"(?<![A-Z])(?:PARKED|UNALLOC\w*|UNUSED|NOT USED)(?![A-Z])", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant)]
+    private static partial Regex ParkedPattern();
+
+    [GeneratedRegex(@"(?<![A-Z])(?:BROKEN|DEAD)(?![A-Z])", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant)]
+    private static partial Regex BrokenPattern();
+
+    [GeneratedRegex(@"(?<![A-Z])SKY(?![A-Z])", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant)]
+    private static partial Regex SkyPattern();
 }

@@ -1,8 +1,9 @@
 using Redshift.Fits;
+using Redshift.Pipeline.Load.Images;
 using Redshift.Pipeline.Load.Layouts;
 using Redshift.Pipeline.Load.Metadata;
-using Redshift.Pipeline.Load.Roles;
 using Redshift.Pipeline.Load.SpectralAxis;
+using Redshift.Pipeline.Load.Tables;
 using Redshift.Pipeline.Settings;
 
 namespace Redshift.Pipeline.Load.Rules;
@@ -13,68 +14,63 @@ internal static class FitsRules
     /// <summary>The layouts of a file and the rule that applies to it.</summary>
     public static IReadOnlyList<(Layout, LoadRule?)> Find(FitsFile file, LoadSettings settings)
     {
-        var rule = RuleChoice.Find(settings, new([.. file.Hdus.Select(static hdu => hdu.Header)]));
-        if (rule?.Flux is not null) return [(Explicit(file, rule), rule)];
-        return [.. FitsLayouts.Find(file, rule?.Hdu).Select(layout => (rule is null ? layout : Override(layout, file, rule), rule))];
+        if (RuleChoice.Find(settings, new([.. file.Hdus.Select(static hdu => hdu.Header)])) is not { } rule)
+            return [.. FitsLayouts.Find(file).Select(static layout => (layout, (LoadRule?)null))];
+        if (rule.Flux is not null || rule.Arms.Any(static arm => arm.Flux is not null))
+            return [.. Units(file, rule).Select(own => (Explicit(file, rule, own), (LoadRule?)rule))];
+        return [.. FitsLayouts.Find(file, rule.Hdu).Select(layout => (Override(layout, file, rule), (LoadRule?)rule))];
     }
 
-    private static Layout Explicit(FitsFile file, LoadRule rule)
+    private static IReadOnlyList<Hdu?> Units(FitsFile file, LoadRule rule)
     {
-        var arrays = new FitsReferences(file, rule.Hdu);
-        var (flux, hdu) = arrays.Resolve(rule.Flux!);
-        var header = FitsLayouts.ScopeOf(hdu, file);
-        var spectrum = new SpectrumSources { Flux = flux, Wavelength = Wavelength(arrays, rule, file, hdu, flux.Length) };
+        if (rule.Hdu is not { } name) return [null];
+        return FitsReferences.Units(file, name) is { Count: > 0 } units ? units : throw FitsReferences.Missing($"HDU {name}");
+    }
+
+    private static Layout Explicit(FitsFile file, LoadRule rule, Hdu? own)
+    {
+        var arrays = new FitsReferences(file, own);
+        var arms = rule.Arms.Count == 0 ? [("", rule)] : rule.Arms.Select(static arm => (arm.Name, (SpectrumRule)arm));
+        var read = arms.Select(arm => ExplicitArm.Read(file, arrays, arm.Item2, arm.Item1)).ToList();
+        var rows = read.Select(static arm => arm.Rows).Distinct().ToList();
+        if (rows.Count > 1) throw new LoadException("pipeline file, [[load]]", $"arms with {string.Join(" and ", rows)} rows", "as many in each arm");
         return new()
         {
-            Spectra = [WithNoise(spectrum, arrays, rule)],
-            Rows = flux.Rows,
-            Header = header,
-            Targets = flux.Rows > 1 ? TargetTable.For(file, flux.Rows) : null,
+            Spectra = [.. read.SelectMany(static arm => arm.Spectra)],
+            Rows = rows[0],
+            Header = FitsLayouts.ScopeOf(read[0].FluxHdu, file),
+            WavelengthHeader = read[0] is { ListsWavelengths: true } first && first.WavelengthHdu != first.FluxHdu
+                ? FitsLayouts.ScopeOf(first.WavelengthHdu, file)
+                : null,
+            Targets = TargetRules.Apply(TargetTable.For(read[0].FluxHdu, file, rows[0]), arrays, rule),
+            ListsWavelengths = read[0].ListsWavelengths,
         };
     }
 
     private static Layout Override(Layout layout, FitsFile file, LoadRule rule)
     {
-        var arrays = new FitsReferences(file, rule.Hdu);
-        return layout with { Spectra = [.. layout.Spectra.Select(spectrum => Override(spectrum, arrays, rule, layout.Header))] };
+        var arrays = new FitsReferences(file, rule.Hdu is { } name && FitsReferences.Units(file, name) is [var own, ..] ? own : null);
+        return layout with
+        {
+            Spectra = [.. layout.Spectra.Select(spectrum => Override(spectrum, arrays, rule, layout.Header))],
+            Targets = TargetRules.Apply(layout.Targets, arrays, rule),
+        };
     }
 
     private static SpectrumSources Override(SpectrumSources spectrum, FitsReferences arrays, LoadRule rule, HeaderScope header)
     {
-        var unit = UnitOf(rule);
+        var whole = Override(spectrum, arrays, (SpectrumRule)rule, header);
+        return rule.Arms.FirstOrDefault(arm => arm.Name == spectrum.Label || arm.Name == spectrum.Arm) is { } own
+            ? Override(whole, arrays, own, header)
+            : whole;
+    }
+
+    private static SpectrumSources Override(SpectrumSources spectrum, FitsReferences arrays, SpectrumRule rule, HeaderScope header)
+    {
+        var unit = RoleRules.UnitOf(rule);
         if (rule.Wavelength is { } place && !ArrayReference.Parse(place).IsAxis)
-            spectrum = spectrum with { Wavelength = new ArrayWavelengths(arrays.Resolve(place).Array, unit) };
+            spectrum = spectrum with { Wavelength = new ArrayWavelengths(arrays.Array(place, spectrum.Flux).Array, unit) };
         else if (unit is { } stated) spectrum = spectrum with { Wavelength = spectrum.Wavelength.In(stated, header) };
-        return WithNoise(spectrum, arrays, rule);
-    }
-
-    private static SpectrumSources WithNoise(SpectrumSources spectrum, FitsReferences arrays, LoadRule rule) => spectrum with
-    {
-        Noise = rule.InverseVariance is { } inverse ? (Role.InverseVariance, arrays.Resolve(inverse).Array)
-            : rule.Error is { } error ? (Role.Error, arrays.Resolve(error).Array)
-            : spectrum.Noise,
-        Mask = rule.Mask is { } mask ? new MaskSource(arrays.Resolve(mask).Array) : spectrum.Mask,
-    };
-
-    private static WavelengthSource Wavelength(FitsReferences arrays, LoadRule rule, FitsFile file, Hdu fluxHdu, int length)
-    {
-        var unit = UnitOf(rule);
-        if (rule.Wavelength is { } place && !ArrayReference.Parse(place).IsAxis)
-            return new ArrayWavelengths(arrays.Resolve(place).Array, unit);
-        var hdu = rule.Wavelength is { } axis ? arrays.HduOf(ArrayReference.Parse(axis), fluxHdu) : fluxHdu;
-        var header = FitsLayouts.ScopeOf(hdu, file);
-        var found = unit is { } stated && AxisReader.LinearPart(header, 1) is { } pixels
-            ? new LinearAxis(pixels, stated, null) { Why = "the unit of the pipeline file" }
-            : AxisReader.Read(header, 1, length, file);
-        return found is null
-            ? throw new LoadException($"HDU {hdu.Index}", "no axis", "CRVAL1 with CDELT1 or CD1_1")
-            : new AxisWavelengths(found, hdu.Index);
-    }
-
-    private static SpectralUnit? UnitOf(LoadRule rule)
-    {
-        if (rule.WavelengthUnit is not { } text) return null;
-        return SpectralUnit.Parse(text)
-            ?? throw new LoadException("pipeline file, wavelength_unit", $"'{text}'", "a unit such as Angstrom, nm or log10(Angstrom)");
+        return RoleRules.Apply(spectrum, rule, text => arrays.Array(text, spectrum.Flux).Array);
     }
 }

@@ -1,8 +1,6 @@
 using System.Globalization;
 using Redshift.Pipeline.Load.Layouts;
 using Redshift.Pipeline.Load.Metadata;
-using Redshift.Pipeline.Load.Roles;
-using Redshift.Pipeline.Load.SpectralAxis;
 using Redshift.Pipeline.Load.Text;
 using Redshift.Pipeline.Settings;
 
@@ -16,17 +14,20 @@ internal static class TextRules
     {
         var rule = RuleChoice.Find(settings, HeaderScope.Empty);
         var arrays = TextLayout.Arrays(table);
-        if (rule?.Flux is null) return (TextLayout.Find(table, arrays), rule);
-        var unit = rule.WavelengthUnit is { } text ? SpectralUnit.Parse(text) : null;
-        var spectrum = new SpectrumSources
-        {
-            Wavelength = new ArrayWavelengths(Column(arrays, rule.Wavelength ?? "1"), unit),
-            Flux = Column(arrays, rule.Flux),
-            Noise = rule.InverseVariance is { } inverse ? (Role.InverseVariance, Column(arrays, inverse))
-                : rule.Error is { } error ? (Role.Error, Column(arrays, error)) : null,
-            Mask = rule.Mask is { } mask ? new(Column(arrays, mask)) : null,
-        };
-        return (new() { Spectra = [spectrum], Header = HeaderScope.Empty, Remarks = table.Remarks }, rule);
+        if (rule is null) return (TextLayout.Find(table, arrays), null);
+        NumberArray Column(string text) => TextRules.Column(arrays, text);
+        var layout = rule.Flux is { } flux
+            ? new Layout { Spectra = [new() { Flux = Column(flux), Wavelength = new ArrayWavelengths(Column(rule.Wavelength ?? "1")) }], Header = HeaderScope.Empty, Remarks = table.Remarks }
+            : TextLayout.Find(table, arrays);
+        return (layout with { Spectra = [.. layout.Spectra.Select(spectrum => Override(spectrum, rule, Column))] }, rule);
+    }
+
+    private static SpectrumSources Override(SpectrumSources spectrum, LoadRule rule, Func<string, NumberArray> column)
+    {
+        var unit = RoleRules.UnitOf(rule);
+        if (rule.Wavelength is { } place) spectrum = spectrum with { Wavelength = new ArrayWavelengths(column(place), unit) };
+        else if (unit is { } stated) spectrum = spectrum with { Wavelength = spectrum.Wavelength.In(stated, HeaderScope.Empty) };
+        return RoleRules.Apply(spectrum, rule, column);
     }
 
     private static NumberArray Column(IReadOnlyList<NumberArray> arrays, string text)

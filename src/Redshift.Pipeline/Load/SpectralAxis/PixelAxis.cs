@@ -11,8 +11,8 @@ internal abstract class PixelAxis
     /// <summary>How the axis was read, for the notes.</summary>
     public required string Why { get; init; }
 
-    /// <summary>The unit in which a pipeline file would state it.</summary>
-    public virtual string Unit => "Angstrom";
+    /// <summary>The unit in which a pipeline file would state it; null where the header's description leaves no choice.</summary>
+    public virtual string? Unit => null;
 
     /// <summary>Wavelength in Å at a pixel; the first pixel is 1.</summary>
     public abstract double At(double pixel);

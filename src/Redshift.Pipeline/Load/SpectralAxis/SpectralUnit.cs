@@ -62,7 +62,7 @@ internal readonly partial record struct SpectralUnit(SpectralQuantity Quantity, 
             SpectralQuantity.Frequency => Scaled("Hz"),
             SpectralQuantity.Wavenumber => Scaled("cm-1"),
             SpectralQuantity.Energy => Scaled("eV"),
-            SpectralQuantity.Velocity => Scaled("m/s"),
+            SpectralQuantity.Velocity => Factor == 1e3 ? "km/s" : Scaled("m/s"),
             _ => "",
         };
         return Scale switch

@@ -1,3 +1,4 @@
+using System.Globalization;
 using Redshift.Fits;
 using Redshift.Pipeline.Load.Layouts;
 using Redshift.Pipeline.Load.Metadata;
@@ -12,8 +13,10 @@ internal static class TableUnits
 {
     private const int FewestPixels = 16;
 
-    private static readonly string[] OrderColumns =
-        ["SPORDER", "ORDER", "ORDERS", "ECH_ORDER", "SEGMENT", "ARM", "CHIP", "CAMERA", "CHANNEL", "APERTURE"];
+    private static readonly string[] OrderColumns = ["SPORDER", "ORDER", "ORDERS", "ECH_ORDER"];
+
+    // Parts of a spectrograph, or of a field with a target each.
+    private static readonly string[] PartColumns = ["SEGMENT", "ARM", "CHIP", "CAMERA", "CHANNEL", "APERTURE"];
 
     private static readonly string[] StepColumns = ["DELTAW", "DELTA", "STEP", "DW", "DLAMBDA", "DELTA_WAVE", "WAVESTEP", "CDELT"];
 
@@ -25,28 +28,46 @@ internal static class TableUnits
                 yield return new(table, () => Read(table, arrays, file));
     }
 
-    /// <summary>The numeric columns as arrays: cells if any column holds long vectors, whole columns otherwise.</summary>
+    /// <summary>The columns as arrays: cells if any column holds long vectors, whole columns otherwise.</summary>
     public static IReadOnlyList<NumberArray>? Form(TableHdu table)
     {
-        var numeric = table.Columns.Where(static column => column.IsNumeric).ToList();
-        var vectors = numeric.Where(column => CellLength(column) >= FewestPixels).ToList();
-        if (vectors.Count > 0)
-            return [.. vectors.Select(column => Cells(table, column))];
+        var columns = table.Columns.Where(static column => column.IsNumeric || IsFlags(column)).ToList();
+        if (columns.Exists(IsVector)) return [.. columns.Where(IsVector).Select(ArrayOf)];
         if (table.RowCount < FewestPixels || table.RowCount > Array.MaxLength) return null;
-        return [.. numeric.Where(static column => !column.IsVariableLength && column.Repeat == 1)
-            .Select(column => new ColumnArray(column, Rows(table)) { Place = Place(table, column), Label = LabelOf(column) })];
+        return [.. columns.Where(static column => !IsCell(column)).Select(ArrayOf)];
     }
 
-    private static CellArray Cells(TableHdu table, TableColumn column) =>
-        new(column, CellLength(column), Rows(table)) { Place = Place(table, column), Label = LabelOf(column) };
+    /// <summary>A column as an array: a spectrum in each cell, or one value a row.</summary>
+    public static NumberArray ArrayOf(TableColumn column)
+    {
+        var (place, label, rows) = (PlaceOf(column), LabelOf(column), (int)Math.Min(column.Table.RowCount, Array.MaxLength));
+        if (IsFlags(column))
+            return new FlagArray(column, IsCell(column) ? CellLength(column) : rows, IsCell(column) ? rows : null) { Place = place, Label = label };
+        return IsCell(column)
+            ? new CellArray(column, CellLength(column), rows) { Place = place, Label = label }
+            : new ColumnArray(column, rows) { Place = place, Label = label };
+    }
 
-    private static int Rows(TableHdu table) => (int)Math.Min(table.RowCount, int.MaxValue);
+    private static bool IsVector(TableColumn column) => IsCell(column) && CellLength(column) >= FewestPixels;
+
+    // The bits of a cell are the several flags of one pixel, unless they are more than an integer would hold.
+    private static bool IsCell(TableColumn column) => column.IsVariableLength || column.Repeat > (column.Type == ColumnType.Bit ? 64 : 1);
+
+    private static bool IsFlags(TableColumn column) => column.Type is ColumnType.Logical or ColumnType.Bit;
 
     private static int CellLength(TableColumn column) => column.IsVariableLength ? column.LengthAt(0) : column.Repeat;
 
-    private static string Place(TableHdu table, TableColumn column) => $"HDU {table.Index} column {column.Name}";
+    /// <summary>The place of a column in the words of a load rule: by its name, or by its number where that does not tell it.</summary>
+    public static string PlaceOf(TableColumn column)
+    {
+        var name = column.Name.Length > 0 && column.Table.Find(column.Name) == column
+            ? column.Name
+            : (column.Index + 1).ToString(CultureInfo.InvariantCulture);
+        return $"HDU {column.Table.Index} column {name}";
+    }
 
-    private static Label LabelOf(TableColumn column) =>
+    /// <summary>What the file says of a column.</summary>
+    public static Label LabelOf(TableColumn column) =>
         new(column.Name, column.Unit ?? "", column.Ucd ?? "", column.Utype ?? "", column.Comment ?? "");
 
     private static bool HoldsSpectra(IReadOnlyList<NumberArray> arrays, TableHdu table, FitsFile file)
@@ -74,22 +95,31 @@ internal static class TableUnits
             Mask = roles.MaskOf(flux),
             Width = roles.WidthOf(flux),
         };
-        return Arrange(table, sources, flux) with { ListsWavelengths = true, Notes = Notes(roles, sources) };
+        return Arrange(table, sources, file) with { ListsWavelengths = true, Notes = Notes(roles, sources) };
     }
 
     // Where several columns give wavelengths, the flux's own qualifiers decide before the plainest name does.
     private static NumberArray WavelengthOf(RoleChoice roles, NumberArray flux) =>
         RoleGuesser.Qualifiers(flux.Label.Words).Any() ? roles.Belonging(Role.Wavelength, flux)! : roles.Single(Role.Wavelength)!;
 
-    private static UnitContent Arrange(TableHdu table, SpectrumSources sources, NumberArray flux)
+    private static UnitContent Arrange(TableHdu table, SpectrumSources sources, FitsFile file)
     {
-        if (flux.Rows == 1) return new([sources], 1) { Targets = flux is CellArray ? TargetsOf(table) : null };
-        if (OrderColumns.Select(table.Find).FirstOrDefault(static column => column is not null) is { } order && Distinct(order, flux.Rows))
-            return new([.. Enumerable.Range(0, flux.Rows).Select(row => sources.AtRow(row, OrderLabel(order, row)))], 1);
-        return new([sources], flux.Rows) { Targets = TargetsOf(table) };
+        var rows = sources.Flux.Rows;
+        if (rows > 1 && OrderColumn(table, rows) is { } order) return new(Orders(sources, order), 1);
+        return new([sources], rows) { Targets = sources.Flux is CellArray ? TargetTable.For(table, file, rows) : null };
     }
 
-    private static TargetTable? TargetsOf(TableHdu table) => new TargetTable(table) is { TellsTargets: true } targets ? targets : null;
+    private static TableColumn? OrderColumn(TableHdu table, int rows)
+    {
+        var names = TargetTable.HasSeveralTargets(table) ? OrderColumns : [.. OrderColumns, .. PartColumns];
+        return names.Select(table.Find).FirstOrDefault(static column => column is not null) is { } order && Distinct(order, rows) ? order : null;
+    }
+
+    /// <summary>The rows of an array as the orders of one object.</summary>
+    /// <param name="sources">The arrays.</param>
+    /// <param name="names">Column with a name or number of each.</param>
+    public static IReadOnlyList<SpectrumSources> Orders(SpectrumSources sources, TableColumn names) =>
+        [.. Enumerable.Range(0, sources.Flux.Rows).Select(row => sources.AtRow(row, OrderLabel(names, row), PlaceOf(names)))];
 
     private static bool Distinct(TableColumn order, int rows) =>
         rows <= 1000 && Enumerable.Range(0, rows).Select(row => OrderLabel(order, row)).Distinct().Count() == rows;
@@ -102,7 +132,7 @@ internal static class TableUnits
         var step = StepColumns.Select(table.Find).FirstOrDefault(static column => column is { IsNumeric: true, Repeat: 1 });
         var first = table.Columns.FirstOrDefault(static column =>
             column is { IsNumeric: true, Repeat: 1, IsVariableLength: false } && RoleGuesser.Of(LabelOf(column)).Role == Role.Wavelength);
-        return step is null || first is null ? null : new(first, step, table.Index);
+        return step is null || first is null ? null : new(first, step);
     }
 
     private static AxisWavelengths? Axis(TableHdu table, int length, FitsFile file) =>

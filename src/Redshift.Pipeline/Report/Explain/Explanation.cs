@@ -24,15 +24,37 @@ public static class Explanation
     }
 
     /// <summary>Writes what was found in the file and how it was read.</summary>
-    public static void WriteLayout(TextWriter output, Observation observation)
+    public static void WriteLayout(TextWriter output, Observation? observation, FileDescription file)
     {
-        var table = new TextTable();
-        foreach (var note in observation.Notes)
-            table.AddWords(HarmlessText.Printable(note.Role), HarmlessText.Printable(note.Choice), HarmlessText.Printable(note.Why));
+        if (file.Contents.Count > 0)
+        {
+            output.WriteLine("What the file holds");
+            WriteNotes(output, file.Contents);
+            output.WriteLine();
+        }
+
+        if (observation is not null)
+            WriteReading(output, observation, file);
+    }
+
+    private static void WriteReading(TextWriter output, Observation observation, FileDescription file)
+    {
         output.WriteLine($"How {Name(observation)} was read");
-        table.Write(output, Indent);
+        WriteNotes(output, observation.Notes);
         foreach (var spectrum in observation.Spectra)
             output.WriteLine(Indent + Describe(spectrum));
+        output.WriteLine();
+        output.WriteLine("The same as a rule for a pipeline file");
+        output.WriteLine();
+        output.Write(file.Rule);
+    }
+
+    private static void WriteNotes(TextWriter output, IReadOnlyList<ReadingNote> notes)
+    {
+        var table = new TextTable();
+        foreach (var note in notes)
+            table.AddWords(HarmlessText.Printable(note.Role), HarmlessText.Printable(note.Choice), HarmlessText.Printable(note.Why));
+        table.Write(output, Indent);
     }
 
     private static void WriteAnswer(TextWriter output, ObservationResult result)

@@ -26,21 +26,25 @@ public static class ExplanationJson
         CellsJson.WriteRows(writer, LineColumns.All, result.Lines.Select(line => new LineRow(result.Observation, line)));
         writer.WritePropertyName("candidates");
         CellsJson.WriteRows(writer, CandidateColumns.All, result.Candidates);
-        WriteReading(writer, result.Observation);
+        WriteNotes(writer, "reading", result.Observation.Notes);
         writer.WriteEndObject();
     });
 
     /// <summary>The JSON text of how the file was read.</summary>
-    public static string BuildLayout(Observation observation) => CellsJson.Build(writer =>
+    /// <param name="observation">What was read; null where the file was rejected.</param>
+    /// <param name="file">What the file holds.</param>
+    public static string BuildLayout(Observation? observation, FileDescription file) => CellsJson.Build(writer =>
     {
         writer.WriteStartObject();
-        WriteReading(writer, observation);
+        WriteNotes(writer, "contents", file.Contents);
+        WriteNotes(writer, "reading", observation?.Notes ?? []);
+        writer.WriteString("rule", file.Rule ?? "");
         writer.WriteEndObject();
     });
 
-    private static void WriteReading(Utf8JsonWriter writer, Observation observation)
+    private static void WriteNotes(Utf8JsonWriter writer, string name, IReadOnlyList<ReadingNote> notes)
     {
-        writer.WritePropertyName("reading");
-        CellsJson.WriteRows(writer, ReadingColumns, observation.Notes);
+        writer.WritePropertyName(name);
+        CellsJson.WriteRows(writer, ReadingColumns, notes);
     }
 }
