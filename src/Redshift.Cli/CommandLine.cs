@@ -38,6 +38,7 @@ internal static class CommandLine
             RunCommand.Build(),
             ExplainCommand.Build(),
             LinesCommand.Build(),
+            ExportCommand.Build(),
             CompareCommand.Build(),
         };
         root.SetAction((Action<ParseResult>)(_ => throw new UsageException("no command given; see zladder --help")));

@@ -22,15 +22,6 @@ public static class CatalogueFiles
         Write(LedgerTables.Catalogue(ledger));
 
         void Write<TRow>(Table<TRow> table) => TableFormats.Write(
-            table with { Rows = Until(table.Rows, token) }, "csv", Path.Combine(folder, TableFormats.FileName(table.Name, "csv")));
-    }
-
-    private static IEnumerable<TRow> Until<TRow>(IEnumerable<TRow> rows, CancellationToken token)
-    {
-        foreach (var row in rows)
-        {
-            token.ThrowIfCancellationRequested();
-            yield return row;
-        }
+            table.Until(token), "csv", Path.Combine(folder, TableFormats.FileName(table.Name, "csv")));
     }
 }

@@ -78,6 +78,20 @@ public sealed class LedgerFileTests : IDisposable
         Assert.Equal(["b.fits "], ledger.Rejects().Select(Key));
     }
 
+    [Fact]
+    public void Who_reads_finds_the_same_rows_again_while_a_run_goes_on()
+    {
+        using var ledger = LedgerFile.Open(_folder.Path);
+        FilledLedger.Fill(ledger, [], Answer("a.fits", 0));
+        using var read = LedgerFile.OpenExisting(_folder.Path);
+        Assert.Equal(["a.fits 0"], read.Catalogue().Select(Key));
+
+        FilledLedger.Fill(ledger, [], Answer("a.fits", 0), Answer("b.fits", 0));
+
+        Assert.Equal(["a.fits 0"], read.Catalogue().Select(Key));
+        Assert.Equal(["a.fits 0", "b.fits 0"], ledger.Catalogue().Select(Key));
+    }
+
     private static ObservationResult Answer(string source, int row) => Examples.Full() with { Observation = Examples.Observation(source, row) };
 
     private static string Key(string[] cells) => cells[0] + " " + cells[1];
