@@ -4,30 +4,27 @@ using System.Runtime.Intrinsics;
 namespace Redshift.Pipeline.Numerics;
 
 /// <summary>
-/// Complex fast Fourier transform of one length, a power of two, on separate real and imaginary arrays
-/// (Stockham's self-sorting radix-2 form; e.g. Van Loan 1992, Computational Frameworks for the FFT, §1.7).
+/// Complex fast Fourier transform of eight sequences at once, one a lane, of one length, a power of two, on separate real and imaginary
+/// arrays (Stockham's self-sorting form with radix 4; e.g. Van Loan 1992, Computational Frameworks for the FFT, §2.4).
 /// </summary>
-/// <remarks>Element-wise arithmetic only, so that the bits do not depend on the vector width. Not thread safe: holds scratch space.</remarks>
+/// <remarks>Lanes never meet, so that the bits do not depend on the vector width. Not thread safe: holds scratch space.</remarks>
 internal sealed class FourierTransform
 {
     [ThreadStatic]
     private static Dictionary<int, FourierTransform>? _perThread;
 
-    private readonly float[][] _cos;
-    private readonly float[][] _sin;
-    private readonly float[] _re;
-    private readonly float[] _im;
+    private readonly float[] _cos;
+    private readonly float[] _sin;
+    private readonly Vector256<float>[] _re;
+    private readonly Vector256<float>[] _im;
 
     public FourierTransform(int length)
     {
         if (!BitOperations.IsPow2(length)) throw new ArgumentOutOfRangeException(nameof(length), length, "a power of two is expected");
         Length = length;
-        var stages = BitOperations.Log2((uint)length);
-        _cos = new float[stages][];
-        _sin = new float[stages][];
-        for (var stage = 0; stage < stages; stage++) FillTwiddles(stage, length >> (stage + 1));
-        _re = new float[length];
-        _im = new float[length];
+        (_cos, _sin) = (new float[length], new float[length]);
+        for (var k = 0; k < length; k++) (_sin[k], _cos[k]) = ((float)Math.Sin(-2 * Math.PI * k / length), (float)Math.Cos(-2 * Math.PI * k / length));
+        (_re, _im) = (new Vector256<float>[length], new Vector256<float>[length]);
     }
 
     /// <summary>A transform of this length for the calling thread, kept for the next call.</summary>
@@ -41,103 +38,62 @@ internal sealed class FourierTransform
     public int Length { get; }
 
     /// <summary>Transforms in place, kernel exp(−2πi jk/N), no scaling.</summary>
-    public void Forward(Span<float> re, Span<float> im)
+    public void Forward(Span<Vector256<float>> re, Span<Vector256<float>> im)
     {
-        Span<float> xr = re, xi = im, yr = _re, yi = _im;
-        var stride = 1;
-        for (int half = Length / 2, stage = 0; half >= 1; half /= 2, stage++)
+        Span<Vector256<float>> xr = re, xi = im, yr = _re, yi = _im;
+        var passes = 0;
+        for (int length = Length, stride = 1; length > 1; passes++)
         {
-            Pass(xr, xi, yr, yi, half, stride, _cos[stage], _sin[stage]);
-            stride *= 2;
-            Span<float> tr = xr, ti = xi;
+            var radix = length % 4 == 0 ? 4 : 2;
+            if (radix == 4) PassOfFour(xr, xi, yr, yi, length / 4, stride);
+            else PassOfTwo(xr, xi, yr, yi, stride);
+            (length, stride) = (length / radix, stride * radix);
+            Span<Vector256<float>> tr = xr, ti = xi;
             xr = yr;
             xi = yi;
             yr = tr;
             yi = ti;
         }
 
-        if (BitOperations.Log2((uint)Length) % 2 == 0) return;
+        if (passes % 2 == 0) return;
         xr.CopyTo(re);
         xi.CopyTo(im);
     }
 
     /// <summary>Inverse transform without the factor 1/N: the forward one with the two parts exchanged.</summary>
-    public void Inverse(Span<float> re, Span<float> im) => Forward(im, re);
+    public void Inverse(Span<Vector256<float>> re, Span<Vector256<float>> im) => Forward(im, re);
 
-    private void FillTwiddles(int stage, int half)
+    private void PassOfFour(
+        ReadOnlySpan<Vector256<float>> xr, ReadOnlySpan<Vector256<float>> xi, Span<Vector256<float>> yr, Span<Vector256<float>> yi, int quarter, int stride)
     {
-        _cos[stage] = new float[half];
-        _sin[stage] = new float[half];
-        for (var p = 0; p < half; p++)
+        var step = stride * quarter;
+        for (var p = 0; p < quarter; p++)
         {
-            var angle = -Math.PI * p / half;
-            _cos[stage][p] = (float)Math.Cos(angle);
-            _sin[stage][p] = (float)Math.Sin(angle);
-        }
-    }
-
-    private static void Pass(Span<float> xr, Span<float> xi, Span<float> yr, Span<float> yi, int half, int stride, float[] cos, float[] sin)
-    {
-        if (stride == 1 && half >= 8)
-        {
-            FirstPass(xr, xi, yr, yi, half, cos, sin);
-            return;
-        }
-
-        for (var p = 0; p < half; p++)
-        {
-            int a = stride * p, b = stride * (p + half), c = stride * 2 * p, d = c + stride;
-            Butterflies(
-                xr.Slice(a, stride), xi.Slice(a, stride), xr.Slice(b, stride), xi.Slice(b, stride),
-                yr.Slice(c, stride), yi.Slice(c, stride), yr.Slice(d, stride), yi.Slice(d, stride), cos[p], sin[p]);
-        }
-    }
-
-    /// <summary>The first pass, whose stride of one leaves its butterflies in neighbouring elements: eight at a time, written interleaved.</summary>
-    private static void FirstPass(Span<float> xr, Span<float> xi, Span<float> yr, Span<float> yi, int half, float[] cos, float[] sin)
-    {
-        Span<float> sums = stackalloc float[32];
-        for (var p = 0; p < half; p += 8)
-        {
-            Vector256<float> ar = Vector256.Create(xr[p..]), ai = Vector256.Create(xi[p..]);
-            Vector256<float> br = Vector256.Create(xr[(p + half)..]), bi = Vector256.Create(xi[(p + half)..]);
-            Vector256<float> c = Vector256.Create(cos, p), s = Vector256.Create(sin, p), dr = ar - br, di = ai - bi;
-            (ar + br).CopyTo(sums);
-            (ai + bi).CopyTo(sums[8..]);
-            (dr * c - di * s).CopyTo(sums[16..]);
-            (dr * s + di * c).CopyTo(sums[24..]);
-            for (var q = 0; q < 8; q++)
+            int once = stride * p, at = stride * p, to = 4 * stride * p;
+            float c1 = _cos[once], s1 = _sin[once], c2 = _cos[2 * once], s2 = _sin[2 * once], c3 = _cos[3 * once], s3 = _sin[3 * once];
+            for (var q = 0; q < stride; q++, at++, to++)
             {
-                yr[2 * (p + q)] = sums[q];
-                yi[2 * (p + q)] = sums[8 + q];
-                yr[2 * (p + q) + 1] = sums[16 + q];
-                yi[2 * (p + q) + 1] = sums[24 + q];
+                Vector256<float> ar = xr[at] + xr[at + 2 * step], ai = xi[at] + xi[at + 2 * step];
+                Vector256<float> br = xr[at] - xr[at + 2 * step], bi = xi[at] - xi[at + 2 * step];
+                Vector256<float> cr = xr[at + step] + xr[at + 3 * step], ci = xi[at + step] + xi[at + 3 * step];
+                Vector256<float> dr = xr[at + step] - xr[at + 3 * step], di = xi[at + step] - xi[at + 3 * step];
+                (yr[to], yi[to]) = (ar + cr, ai + ci);
+                Vector256<float> er = br + di, ei = bi - dr, fr = ar - cr, fi = ai - ci, gr = br - di, gi = bi + dr;
+                (yr[to + stride], yi[to + stride]) = (er * c1 - ei * s1, er * s1 + ei * c1);
+                (yr[to + 2 * stride], yi[to + 2 * stride]) = (fr * c2 - fi * s2, fr * s2 + fi * c2);
+                (yr[to + 3 * stride], yi[to + 3 * stride]) = (gr * c3 - gi * s3, gr * s3 + gi * c3);
             }
         }
     }
 
-    private static void Butterflies(
-        Span<float> ar, Span<float> ai, Span<float> br, Span<float> bi,
-        Span<float> sr, Span<float> si, Span<float> tr, Span<float> ti, float c, float s)
+    /// <summary>The last pass of a length that is no power of four; its factors are one.</summary>
+    private static void PassOfTwo(
+        ReadOnlySpan<Vector256<float>> xr, ReadOnlySpan<Vector256<float>> xi, Span<Vector256<float>> yr, Span<Vector256<float>> yi, int stride)
     {
-        var q = 0;
-        for (Vector256<float> vc = Vector256.Create(c), vs = Vector256.Create(s); q <= ar.Length - 8; q += 8)
+        for (var q = 0; q < stride; q++)
         {
-            Vector256<float> pr = Vector256.Create(ar[q..]), pi = Vector256.Create(ai[q..]), qr = Vector256.Create(br[q..]), qi = Vector256.Create(bi[q..]);
-            (pr + qr).CopyTo(sr[q..]);
-            (pi + qi).CopyTo(si[q..]);
-            Vector256<float> dr = pr - qr, di = pi - qi;
-            (dr * vc - di * vs).CopyTo(tr[q..]);
-            (dr * vs + di * vc).CopyTo(ti[q..]);
-        }
-
-        for (; q < ar.Length; q++)
-        {
-            float dr = ar[q] - br[q], di = ai[q] - bi[q];
-            sr[q] = ar[q] + br[q];
-            si[q] = ai[q] + bi[q];
-            tr[q] = dr * c - di * s;
-            ti[q] = dr * s + di * c;
+            (yr[q], yi[q]) = (xr[q] + xr[q + stride], xi[q] + xi[q + stride]);
+            (yr[q + stride], yi[q + stride]) = (xr[q] - xr[q + stride], xi[q] - xi[q + stride]);
         }
     }
 }

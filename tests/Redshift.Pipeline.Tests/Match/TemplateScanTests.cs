@@ -12,41 +12,107 @@ namespace Redshift.Pipeline.Tests.Match;
 public class TemplateScanTests
 {
     private const double PlantedZ = 0.25;
+    private const double Spread = 0.35;
+    private const double Wide = 0.7;
+    private const double Greatest = 0.3;
 
-    private static readonly CellTemplate Lined = CellTemplate.For(new Template("lines", ObjectKind.Galaxy, Lines(1)), 0.0003);
-    private static readonly CellTemplate Other = CellTemplate.For(new Template("other lines", ObjectKind.Galaxy, Lines(2)), 0.0003);
+    private static readonly Template Lined = new("lines", ObjectKind.Galaxy, Lines(1));
+    private static readonly Template Apart = new("apart", ObjectKind.Galaxy, Lines(3));
+
+    /// <summary>Ten templates, more than are worked on at once; the ninth is the right one, the last is kept apart.</summary>
+    private static readonly TemplateRange Range = new(double.NegativeInfinity, double.PositiveInfinity, 0,
+    [
+        .. Enumerable.Range(0, 8).Select(i => new SearchedTemplate(new("other lines", ObjectKind.Galaxy, Lines(10 + (ulong)i)), i, Spread, i == 3 ? Greatest : double.PositiveInfinity)),
+        new(Lined, 8, Spread, double.PositiveInfinity),
+        new(Apart, -1, Wide, double.PositiveInfinity),
+    ]);
 
     private readonly Cells _cells = Data(Lines(1));
 
+    private int Level => LineSpreadLevels.Nearest(_cells.SigmaLn);
+
     [Fact]
-    public void Transform_and_direct_sum_agree_at_all_shifts()
+    public void All_shifts_agree_with_the_direct_sum_over_double_cells()
     {
-        const int First = -50;
-        var best = new float[3000];
-        Array.Fill(best, float.NegativeInfinity);
-        new TemplateScan(_cells, Lined.Relative.Length).Take(Lined, 0, First, best, new short[best.Length]);
+        const int First = -25;
+        var (best, which, apart) = Scan(First, 3000);
         var greatest = best.Max();
-        Gen.Int[0, best.Length - 1].Sample(s => Assert.Equal(TemplateScan.Direct(_cells, Lined, First + s), best[s], 1e-4 * greatest));
+        Gen.Int[0, best.Length - 1].Sample(s =>
+        {
+            var evidence = Range.Templates.Select(t => t.GreatestLnShift < (First + s) * 2 * Cells.Step ? double.NegativeInfinity : Direct(t, First + s)).ToArray();
+            Assert.Equal(evidence[..9].Max(), best[s], 1e-4 * greatest);
+            Assert.Equal(evidence[which[s]], best[s], 1e-4 * greatest);
+            Assert.Equal(evidence[9], apart[s], 1e-4 * greatest);
+        }, iter: 300);
     }
 
     [Fact]
     public void The_planted_template_wins_at_its_redshift()
     {
-        var best = new float[2000];
-        var which = new short[best.Length];
-        Array.Fill(best, float.NegativeInfinity);
-        var scan = new TemplateScan(_cells, Lined.Relative.Length);
-        scan.Take(Other, 5, 0, best, which);
-        scan.Take(Lined, 7, 0, best, which);
+        var (best, which, _) = Scan(0, 1000);
         var peak = Array.IndexOf(best, best.Max());
-        Assert.Equal(Math.Log(1 + PlantedZ) / Cells.Step, peak, 1.0);
-        Assert.Equal(7, which[peak]);
-        Assert.Contains((short)5, which);
+        Assert.Equal(Math.Log(1 + PlantedZ) / Cells.Step, 2 * peak, 2.0);
+        Assert.Equal(8, which[peak]);
+        Assert.True(which.Distinct().Count() > 5);
     }
 
     [Fact]
-    public void Outside_the_data_a_template_says_nothing() =>
-        Assert.Equal(0, TemplateScan.Direct(_cells, Lined, 20000));
+    public void Outside_the_data_a_template_says_nothing() => Assert.All(Scan(12000, 10).Best, e => Assert.Equal(0, e, 1e-3));
+
+    [Fact]
+    public void Few_shifts_are_the_direct_sum_over_cells()
+    {
+        const int First = -17;
+        var templates = Range.Templates.Select(t => t.Template).ToList();
+        var rows = StarScan.Of(templates, _cells.SigmaLn).LnEvidence(_cells, First, 35);
+        Assert.Equal(templates.Count, rows.Length);
+        var greatest = rows.Max(r => r.Max());
+        for (var t = 0; t < templates.Count; t++)
+        {
+            var relative = CellTemplate.Relative(templates[t], Level);
+            for (var s = 0; s < 35; s++)
+                Assert.Equal(Direct(relative, _cells.TemplateGradient, _cells.TemplateCurvature, _cells.First, First + s, Spread), rows[t][s], 1e-4 * greatest);
+        }
+    }
+
+    private (float[] Best, short[] Which, float[] Apart) Scan(int first, int shifts)
+    {
+        var (best, which, apart) = (new float[shifts], new short[shifts], new float[shifts]);
+        Array.Fill(best, float.NegativeInfinity);
+        new TemplateScan(_cells).Take(Range, first, best, which, apart);
+        return (best, which, apart);
+    }
+
+    private double Direct(SearchedTemplate template, int shift)
+    {
+        var odd = _cells.First & 1;
+        return Direct(
+            Pairs(CellTemplate.Relative(template.Template, Level), 0, 0.5f), Pairs(_cells.TemplateGradient, odd, 1), Pairs(_cells.TemplateCurvature, odd, 1),
+            (_cells.First - odd) / 2, shift, template.Spread);
+    }
+
+    private static float[] Pairs(float[] values, int empty, float factor)
+    {
+        var pairs = new float[(values.Length + empty + 1) / 2];
+        for (var i = 0; i < values.Length; i++) pairs[(i + empty) / 2] += factor * values[i];
+        return pairs;
+    }
+
+    /// <summary>ln of the likelihood averaged over a normal prior of the strength about one, over that at strength zero.</summary>
+    private static double Direct(float[] relative, float[] gradient, float[] curvature, int first, int shift, double spread)
+    {
+        double num = 0, den = 0, precision = 1 / (spread * spread);
+        for (var i = 0; i < gradient.Length; i++)
+        {
+            var t = first + i - shift;
+            if (t < 0 || t >= relative.Length) continue;
+            num += relative[t] * gradient[i];
+            den += relative[t] * relative[t] * curvature[i];
+        }
+
+        double m = den + precision, v = num + precision;
+        return 0.5 * v * v / m - 0.5 * precision - 0.5 * Math.Log(m / precision);
+    }
 
     /// <summary>Two hundred seeded absorption lines from 3000 Å to 7000 Å, 300 km/s wide, in a flat continuum on the template grid.</summary>
     private static float[] Lines(ulong seed)

@@ -15,6 +15,7 @@ internal sealed class ModelLibrary
     private ModelLibrary()
     {
         Stars = WithEqualShares(WithPartners(StellarModel.StandardGrid.Select(p => (p, Star(p))).ToList()));
+        StarTemplates = [.. Stars.Select(s => s.Template!)];
         var mixes = StellarMix.Ages.ToDictionary(m => m.Name, m => m.Compute(StarFlux));
         Galaxies = WithEqualShares(WithPartners([.. GalaxyTemplates(mixes).Select(t => Galaxy(t.Template, t.GreatestZ))]));
         Quasars = WithEqualShares(QuasarTemplates(mixes).SelectMany(t => Widths.SelectMany(w => QuasarLines.Winds.Select(v => Quasar(t, w, v)))));
@@ -32,6 +33,9 @@ internal sealed class ModelLibrary
     public static ModelLibrary Instance => Lazy.Value;
 
     public IReadOnlyList<FitModel> Stars { get; }
+
+    /// <summary>The computed spectra of the stars, in their order.</summary>
+    public IReadOnlyList<Template> StarTemplates { get; }
 
     public IReadOnlyList<FitModel> Galaxies { get; }
 

@@ -22,6 +22,7 @@ internal sealed class GridSearch
     private readonly int _firstShift;
     private readonly int _shifts;
     private readonly ModelLibrary _library = ModelLibrary.Instance;
+    private readonly PopulationScan _populations;
 
     public GridSearch(Cells cells, MatchSettings settings)
     {
@@ -29,6 +30,7 @@ internal sealed class GridSearch
         _settings = settings;
         _firstShift = (int)Math.Floor(Math.Log(1 + settings.ZMin) / Cells.Step);
         _shifts = (int)Math.Ceiling(Math.Log(1 + settings.ZMax) / Cells.Step) - _firstShift + 1;
+        _populations = new(cells, _firstShift, _shifts);
     }
 
     /// <summary>The best peaks of each kind.</summary>
@@ -50,12 +52,11 @@ internal sealed class GridSearch
         var reach = (int)Math.Ceiling(FastestStarKmS / KmSPerLn / Cells.Step);
         int from = Math.Max(-reach, _firstShift), to = Math.Min(reach, _firstShift + _shifts - 1);
         var peaks = new List<Peak>();
-        foreach (var model in _library.Stars)
+        var evidence = StarScan.Of(_library.StarTemplates, _cells.SigmaLn).LnEvidence(_cells, from, Math.Max(0, to - from + 1));
+        for (var t = 0; t < evidence.Length; t++)
         {
-            var template = CellTemplate.For(model.Template!, _cells.SigmaLn);
-            var evidence = new float[Math.Max(0, to - from + 1)];
-            for (var s = 0; s < evidence.Length; s++) evidence[s] = TemplateScan.Direct(_cells, template, from + s);
-            peaks.AddRange(Highest(evidence, from, 1, 2, _ => model));
+            var model = _library.Stars[t];
+            peaks.AddRange(Highest(evidence[t], from, 1, 2, _ => model));
         }
 
         return [.. peaks.OrderByDescending(p => p.LnEvidence).Take(10)];
@@ -63,46 +64,14 @@ internal sealed class GridSearch
 
     private List<Peak> Galaxies()
     {
-        var best = new float[_shifts];
-        var which = new short[_shifts];
-        Array.Fill(best, float.NegativeInfinity);
-        var scan = new TemplateScan(_cells, TemplateLength);
-        for (var t = 0; t < _library.Galaxies.Count; t++) Take(scan, _library.Galaxies[t], t, best, which);
+        var best = _populations.Fine(_firstShift, _shifts);
         AddNarrowGroups(_library.Galaxies[0], best, _firstShift);
-        return Highest(best, _firstShift, 1, 14, s => _library.Galaxies[which[s]]);
+        return Highest(best, _firstShift, 1, 14, s => _library.Galaxies[_populations.Template(_firstShift + s)]);
     }
-
-    /// <summary>Scans a template without the forest up to where the forest matters, then with the forest's depth of each range.</summary>
-    private void Take(TemplateScan scan, FitModel model, int index, float[] best, short[] which)
-    {
-        TakeRange(scan, CellTemplate.For(model.Template!, _cells.SigmaLn), index, double.NegativeInfinity, Math.Min(model.GreatestLnShift, Forest.Ranges[0].From), best, which);
-        foreach (var (from, to, middle) in Forest.Ranges)
-            TakeRange(scan, CellTemplate.For(model.Template!, _cells.SigmaLn, middle), index, from, Math.Min(model.GreatestLnShift, to), best, which);
-    }
-
-    private void TakeRange(TemplateScan scan, CellTemplate template, int index, double from, double to, float[] best, short[] which)
-    {
-        int first = (int)Math.Max(0, Math.Ceiling(from / Cells.Step) - _firstShift), last = (int)Math.Min(_shifts, Math.Ceiling(to / Cells.Step) - _firstShift);
-        if (last > first) scan.Take(template, index, _firstShift + first, best.AsSpan(first, last - first), which.AsSpan(first, last - first));
-    }
-
-    /// <summary>The step at Lyman alpha that the forest makes in a featureless continuum, at every shift.</summary>
-    private float[] ForestSteps()
-    {
-        var best = new float[_shifts];
-        var scan = new TemplateScan(_cells, TemplateLength);
-        foreach (var (from, to, middle) in Forest.Ranges)
-            TakeRange(scan, CellTemplate.For(ModelLibrary.Flat, _cells.SigmaLn, middle), 0, from, to, best, new short[_shifts]);
-        return best;
-    }
-
-    /// <summary>Template cells that any shift of the grid brings onto the data.</summary>
-    private int TemplateLength => Math.Clamp(_cells.First + _cells.Count - Cells.Margin - _firstShift, 1, CellTemplate.Length);
 
     private List<Peak> Quasars()
     {
         var peaks = new List<Peak>();
-        var steps = ForestSteps();
         foreach (var width in _library.Quasars.Where(m => m.Template is null).GroupBy(m => m.BroadKmS))
         {
             // Steps of a fifth of the line's σ lose nothing; narrow lines are left to the exact fits.
@@ -111,7 +80,7 @@ internal sealed class GridSearch
             foreach (var model in width)
             {
                 var total = new float[_shifts / stride];
-                for (var s = 0; s < total.Length; s++) total[s] = steps[s * stride];
+                for (var s = 0; s < total.Length; s++) total[s] = _populations.ForestStep(_firstShift + s * stride);
                 foreach (var group in model.Groups.Where(g => g.Broad)) broad.Add(group, _firstShift, total);
                 peaks.AddRange(Highest(total, _firstShift, stride, 8, _ => model));
             }

@@ -1,122 +1,135 @@
 using System.Numerics;
 using System.Runtime.Intrinsics;
+using Redshift.Pipeline.Match.Models;
 using Redshift.Pipeline.Numerics;
 
 namespace Redshift.Pipeline.Match.Search;
 
-/// <summary>ln evidence of a template's strength over all redshifts at once, by FFT, or over a few shifts directly.</summary>
+/// <summary>
+/// ln evidence of templates' strengths over all redshifts by FFT, eight templates at once, in steps of two cells: populations move with
+/// a dispersion that leaves no lines narrower than that. Each stretch of shifts needs a transform little longer than the data alone.
+/// </summary>
 internal sealed class TemplateScan
 {
-    /// <summary>A computed spectrum should appear at its own strength; its prior σ allows for mixtures, veiling and wrong metallicity.</summary>
-    private const double StrengthSpread = 0.35;
+    /// <summary>Starts of stretches are rounded down to so many double cells, so that observations alike share the templates' transforms.</summary>
+    private const int Rounding = 128;
 
-    private const int Rounding = 256;
-
+    private readonly int _level;
     private readonly int _first;
-    private readonly int _used;
+    private readonly int _count;
     private readonly FourierTransform _transform;
-    private readonly float[] _dataRe;
-    private readonly float[] _dataIm;
-    private readonly float[] _squareRe;
-    private readonly float[] _squareIm;
-    private readonly float[] _workRe;
-    private readonly float[] _workIm;
+    private readonly Vector256<float>[] _dataRe;
+    private readonly Vector256<float>[] _dataIm;
+    private readonly Vector256<float>[] _workRe;
+    private readonly Vector256<float>[] _workIm;
 
-    public TemplateScan(Cells cells, int templateLength)
+    /// <summary>Transforms the data.</summary>
+    public TemplateScan(Cells cells)
     {
-        // Both lengths are rounded up, so that observations alike share the templates' transforms.
-        _first = cells.First + Cells.Margin;
-        var count = cells.Count - 2 * Cells.Margin;
-        _used = Math.Min((templateLength + Rounding - 1) / Rounding * Rounding, CellTemplate.Length);
-        _transform = FourierTransform.OfLength((int)BitOperations.RoundUpToPowerOf2((uint)(count + _used)));
+        _level = LineSpreadLevels.Nearest(cells.SigmaLn);
+        int first = cells.First + Cells.Margin, end = cells.First + cells.Count - Cells.Margin;
+        _first = first >> 1;
+        _count = ((end + 1) >> 1) - _first;
+        _transform = FourierTransform.OfLength(TransformLength(_count));
         var n = _transform.Length;
-        (_dataRe, _dataIm, _squareRe, _squareIm) = (new float[n], new float[n], new float[n], new float[n]);
-        (_workRe, _workIm) = (new float[n], new float[n]);
-        cells.TemplateGradient.AsSpan(Cells.Margin, count).CopyTo(_dataRe);
-        cells.TemplateCurvature.AsSpan(Cells.Margin, count).CopyTo(_squareRe);
+        (_dataRe, _dataIm, _workRe, _workIm) = (new Vector256<float>[n], new Vector256<float>[n], new Vector256<float>[n], new Vector256<float>[n]);
+        for (var k = first; k < end; k++)
+        {
+            var at = (k >> 1) - _first;
+            _dataRe[at] += Vector256.Create(cells.TemplateGradient[k - cells.First]);
+            _dataIm[at] += Vector256.Create(cells.TemplateCurvature[k - cells.First]);
+        }
+
         _transform.Forward(_dataRe, _dataIm);
-        _transform.Forward(_squareRe, _squareIm);
     }
 
-    /// <summary>Takes the larger of what is there and this template's ln evidence at each shift, noting which template it was.</summary>
-    /// <param name="template">The template.</param>
-    /// <param name="index">Its number.</param>
-    /// <param name="firstShift">Shift in cells of element 0.</param>
+    /// <summary>Takes the larger of what is there and each template's ln evidence at each shift, noting which template it was.</summary>
+    /// <param name="range">The templates; the same instance for all calls.</param>
+    /// <param name="firstShift">Shift in double cells of element 0.</param>
     /// <param name="best">ln evidence at each shift.</param>
     /// <param name="which">Number of the best template.</param>
-    public void Take(CellTemplate template, int index, int firstShift, Span<float> best, Span<short> which)
+    /// <param name="apart">ln evidence of the template that is kept apart.</param>
+    public void Take(TemplateRange range, int firstShift, Span<float> best, Span<short> which, Span<float> apart)
     {
-        var t = template.Transform(_used, _transform.Length);
-        Correlate(t);
+        var most = _transform.Length - _count - Rounding;
+        for (var from = 0; from < best.Length; from += most)
+        {
+            var length = Math.Min(most, best.Length - from);
+            for (var octet = 0; octet * Vector256<float>.Count < range.Templates.Count; octet++)
+                Take(range, octet, firstShift + from, best.Slice(from, length), which.Slice(from, length), apart.Slice(from, length));
+        }
+    }
+
+    /// <summary>The shortest that leaves room for as many shifts as there are data.</summary>
+    private static int TransformLength(int count)
+    {
+        var length = (int)BitOperations.RoundUpToPowerOf2((uint)(count + Rounding + 1));
+        return length - count - Rounding < count / 2 ? 2 * length : length;
+    }
+
+    private void Take(TemplateRange range, int octet, int firstShift, Span<float> best, Span<short> which, Span<float> apart)
+    {
+        // The template's first cell on the data at the greatest shift; smaller shifts begin further on.
+        var wanted = _first - (firstShift + best.Length - 1);
+        var start = (int)Math.Floor((double)wanted / Rounding) * Rounding;
+        Correlate(TemplateTransforms.Of(range, octet, _level, start, _transform.Length));
         _transform.Inverse(_workRe, _workIm);
-        var n = _transform.Length;
+        var lanes = new Lanes(range.Templates, octet);
+        var scale = 1f / _transform.Length;
         for (var s = 0; s < best.Length; s++)
         {
-            var at = (firstShift + s - _first) & (n - 1);
-            float gradient = _workRe[at] / n, curvature = Math.Max(0, _workIm[at] / n);
-            // Without its logarithm the evidence can only be larger: most shifts need none.
-            if (Bound(gradient, curvature) <= best[s]) continue;
-            var evidence = LnEvidence(gradient, curvature);
-            if (evidence <= best[s]) continue;
-            best[s] = evidence;
-            which[s] = (short)index;
+            var at = best.Length - 1 - s + wanted - start;
+            var evidence = Strength.LnEvidence(_workRe[at] * scale, Vector256.Max(Vector256<float>.Zero, _workIm[at] * scale), lanes.Precision);
+            if (lanes.Apart >= 0) apart[s] = evidence[lanes.Apart];
+            evidence = lanes.Allowed(evidence, (firstShift + s) * 2 * Cells.Step);
+            if (!Vector256.GreaterThanAny(evidence, Vector256.Create(best[s]))) continue;
+            for (var lane = 0; lane < Vector256<float>.Count; lane++)
+                if (evidence[lane] > best[s]) (best[s], which[s]) = (evidence[lane], (short)range.Templates[octet * Vector256<float>.Count + lane].Index);
         }
     }
 
-    /// <summary>num = D·conj(T) and den = S·conj(Q), both of real sequences, packed as num + i·den.</summary>
-    private void Correlate(CellTemplate.Transforms t)
+    /// <summary>num = conj(D)·T and den = conj(S)·Q of real sequences, packed as num + i·den; D and S are themselves packed as D + i·S.</summary>
+    private void Correlate(TemplateTransforms t)
     {
-        for (var i = 0; i <= _workRe.Length - 8; i += 8)
+        var n = _transform.Length;
+        for (var f = 0; f <= n / 2; f++)
         {
-            Vector256<float> dr = Vector256.Create(_dataRe, i), di = Vector256.Create(_dataIm, i), tr = Vector256.Create(t.Re, i), ti = Vector256.Create(t.Im, i);
-            Vector256<float> sr = Vector256.Create(_squareRe, i), si = Vector256.Create(_squareIm, i);
-            Vector256<float> qr = Vector256.Create(t.SquareRe, i), qi = Vector256.Create(t.SquareIm, i);
-            (dr * tr + di * ti - (si * qr - sr * qi)).CopyTo(_workRe, i);
-            (di * tr - dr * ti + (sr * qr + si * qi)).CopyTo(_workIm, i);
+            var mirror = (n - f) & (n - 1);
+            Vector256<float> dr = (_dataRe[f] + _dataRe[mirror]) * 0.5f, di = (_dataIm[f] - _dataIm[mirror]) * 0.5f;
+            Vector256<float> sr = (_dataIm[f] + _dataIm[mirror]) * 0.5f, si = (_dataRe[mirror] - _dataRe[f]) * 0.5f;
+            Vector256<float> nr = dr * t.Re[f] + di * t.Im[f], ni = dr * t.Im[f] - di * t.Re[f];
+            Vector256<float> qr = sr * t.SquareRe[f] + si * t.SquareIm[f], qi = sr * t.SquareIm[f] - si * t.SquareRe[f];
+            (_workRe[f], _workIm[f]) = (nr - qi, ni + qr);
+            (_workRe[mirror], _workIm[mirror]) = (nr + qi, qr - ni);
         }
     }
 
-    /// <summary>ln evidence at one shift, summed directly.</summary>
-    public static float Direct(Cells cells, CellTemplate template, int shift)
+    /// <summary>What is known of eight templates.</summary>
+    private readonly struct Lanes
     {
-        var relative = template.Relative;
-        int from = Math.Max(0, shift - cells.First), to = Math.Min(cells.Count, relative.Length + shift - cells.First);
-        var length = to - from;
-        if (length <= 0) return 0;
-        var t = relative.AsSpan(from + cells.First - shift, length);
-        var gradient = cells.TemplateGradient.AsSpan(from, length);
-        var curvature = cells.TemplateCurvature.AsSpan(from, length);
-        Vector256<float> numerator = default, denominator = default;
-        var i = 0;
-        for (; i <= length - 8; i += 8)
+        private readonly Vector256<float> _greatest;
+
+        public Lanes(IReadOnlyList<SearchedTemplate> templates, int octet)
         {
-            var v = Vector256.Create(t[i..]);
-            numerator += v * Vector256.Create(gradient[i..]);
-            denominator += v * v * Vector256.Create(curvature[i..]);
+            (Apart, Precision) = (-1, Vector256<float>.One);
+            _greatest = Vector256.Create(float.NegativeInfinity);
+            for (var lane = 0; lane < Vector256<float>.Count && octet * Vector256<float>.Count + lane < templates.Count; lane++)
+            {
+                var template = templates[octet * Vector256<float>.Count + lane];
+                Precision = Precision.WithElement(lane, (float)(1 / (template.Spread * template.Spread)));
+                if (template.Index < 0) Apart = lane;
+                else _greatest = _greatest.WithElement(lane, (float)Math.Min(template.GreatestLnShift, float.MaxValue));
+            }
         }
 
-        float num = Vector256.Sum(numerator), den = Vector256.Sum(denominator);
-        for (; i < length; i++)
-        {
-            num += t[i] * gradient[i];
-            den += t[i] * t[i] * curvature[i];
-        }
+        /// <summary>The lane that is kept apart; negative for none.</summary>
+        public int Apart { get; }
 
-        return LnEvidence(num, den);
-    }
+        /// <summary>1/σ² of the prior strengths.</summary>
+        public Vector256<float> Precision { get; }
 
-    private static float Bound(float gradient, float curvature)
-    {
-        const float Precision = (float)(1 / (StrengthSpread * StrengthSpread));
-        var v = gradient + Precision;
-        return 0.5f * v * v / (curvature + Precision) - 0.5f * Precision + 1e-3f;
-    }
-
-    /// <summary>Marginal likelihood of a strength with the prior N(1, <see cref="StrengthSpread"/>²), over that of strength zero.</summary>
-    private static float LnEvidence(double gradient, double curvature)
-    {
-        const double Precision = 1 / (StrengthSpread * StrengthSpread);
-        double m = curvature + Precision, v = gradient + Precision;
-        return (float)(0.5 * v * v / m - 0.5 * Precision - 0.5 * Math.Log(m / Precision));
+        /// <summary>The evidence of the templates that can exist at a redshift and are not kept apart.</summary>
+        public Vector256<float> Allowed(Vector256<float> evidence, double lnShift) => Vector256.ConditionalSelect(
+            Vector256.LessThanOrEqual(Vector256.Create((float)lnShift), _greatest), evidence, Vector256.Create(float.NegativeInfinity));
     }
 }

@@ -1,0 +1,16 @@
+using System.Runtime.Intrinsics;
+
+namespace Redshift.Pipeline.Match.Search;
+
+/// <summary>Eight sequences side by side.</summary>
+internal static class Octet
+{
+    /// <summary>Puts up to eight sequences of one length side by side, zeros in the lanes left over.</summary>
+    public static Vector256<float>[] Interleave(float[][] sequences)
+    {
+        var octet = new Vector256<float>[sequences[0].Length];
+        for (var lane = 0; lane < sequences.Length; lane++)
+            for (var i = 0; i < octet.Length; i++) octet[i] = octet[i].WithElement(lane, sequences[lane][i]);
+        return octet;
+    }
+}

@@ -1,0 +1,80 @@
+using System.Collections.Concurrent;
+using System.Runtime.Intrinsics;
+using Redshift.Pipeline.Match.Models;
+
+namespace Redshift.Pipeline.Match.Search;
+
+/// <summary>ln evidence of templates over the few shifts that velocities within the Galaxy make, summed directly, eight templates at once.</summary>
+internal sealed class StarScan
+{
+    /// <summary>Shifts that are summed together: each template is read once for all of them.</summary>
+    private const int Together = 4;
+
+    private static readonly ConcurrentDictionary<(IReadOnlyList<Template>, int), StarScan> Prepared = new();
+
+    private readonly Vector256<float>[][] _octets;
+
+    private StarScan(IReadOnlyList<Template> templates, int level)
+    {
+        Count = templates.Count;
+        _octets = [.. templates.Chunk(Vector256<float>.Count).Select(octet => Octet.Interleave([.. octet.Select(t => CellTemplate.Relative(t, level))]))];
+    }
+
+    /// <summary>Number of templates.</summary>
+    public int Count { get; }
+
+    /// <summary>The templates at the resolution of data; kept for all observations alike.</summary>
+    /// <param name="templates">The templates; the same list for all calls.</param>
+    /// <param name="sigmaLn">σ of the line spread in ln λ.</param>
+    public static StarScan Of(IReadOnlyList<Template> templates, double sigmaLn) =>
+        Prepared.GetOrAdd((templates, LineSpreadLevels.Nearest(sigmaLn)), key => new(key.Item1, key.Item2));
+
+    /// <summary>ln evidence of each template, one row each, at shifts from a first one on.</summary>
+    /// <param name="cells">The data.</param>
+    /// <param name="firstShift">Shift in cells of the first column; none may move cells by more than the margin of the data.</param>
+    /// <param name="count">Number of shifts.</param>
+    public float[][] LnEvidence(Cells cells, int firstShift, int count)
+    {
+        var rows = new float[Count][];
+        for (var t = 0; t < Count; t++) rows[t] = new float[count];
+        for (var octet = 0; octet < _octets.Length; octet++)
+            for (var s = 0; s < count; s += Together) Take(cells, octet, firstShift, s, rows);
+        return rows;
+    }
+
+    private void Take(Cells cells, int octet, int firstShift, int s, float[][] rows)
+    {
+        Span<Vector256<float>> found = stackalloc Vector256<float>[Together];
+        Sum(cells, _octets[octet], firstShift + s, found);
+        for (var k = 0; k < Together && s + k < rows[0].Length; k++)
+            for (var lane = 0; lane < Vector256<float>.Count && octet * Vector256<float>.Count + lane < Count; lane++)
+                rows[octet * Vector256<float>.Count + lane][s + k] = found[k][lane];
+    }
+
+    private static void Sum(Cells cells, Vector256<float>[] templates, int shift, Span<Vector256<float>> found)
+    {
+        // At the ends of the range some of the shifts meet the empty margin of the data.
+        int from = Math.Max(0, cells.First + Cells.Margin - shift - Together), to = Math.Min(templates.Length, cells.First + cells.Count - Cells.Margin - shift);
+        var offset = shift - cells.First;
+        Vector256<float> n0 = default, n1 = default, n2 = default, n3 = default, d0 = default, d1 = default, d2 = default, d3 = default;
+        for (var t = from; t < to; t++)
+        {
+            var value = templates[t];
+            var square = value * value;
+            var gradient = cells.TemplateGradient.AsSpan(t + offset, Together);
+            var curvature = cells.TemplateCurvature.AsSpan(t + offset, Together);
+            n0 += value * gradient[0];
+            n1 += value * gradient[1];
+            n2 += value * gradient[2];
+            n3 += value * gradient[3];
+            d0 += square * curvature[0];
+            d1 += square * curvature[1];
+            d2 += square * curvature[2];
+            d3 += square * curvature[3];
+        }
+
+        var precision = Vector256.Create(1 / (Strength.Spread * Strength.Spread));
+        (found[0], found[1]) = (Strength.LnEvidence(n0, d0, precision), Strength.LnEvidence(n1, d1, precision));
+        (found[2], found[3]) = (Strength.LnEvidence(n2, d2, precision), Strength.LnEvidence(n3, d3, precision));
+    }
+}
