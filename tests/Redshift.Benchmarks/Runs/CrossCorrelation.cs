@@ -1,4 +1,5 @@
 using System.Diagnostics;
+using System.Runtime.Intrinsics;
 using Redshift.Pipeline.Match.Models;
 using Redshift.Pipeline.Numerics;
 
@@ -15,11 +16,11 @@ internal sealed class CrossCorrelation
     private const int Length = 16384;
 
     private readonly FourierTransform _transform = FourierTransform.OfLength(Length);
-    private readonly (float[] Re, float[] Im)[] _templates;
-    private readonly float[] _re = new float[Length];
-    private readonly float[] _im = new float[Length];
+    private readonly (Vector256<float>[] Re, Vector256<float>[] Im)[] _octets;
+    private readonly Vector256<float>[] _re = new Vector256<float>[Length];
+    private readonly Vector256<float>[] _im = new Vector256<float>[Length];
 
-    private CrossCorrelation(int templates) => _templates = [.. Enumerable.Range(0, templates).Select(Template)];
+    private CrossCorrelation(int templates) => _octets = [.. Enumerable.Range(0, (templates + 7) / 8).Select(octet => Transforms(8 * octet, 1))];
 
     /// <summary>As many templates as the pipeline has models.</summary>
     public static int TemplateCount { get; } = Count(ModelLibrary.Instance);
@@ -39,9 +40,9 @@ internal sealed class CrossCorrelation
 
     private float BestPeak(int spectrum)
     {
-        var (re, im) = Template(spectrum);
-        var best = float.MinValue;
-        foreach (var (templateRe, templateIm) in _templates)
+        var (re, im) = Transforms(spectrum, 0);
+        var best = Vector256.Create(float.MinValue);
+        foreach (var (templateRe, templateIm) in _octets)
         {
             // The inverse transform is the forward one of the conjugate product, but for the scale.
             for (var k = 0; k < Length; k++)
@@ -51,18 +52,21 @@ internal sealed class CrossCorrelation
             }
 
             _transform.Forward(_re, _im);
-            best = Math.Max(best, _re.Max());
+            foreach (var value in _re) best = Vector256.Max(best, value);
         }
 
-        return best;
+        return Enumerable.Range(0, 8).Max(lane => best[lane]);
     }
 
-    private (float[] Re, float[] Im) Template(int number)
+    /// <summary>Transforms of eight made-up spectra whose numbers are <paramref name="step"/> apart.</summary>
+    private (Vector256<float>[] Re, Vector256<float>[] Im) Transforms(int first, int step)
     {
-        float[] re = new float[Length], im = new float[Length];
+        Vector256<float>[] re = new Vector256<float>[Length], im = new Vector256<float>[Length];
         for (var i = 0; i < BenchmarkInputs.Pixels; i++)
-            re[i] = MathF.Sin(0.37f * i * (number + 1)) * MathF.Sin(MathF.PI * i / BenchmarkInputs.Pixels);
+            for (var lane = 0; lane < 8; lane++) re[i] = re[i].WithElement(lane, MadeUp(first + lane * step, i));
         _transform.Forward(re, im);
         return (re, im);
     }
+
+    private static float MadeUp(int number, int pixel) => MathF.Sin(0.37f * pixel * (number + 1)) * MathF.Sin(MathF.PI * pixel / BenchmarkInputs.Pixels);
 }
