@@ -11,7 +11,7 @@ namespace Redshift.Pipeline.Load;
 /// <summary>The reading of one file: all that goes wrong in it ends here, as a reject.</summary>
 internal sealed class FileReading(string source, LoadSettings settings) : IDisposable
 {
-    private readonly List<(LayoutReader Reader, int First, string? UnitName)> _readers = [];
+    private readonly List<(LayoutReader Reader, int First)> _readers = [];
     private FitsFile? _file;
 
     /// <summary>Number of observations.</summary>
@@ -22,15 +22,14 @@ internal sealed class FileReading(string source, LoadSettings settings) : IDispo
     public Reject? Open(string path) => Guarded<Reject?>(null, () =>
     {
         if (Directory.Exists(path)) throw new LoadException("path", "a folder", "a file");
-        var layouts = Layouts(path);
-        foreach (var (layout, rule) in layouts) Add(layout, rule, layouts.Count > 1);
+        foreach (var (layout, rule) in Layouts(path)) Add(layout, rule);
         return null;
     }, static reject => reject);
 
     /// <summary>Reads one observation.</summary>
     public LoadOutcome Read(int row) => Guarded(row, () =>
     {
-        var (reader, first, _) = ReaderOf(row);
+        var (reader, first) = ReaderOf(row);
         return new(reader.Read(row - first, row), null);
     }, static reject => new LoadOutcome(null, reject));
 
@@ -38,11 +37,7 @@ internal sealed class FileReading(string source, LoadSettings settings) : IDispo
     public IReadOnlyList<ReadingNote> Contents() => _file is { } file ? FileContents.Of(file) : [];
 
     /// <summary>The load rule that reads an observation as it was read.</summary>
-    public string Rule(int row)
-    {
-        var (reader, _, unitName) = ReaderOf(row);
-        return reader.Rule(unitName);
-    }
+    public string Rule(int row) => ReaderOf(row).Reader.Rule([.. _readers.Select(static reader => reader.Reader.FluxHdu)]);
 
     /// <inheritdoc/>
     public void Dispose() => _file?.Dispose();
@@ -68,13 +63,13 @@ internal sealed class FileReading(string source, LoadSettings settings) : IDispo
         return FitsFile.LooksLikeFits(first[..read]);
     }
 
-    private void Add(Layout layout, LoadRule? rule, bool isOneOfSeveral)
+    private void Add(Layout layout, LoadRule? rule)
     {
-        _readers.Add((new(layout, source, settings, rule), Rows, isOneOfSeveral ? layout.Header.Text("EXTNAME") : null));
+        _readers.Add((new(layout, source, settings, rule), Rows));
         Rows += layout.Rows;
     }
 
-    private (LayoutReader Reader, int First, string? UnitName) ReaderOf(int row) => _readers.FindLast(reader => reader.First <= row);
+    private (LayoutReader Reader, int First) ReaderOf(int row) => _readers.FindLast(reader => reader.First <= row);
 
     private T Guarded<T>(int? row, Func<T> read, Func<Reject, T> refuse)
     {

@@ -70,8 +70,11 @@ public sealed record LoadRule : SpectrumRule
     /// <summary>Header keywords and the values they must have; empty matches all files.</summary>
     public IReadOnlyDictionary<string, string> When { get; init; } = new Dictionary<string, string>();
 
-    /// <summary>HDU index or EXTNAME that holds the spectrum; of several HDUs of one name each gives an observation.</summary>
-    public string? Hdu { get; init; }
+    /// <summary>
+    /// Indices or EXTNAMEs of the HDUs that hold the spectra; each gives an observation, also where several have one name. Empty for
+    /// the first with data.
+    /// </summary>
+    public IReadOnlyList<string> Hdus { get; init; } = [];
 
     /// <summary>Medium of the wavelengths.</summary>
     public WavelengthMedium? Medium { get; init; }

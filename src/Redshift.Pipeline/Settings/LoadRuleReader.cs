@@ -19,7 +19,7 @@ internal static class LoadRuleReader
         var rule = (LoadRule)WithRoles(section, new LoadRule
         {
             When = section.Pairs("when"),
-            Hdu = section.TextOrInteger("hdu"),
+            Hdus = section.TextsOrIntegers("hdu"),
             Medium = section.Choice("medium", Words.Media),
             Frame = section.Choice("frame", Words.Frames),
             Target = section.Text("target"),

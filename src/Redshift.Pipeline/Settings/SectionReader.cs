@@ -18,9 +18,15 @@ internal sealed class SectionReader(TomlNode table)
     public string? Text(string key) => Find(key) is { } node ? Text(node) : null;
 
     /// <summary>A text, or a number taken as text.</summary>
-    public string? TextOrInteger(string key) => Find(key) is { Value: long number }
-        ? number.ToString(CultureInfo.InvariantCulture)
-        : Text(key);
+    public string? TextOrInteger(string key) => Find(key) is { } node ? TextOrInteger(node) : null;
+
+    /// <summary>One or several texts, or numbers taken as texts; empty where the key is absent.</summary>
+    public IReadOnlyList<string> TextsOrIntegers(string key) => Find(key) switch
+    {
+        null => [],
+        { Value: List<TomlNode> { Count: > 0 } list } => list.ConvertAll(TextOrInteger),
+        var single => [TextOrInteger(single)],
+    };
 
     /// <summary>A number within limits, or a text.</summary>
     public (double? Number, string? Text) NumberOrText(string key, double low, double high) =>
@@ -109,6 +115,9 @@ internal sealed class SectionReader(TomlNode table)
             ? value.Value
             : throw node.Unlike(FormattableString.Invariant($"a number from {low} to {high}"));
     }
+
+    private static string TextOrInteger(TomlNode node) =>
+        node.Value is long number ? number.ToString(CultureInfo.InvariantCulture) : Text(node);
 
     private static string Text(TomlNode node) =>
         node.Value is string { Length: > 0 } text ? text : throw node.Unlike("a text in quotes");

@@ -134,6 +134,86 @@ public sealed class ImageTests : IDisposable
         Assert.Equal((3, "a broken fibre"), (outcomes[3].Reject!.Row, outcomes[3].Reject!.Found));
     }
 
+    [Theory]
+    [InlineData(2, "1 x 64")]
+    [InlineData(3, "1 x 1 x 64")]
+    public void Axes_of_one_pixel_before_the_spectral_one_are_passed_over(int axis, string shape)
+    {
+        var observation = _bench.One(writer => writer.WriteImage("", LoadBench.Flux(), [.. shape.Split(" x ").Select(long.Parse)],
+        [
+            Card.Of("CTYPE1", "RA---TAN"), Card.Of("CRVAL1", 150.0), Card.Of("CDELT1", 1e-4), Card.Of($"CTYPE{axis}", "AWAV"), Card.Of($"CUNIT{axis}", "nm"),
+            Card.Of($"CRVAL{axis}", 500.0), Card.Of($"CDELT{axis}", 0.1), Card.Of($"CRPIX{axis}", 1L),
+        ]));
+        Assert.Equal(WavelengthMedium.Air, observation.Medium);
+        Assert.Equal(LoadBench.Flux(), Assert.Single(observation.Spectra).Flux);
+        Assert.Equal(5001.394851, observation.Spectra[0].Wavelength[0], 1e-6);
+    }
+
+    [Theory]
+    [InlineData(40)]
+    [InlineData(-40)]
+    public void Rows_whose_ranges_follow_each_other_are_orders_of_one_object(double step)
+    {
+        var observation = _bench.One(writer =>
+        {
+            writer.WriteImage("FLUX", [.. Enumerable.Range(1, 40).SelectMany(static row => LoadBench.Flux(level: row))], [N, 40]);
+            writer.WriteImage("WAVE", [.. Enumerable.Range(0, 40).SelectMany(row => LoadBench.Linear(6000 + step * row, 1))], [N, 40]);
+        });
+        Assert.Equal(40, observation.Spectra.Count);
+        Assert.Equal("order 40", observation.Spectra[39].Label);
+        Assert.Equal(LoadBench.Flux(level: 40), observation.Spectra[39].Flux);
+        Assert.Equal(6000 + 39 * step, observation.Spectra[39].Wavelength[0]);
+    }
+
+    [Fact]
+    public void Rows_whose_ranges_lie_about_at_random_are_objects_of_their_own()
+    {
+        var outcomes = _bench.Fits(static writer =>
+        {
+            writer.WriteImage("FLUX", [.. Enumerable.Range(1, 3).SelectMany(static row => LoadBench.Flux(level: row))], [N, 3]);
+            writer.WriteImage("WAVE", [.. LoadBench.Linear(6000, 1), .. LoadBench.Linear(6050, 1), .. LoadBench.Linear(5980, 1)], [N, 3]);
+        });
+        Assert.Equal([0, 1, 2], outcomes.Select(static outcome => outcome.Observation!.Row));
+        Assert.Equal(5980, outcomes[2].Observation!.Spectra[0].Wavelength[0]);
+    }
+
+    [Fact]
+    public void Image_of_the_statistics_beside_the_data_holds_their_variance() => Assert.Equal(4, _bench.One(static writer =>
+    {
+        writer.WriteImage("DATA", LoadBench.Flux(), [N], Axis);
+        writer.WriteImage("STAT", LoadBench.Constant(0.25), [N], Axis);
+    }).Spectra[0].InverseVariance[0], 1e-12);
+
+    [Fact]
+    public void Wavelengths_of_a_stack_can_stand_in_a_table()
+    {
+        var outcomes = _bench.Fits(static writer =>
+        {
+            writer.WriteImage("", [.. LoadBench.Flux(), .. LoadBench.Flux(level: 20)], [N, 2]);
+            writer.WriteTable("TARGETS", 2, [ColumnDefinition.Strings("NAME", ["a", "b"])]);
+            writer.WriteTable("GRID", N, [ColumnDefinition.Doubles("WAVE", LoadBench.Linear(500, 1)) with { Unit = "nm" }]);
+        });
+        Assert.Equal(["a", "b"], outcomes.Select(static outcome => outcome.Observation!.Target));
+        Assert.Equal(5000, outcomes[1].Observation!.Spectra[0].Wavelength[0]);
+    }
+
+    [Fact]
+    public void Axis_that_counts_pixels_is_refused() => Assert.Equal("an axis that counts the pixels", LoadBench.Refused(_bench.Fits(static writer =>
+        writer.WriteImage("", LoadBench.Flux(), [N], LoadBench.Axis(1, 1)))).Found);
+
+    [Fact]
+    public void Wavelengths_in_an_alternate_description_are_used_where_the_first_counts_pixels()
+    {
+        var observation = _bench.One(static writer => writer.WriteImage("", LoadBench.Flux(), [N], LoadBench.Axis(1, 1,
+            Card.Of("CTYPE1W", "AWAV"), Card.Of("CUNIT1W", "nm"), Card.Of("CRVAL1W", 500.0), Card.Of("CDELT1W", 0.1), Card.Of("CRPIX1W", 1L))));
+        Assert.Equal(WavelengthMedium.Air, observation.Medium);
+        Assert.Equal(5001.394851, observation.Spectra[0].Wavelength[0], 1e-6);
+    }
+
+    [Fact]
+    public void Cube_is_refused() => Assert.Equal("an image of 20 x 20 x 50", LoadBench.Refused(_bench.Fits(static writer =>
+        writer.WriteImage("", new double[20 * 20 * 50], [20, 20, 50], [Card.Of("CTYPE3", "WAVE"), Card.Of("CRVAL3", 5000.0), Card.Of("CDELT3", 1.0)]))).Found);
+
     [Fact]
     public void Frame_without_anything_that_counts_its_rows_is_refused()
     {

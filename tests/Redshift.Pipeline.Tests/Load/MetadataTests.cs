@@ -24,9 +24,14 @@ public sealed class MetadataTests : IDisposable
         Assert.Equal(decDeg, observation.DecDeg!.Value, 1e-9);
     }
 
-    [Fact]
-    public void Hours_in_a_unit_comment_are_hours() =>
-        Assert.Equal(187.5, Observe(Card.Of("RA", 12.5, "[hours]"), Card.Of("DEC", 1.0)).RaDeg!.Value, 1e-9);
+    [Theory]
+    [InlineData(12.5, "[hours]", 187.5)]
+    [InlineData(12.5, "RA in hours", 187.5)]
+    [InlineData(187.5, "[hh:mm:ss] 12:30:00", 187.5)]
+    [InlineData(1.5, "[rad] right ascension", 85.943669)]
+    [InlineData(12.5, "right ascension", 12.5)]
+    public void Unit_of_a_plain_right_ascension_is_taken_from_its_comment(double value, string comment, double expected) =>
+        Assert.Equal(expected, Observe(Card.Of("RA", value, comment), Card.Of("DEC", 1.0)).RaDeg!.Value, 1e-6);
 
     [Fact]
     public void Position_of_the_target_wins_over_the_telescope() =>

@@ -206,5 +206,24 @@ public sealed class SpectralAxisTests : IDisposable
         Assert.Equal(6300, observation.Spectra[1].Wavelength[^1], 1e-9);
     }
 
+    // Pixel 64 of the range 1 to 127 is at x = 0, where the second Chebyshev polynomial is -1 and the second Legendre polynomial -1/2.
+    [Theory]
+    [InlineData("0 5800. 3. 64 0. 1. 8.", 5989)]
+    [InlineData("0 5800. 3. 64 0.001 1. 8.", 5989 / 1.001)]
+    [InlineData("1 3.7 0.0001 64 0. 1. 8.", 5085.105879)]
+    [InlineData("2 0. 0. 64 0. 1. 8. 1. 0. 1 3 1. 127. 6000. 100. 10.", 5990)]
+    [InlineData("2 0. 0. 64 0. 1. 8. 1. 0. 2 3 1. 127. 6000. 100. 10.", 5995)]
+    [InlineData("2 0. 0. 64 0. 1. 8. 1. 0. 3 1 1. 127. 950. 1000. 1050. 1100.", 6150)]
+    [InlineData("2 0. 0. 64 0. 1. 8. 1. 0. 4 2 1. 127. 5900. 6010. 6100.", 6010)]
+    [InlineData("2 0. 0. 64 0. 1. 8. 0.5 0. 1 2 1. 127. 6000. 100. 0.5 2. 1 2 1. 127. 6000. 100.", 6001)]
+    public void Single_aperture_is_evaluated_by_its_own_dispersion(string dispersion, double expected)
+    {
+        var text = $"wtype=multispec spec1 = \"1 1 {dispersion}\"";
+        List<Card> cards = [Card.Of("CTYPE1", "MULTISPE"), Card.Of("CRVAL1", 1.0), Card.Of("CD1_1", 1.0), Card.Of("VACUUM", true)];
+        for (var i = 0; 68 * i < text.Length; i++) cards.Add(Card.Of($"WAT2_{i + 1:000}", text[(68 * i)..Math.Min(text.Length, 68 * (i + 1))]));
+        var spectrum = _bench.One(writer => writer.WriteImage("", LoadBench.Flux(), [LoadBench.Pixels], cards)).Spectra[0];
+        Assert.Equal(expected, spectrum.Wavelength[63], 1e-3);
+    }
+
     private static double[] Sorted(Observation observation) => Assert.Single(observation.Spectra).Wavelength;
 }

@@ -119,13 +119,15 @@ public sealed class TableTests : IDisposable
         Assert.Equal(5000, observation.Spectra[0].Wavelength[0], 2);
     }
 
-    [Fact]
-    public void Two_fluxes_of_equal_standing_are_refused_with_their_names()
+    [Theory]
+    [InlineData("FLUX_WEST", "FLUX_EAST")]
+    [InlineData("FLUX_A", "FLUX_B")]
+    public void Two_fluxes_of_equal_standing_are_refused_with_their_names(string one, string other)
     {
-        var reject = LoadBench.Refused(_bench.Fits(static writer => writer.WriteTable("", LoadBench.Pixels,
-            [ColumnDefinition.Doubles("WAVE", Wavelengths), ColumnDefinition.Doubles("FLUX_WEST", LoadBench.Flux()), ColumnDefinition.Doubles("FLUX_EAST", LoadBench.Flux())])));
+        var reject = LoadBench.Refused(_bench.Fits(writer => writer.WriteTable("", LoadBench.Pixels,
+            [ColumnDefinition.Doubles("WAVE", Wavelengths), ColumnDefinition.Doubles(one, LoadBench.Flux()), ColumnDefinition.Doubles(other, LoadBench.Flux())])));
         Assert.Equal("HDU 1", reject.Place);
-        Assert.Equal("several candidates for the flux: FLUX_WEST, FLUX_EAST", reject.Found);
+        Assert.Equal($"several candidates for the flux: {one}, {other}", reject.Found);
         Assert.Equal("one, or a [[load]] rule that names it", reject.Expected);
     }
 
@@ -144,6 +146,35 @@ public sealed class TableTests : IDisposable
         Assert.Equal(LoadBench.Flux(level: 20), observation.Spectra[1].Flux);
         Assert.Equal(16, observation.Spectra[1].InverseVariance[0], 1e-12);
         Assert.Equal(5500, observation.Spectra[1].Wavelength[0]);
+    }
+
+    [Fact]
+    public void Rows_whose_ranges_follow_each_other_are_orders()
+    {
+        const int N = LoadBench.Pixels;
+        var observation = _bench.One(static writer => writer.WriteTable("SCI", 2,
+        [
+            ColumnDefinition.Doubles("WAVE", [.. Wavelengths, .. LoadBench.Linear(5500, 10)], N),
+            ColumnDefinition.Doubles("FLUX", [.. LoadBench.Flux(), .. LoadBench.Flux(level: 20)], N),
+        ]));
+        Assert.Equal(["order 1", "order 2"], observation.Spectra.Select(static spectrum => spectrum.Label));
+        Assert.Equal(LoadBench.Flux(level: 20), observation.Spectra[1].Flux);
+    }
+
+    [Theory]
+    [InlineData("EXPNUM", false)]
+    [InlineData("APERTURE", true)]
+    public void Rows_that_a_column_counts_are_one_object_unless_they_have_targets(string counter, bool hasTargets)
+    {
+        const int N = LoadBench.Pixels;
+        ColumnDefinition[] columns =
+        [
+            ColumnDefinition.Int16s(counter, [1, 2]), ColumnDefinition.Doubles("WAVE", [.. Wavelengths, .. Wavelengths], N),
+            ColumnDefinition.Doubles("FLUX", [.. LoadBench.Flux(), .. LoadBench.Flux(level: 20)], N),
+        ];
+        var outcomes = _bench.Fits(writer => writer.WriteTable("SCI", 2, hasTargets ? [.. columns, ColumnDefinition.Strings("TARGET", ["a", "b"])] : columns));
+        Assert.Equal(hasTargets ? ["a", "b"] : [""], outcomes.Select(static outcome => outcome.Observation!.Target));
+        if (!hasTargets) Assert.Equal(["expnum 1", "expnum 2"], outcomes[0].Observation!.Spectra.Select(static spectrum => spectrum.Label));
     }
 
     [Fact]
@@ -259,6 +290,74 @@ public sealed class TableTests : IDisposable
     }
 
     [Fact]
+    public void Units_that_count_exposures_are_spectra_of_one_observation()
+    {
+        var observation = _bench.One(static writer =>
+        {
+            writer.WriteTable("EXP1", LoadBench.Pixels, Columns(LoadBench.Flux()));
+            writer.WriteTable("EXP2", LoadBench.Pixels, Columns(LoadBench.Flux(level: 20)));
+        });
+        Assert.Equal(["EXP1", "EXP2"], observation.Spectra.Select(static spectrum => spectrum.Label));
+        Assert.Equal(LoadBench.Flux(level: 20), observation.Spectra[1].Flux);
+    }
+
+    [Fact]
+    public void Units_with_targets_of_their_own_are_observations_of_their_own()
+    {
+        var outcomes = _bench.Fits(static writer =>
+        {
+            writer.WriteTable("SLIT1", LoadBench.Pixels, Columns(LoadBench.Flux()), [Card.Of("OBJECT", "a")]);
+            writer.WriteTable("SLIT2", LoadBench.Pixels, Columns(LoadBench.Flux(level: 20)), [Card.Of("OBJECT", "b")]);
+        });
+        Assert.Equal(["a", "b"], outcomes.Select(static outcome => outcome.Observation!.Target));
+        Assert.Equal(LoadBench.Flux(level: 20), outcomes[1].Observation!.Spectra[0].Flux);
+    }
+
+    [Fact]
+    public void Units_of_equal_standing_are_refused_with_their_names() =>
+        Assert.Equal("HDU 1 (EAST), HDU 2 (WEST)", LoadBench.Refused(_bench.Fits(static writer =>
+        {
+            writer.WriteTable("EAST", LoadBench.Pixels, Columns(LoadBench.Flux()));
+            writer.WriteTable("WEST", LoadBench.Pixels, Columns(LoadBench.Flux(level: 20)));
+        })).Place);
+
+    [Theory]
+    [InlineData("", "", "")]
+    [InlineData("col1", "col2", "col3")]
+    public void Columns_without_names_are_wavelength_flux_and_error(string first, string second, string third)
+    {
+        // What makes it an error is that neighbouring fluxes differ by as much.
+        double[] flux = [.. Enumerable.Range(0, LoadBench.Pixels).Select(static i => 10 + 0.1 * (i % 2))];
+        var errors = LoadBench.Constant(0.1);
+        var spectrum = _bench.One(writer => writer.WriteTable("", LoadBench.Pixels,
+            [ColumnDefinition.Doubles(first, Wavelengths), ColumnDefinition.Doubles(second, flux), ColumnDefinition.Doubles(third, errors)])).Spectra[0];
+        Assert.Equal((5000, 10), (spectrum.Wavelength[0], spectrum.Flux[0]));
+        Assert.True(spectrum.HasErrors);
+    }
+
+    [Fact]
+    public void Logical_column_masks()
+    {
+        var spectrum = _bench.One(static writer => writer.WriteTable("", LoadBench.Pixels,
+            [.. Columns(LoadBench.Flux()), ColumnDefinition.Logicals("mask", static row => row == 3)])).Spectra[0];
+        Assert.Equal([4, 4, 4, 0, 4], spectrum.InverseVariance[..5]);
+    }
+
+    [Fact]
+    public void Error_named_after_a_flux_per_wavelength_is_no_error_of_the_wavelength() => Assert.Equal(4, _bench.One(static writer =>
+        writer.WriteTable("", LoadBench.Pixels,
+        [
+            ColumnDefinition.Doubles("LAMBDA", Wavelengths), ColumnDefinition.Doubles("F_LAMBDA", LoadBench.Flux()), ColumnDefinition.Doubles("E_F_LAMBDA", LoadBench.Constant(0.5)),
+        ])).Spectra[0].InverseVariance[0], 1e-12);
+
+    [Fact]
+    public void Flux_comes_before_its_normalised_form() => Assert.Equal(LoadBench.Flux(), _bench.One(static writer =>
+        writer.WriteTable("", LoadBench.Pixels,
+        [
+            ColumnDefinition.Doubles("WAVE", Wavelengths), ColumnDefinition.Doubles("NORM_FLUX", LoadBench.Constant(1)), ColumnDefinition.Doubles("INTENSITY", LoadBench.Flux()),
+        ])).Spectra[0].Flux);
+
+    [Fact]
     public void Versions_of_one_name_are_observations_of_their_own()
     {
         var outcomes = _bench.Fits(static writer =>
@@ -276,11 +375,14 @@ public sealed class TableTests : IDisposable
         var plain = _bench.One(static writer => writer.WriteTable("", LoadBench.Pixels, Columns(LoadBench.Flux())));
         var told = _bench.One(static writer => writer.WriteTable("", LoadBench.Pixels,
             [.. Columns(LoadBench.Flux()), ColumnDefinition.Doubles("Z", LoadBench.Constant(3.7)), ColumnDefinition.Strings("CLASS", 6, static _ => "GALAXY")],
-            [Card.Of("Z", 2.5), Card.Of("REDSHIFT", 2.5), Card.Of("CLASS", "QSO"), Card.Of("SUBCLASS", "BROADLINE"), Card.Of("ZSOURCE", 2.5), Card.Of("VELANGL", 3.0)]));
+            [Card.Of("OBJECT", "QSO at z = 2.5"), Card.Of("Z", 2.5), Card.Of("REDSHIFT", 2.5), Card.Of("CLASS", "QSO"), Card.Of("SUBCLASS", "BROADLINE"), Card.Of("ZSOURCE", 2.5), Card.Of("VELANGL", 3.0)]));
         Assert.Equal(plain.Spectra[0].Wavelength, told.Spectra[0].Wavelength);
         Assert.Equal(plain.Spectra[0].Flux, told.Spectra[0].Flux);
-        Assert.Equal((plain.Frame, plain.Medium, plain.Target), (told.Frame, told.Medium, told.Target));
+        Assert.Equal((plain.Frame, plain.Medium), (told.Frame, told.Medium));
         Assert.Equal(plain.Cautions, told.Cautions);
+        var pipeline = new ObservationPipeline(new());
+        var (answer, again) = (pipeline.Analyze(plain), pipeline.Analyze(told));
+        Assert.Equal((answer.Z, answer.ZErr, answer.Kind, answer.Confidence, answer.LnOdds), (again.Z, again.ZErr, again.Kind, again.Confidence, again.LnOdds));
     }
 
     [Fact]
@@ -294,7 +396,7 @@ public sealed class TableTests : IDisposable
                 Rules =
                 [
                     new() { When = new Dictionary<string, string> { ["INSTRUME"] = "OTHER" }, Flux = "FLUX_WEST" },
-                    new() { When = new Dictionary<string, string> { ["INSTRUME"] = "ODD" }, Hdu = "1", Wavelength = "LAM", WavelengthUnit = "nm", Flux = "FLUX_EAST", Error = "SCATTER_EAST", Medium = WavelengthMedium.Vacuum, Frame = VelocityFrame.Barycentric },
+                    new() { When = new Dictionary<string, string> { ["INSTRUME"] = "ODD" }, Hdus = ["1"], Wavelength = "LAM", WavelengthUnit = "nm", Flux = "FLUX_EAST", Error = "SCATTER_EAST", Medium = WavelengthMedium.Vacuum, Frame = VelocityFrame.Barycentric },
                 ],
             },
         };

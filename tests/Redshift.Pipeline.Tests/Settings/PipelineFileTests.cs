@@ -59,7 +59,7 @@ public sealed class PipelineFileTests
         Assert.Equal(["AIRMASS", "OBSERVER"], settings.Load.Keep);
         var rule = settings.Load.Rules[0];
         Assert.Equal(("Spec 1", "2"), (rule.When["INSTRUME"], rule.When["CAMERA"]));
-        Assert.Equal(("1", "row 0", "nm"), (rule.Hdu, rule.Wavelength, rule.WavelengthUnit));
+        Assert.Equal(("1", "row 0", "nm"), (Assert.Single(rule.Hdus), rule.Wavelength, rule.WavelengthUnit));
         Assert.Equal(("FLUX", "SIGMA", "BAD", 2.5), (rule.Flux, rule.Error, rule.Mask, rule.FwhmA));
         Assert.Equal((WavelengthMedium.Vacuum, VelocityFrame.Rest), (rule.Medium, rule.Frame));
         Assert.Equal([("blue", null, "HDU 4"), ("red", 900, null)], rule.Arms.Select(static arm => (arm.Name, arm.Resolution, arm.ResolutionPlace)));

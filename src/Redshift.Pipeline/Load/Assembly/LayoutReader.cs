@@ -1,6 +1,7 @@
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Load.Layouts;
 using Redshift.Pipeline.Load.Metadata;
+using Redshift.Pipeline.Load.Roles;
 using Redshift.Pipeline.Load.Rules;
 using Redshift.Pipeline.Load.SpectralAxis;
 using Redshift.Pipeline.Observations;
@@ -77,9 +78,12 @@ internal sealed class LayoutReader
         };
     }
 
+    /// <summary>Index and name of the unit with the flux.</summary>
+    public (string Index, string Name) FluxHdu => (_layout.Spectra[0].Flux.Place.Split(' ') is ["HDU", var index, ..] ? index : "", _layout.Header.Text("EXTNAME") ?? "");
+
     /// <summary>The load rule that gives the same reading.</summary>
-    /// <param name="unitName">Name of the unit, where several of one name give a layout each; else null.</param>
-    public string Rule(string? unitName) => RuleText.Write(_layout, _rule, unitName, _medium, _frame);
+    /// <param name="fluxHdus">The units with the flux of all layouts of the file.</param>
+    public string Rule(IReadOnlyList<(string Index, string Name)> fluxHdus) => RuleText.Write(_layout, _rule, fluxHdus, _medium, _frame);
 
     private IEnumerable<string> Cautions()
     {
@@ -97,5 +101,5 @@ internal sealed class LayoutReader
     private static bool IsNormalised(Layout layout) =>
         layout.Header.Flag("CONTNORM") == true
         || layout.Header.Text("FLUX_CAL", "FLUXCAL")?.BeginsWithAny("NORMALI") == true
-        || layout.Spectra[0].Flux.Label.Words.Any(static word => word is "nor" or "norm" or "normalized" or "normalised" or "normflux" or "nflux");
+        || layout.Spectra[0].Flux.Label.Words.Any(Vocabulary.Normalised.Contains);
 }

@@ -26,7 +26,7 @@ internal static class MediumChoice
     {
         var (shortest, longest) = Range(layout);
         if (longest < MediumFinder.AirBegins) return new(WavelengthMedium.Vacuum, false, "the convention below 2000 A");
-        var logarithmic = layout.Spectra[0].Wavelength.Unit?.BeginsWithAny("log") == true;
+        var logarithmic = layout.Spectra[0].Wavelength.Unit?.BeginsWithAny("log", "ln") == true;
         var (medium, why) = MediumFinder.Default(shortest, longest, logarithmic, layout.ListsWavelengths);
         return new(medium, true, why);
     }

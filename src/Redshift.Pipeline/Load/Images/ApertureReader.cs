@@ -8,9 +8,6 @@ namespace Redshift.Pipeline.Load.Images;
 /// <summary>Reads images whose rows have a dispersion each: echelle orders of one object, or fibres with an object each.</summary>
 internal static class ApertureReader
 {
-    // Neighbouring orders share little; fibres all see the same range.
-    private const double MostSharedByOrders = 0.8;
-
     /// <summary>The spectra of all apertures.</summary>
     /// <param name="family">The image and its siblings.</param>
     /// <param name="length">Pixels of a row.</param>
@@ -28,7 +25,7 @@ internal static class ApertureReader
                 : ImageReader.NoiseOf(family, length, rows),
             Mask = family.Array(Role.Mask, length, rows) is { } mask && mask.Length == length ? new(mask) : null,
         };
-        return rows > 1 && AreOrders(axes, rows, length)
+        return OrderRanges.AreOrders([.. axes.Take(rows).Select(axis => Range(axis, length))])
             ? new(Orders(all, new(axes, family.Flux.Index)), 1)
             : new([all], rows) { Targets = TargetTable.For(family.File, rows) };
     }
@@ -50,17 +47,6 @@ internal static class ApertureReader
         for (var band = 0; band < names?.Count; band++)
             if (RoleGuesser.Of(new(names[band])).Role == Role.Error) return band;
         return null;
-    }
-
-    private static bool AreOrders(IReadOnlyList<ApertureAxis> axes, int rows, int length)
-    {
-        for (var row = 1; row < rows; row++)
-        {
-            var (before, here) = (Range(axes[row - 1], length), Range(axes[row], length));
-            var shared = Math.Min(before.High, here.High) - Math.Max(before.Low, here.Low);
-            if (shared > MostSharedByOrders * Math.Min(before.High - before.Low, here.High - here.Low)) return false;
-        }
-        return true;
     }
 
     private static (double Low, double High) Range(ApertureAxis axis, int length)

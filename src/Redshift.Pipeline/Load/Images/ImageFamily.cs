@@ -2,6 +2,7 @@ using Redshift.Fits;
 using Redshift.Pipeline.Load.Layouts;
 using Redshift.Pipeline.Load.Metadata;
 using Redshift.Pipeline.Load.Roles;
+using Redshift.Pipeline.Load.Tables;
 
 namespace Redshift.Pipeline.Load.Images;
 
@@ -64,7 +65,7 @@ internal sealed class ImageFamily
     private ImageHdu? Sibling(Role role, int length)
     {
         foreach (var (hdu, _, itsRole) in _siblings)
-            if (itsRole == role && hdu.Shape[0] == length) return hdu;
+            if (itsRole == role && SpectralShape.Of(hdu)?.Lengths[0] == length) return hdu;
         return null;
     }
 
@@ -72,9 +73,12 @@ internal sealed class ImageFamily
     public NumberArray? Array(Role role, int length, int rows) =>
         Sibling(role, length) is { } hdu ? ArrayOf(hdu, length, rows) : null;
 
-    /// <summary>The wavelengths of a sibling, and the sibling.</summary>
-    public (NumberArray? Array, ImageHdu? Hdu) Wavelengths(int length, int rows) =>
-        Sibling(Role.Wavelength, length) is { } hdu && ArrayOf(hdu, length, rows) is { } array ? (array, hdu) : (null, null);
+    /// <summary>The wavelengths in a sibling, or in the only table that has as many, and where they are.</summary>
+    public (NumberArray? Array, Hdu? Hdu) Wavelengths(int length, int rows)
+    {
+        if (Sibling(Role.Wavelength, length) is { } hdu && ArrayOf(hdu, length, rows) is { } array) return (array, hdu);
+        return TableUnits.Wavelengths(File, length) is [var (column, table)] ? (column, table) : (null, null);
+    }
 
     /// <summary>An image as the companion of spectra: shared by all, or with one or more values a pixel for each.</summary>
     /// <param name="hdu">The image.</param>

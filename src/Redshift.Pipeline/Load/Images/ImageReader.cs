@@ -19,16 +19,11 @@ internal static class ImageReader
     /// <exception cref="LoadException">The structure is ambiguous or no spectrum.</exception>
     public static UnitContent Read(ImageFamily family)
     {
-        var shape = family.Flux.Shape;
-        if (shape.Any(static length => length > Array.MaxLength)) throw Unfit(family, "a spectrum along the first axis");
-        var lengths = shape.Select(static length => (int)length).ToArray();
-        var dimensions = lengths.Length;
-        while (dimensions > 1 && lengths[dimensions - 1] == 1) dimensions--;
-        return dimensions switch
+        return SpectralShape.Of(family.Flux)?.Lengths switch
         {
-            1 => OneAxis(family, lengths[0]),
-            2 => TwoAxes(family, lengths[0], lengths[1]),
-            3 => ThreeAxes(family, lengths[0], lengths[1], lengths[2]),
+            [var length] => OneAxis(family, length),
+            [var length, var rows] => TwoAxes(family, length, rows),
+            [var length, var apertures, var bands] => ThreeAxes(family, length, apertures, bands),
             _ => throw Unfit(family, "at most three axes"),
         };
     }
@@ -55,19 +50,20 @@ internal static class ImageReader
         if (apertures is 3 or 4 && BandReader.HasWavelengthRow(family, length)) return BandReader.Orders(family, length, apertures, bands);
         var axes = ApertureAxis.ReadAll(header);
         if (axes.Count >= apertures) return ApertureReader.Read(family, length, apertures, bands, axes);
-        var names = BandNames.Read(header, bands) ?? BandReader.UsualBands(bands) ?? throw Unfit(family, "bands named by BANDIDn");
+        var names = BandNames.Read(header, bands) ?? BandReader.UsualBands(bands) ?? throw Unfit(family, "a spectrum along one axis, or bands named by BANDIDn");
         return BandReader.Named(family, length, names, apertures);
     }
 
     // Rows are spectra where something counts them: a table with as many rows, noise of the same shape, an aperture card for each.
     private static bool IsStack(ImageFamily family, int length, int rows)
     {
-        if (AxisReader.IsForeign(family.Header, 2)) return false;
+        if (AxisReader.IsForeign(family.Header, SpectralShape.Of(family.Flux)!.Value.Axis + 1)) return false;
         if (TargetTable.For(family.File, rows) is not null) return true;
         var apertureCards = family.Header.Has("APNUM1") && family.Header.Has(HeaderScope.Indexed("APNUM", rows));
         var type = family.Header.Text("CTYPE2")?.ToUpperInvariant() ?? "";
         return apertureCards
             || type.ContainsAny("FIB", "SPEC", "APER")
+            || family.Wavelengths(length, rows).Array?.Rows == rows
             || HasNoiseOfItsRows(family, length, rows);
     }
 
@@ -89,6 +85,8 @@ internal static class ImageReader
             Width = WidthOf(family, length, rows),
         };
         var targets = rows > 1 ? TargetTable.For(family.File, rows) : null;
+        if (targets is null && listed is not null && OrderRanges.AreOrders(listed))
+            return new(sources.Numbered(), 1) { ListsWavelengths = true, WavelengthHdu = wavelengthHdu };
         return new([sources], rows) { ListsWavelengths = listed is not null, WavelengthHdu = wavelengthHdu, Targets = targets };
     }
 
@@ -110,11 +108,12 @@ internal static class ImageReader
     /// <summary>The axis of the image's own header, or of the primary one where its own has none.</summary>
     public static AxisWavelengths AxisOf(ImageFamily family, int length)
     {
-        if (AxisReader.IsForeign(family.Header, 1)) throw Unfit(family, "a spectral first axis");
-        var axis = AxisReader.Read(family.Header, 1, length, family.File);
+        var number = SpectralShape.Of(family.Flux)!.Value.Axis;
+        if (AxisReader.IsForeign(family.Header, number)) throw Unfit(family, "a spectral first axis");
+        var axis = AxisReader.Read(family.Header, number, length, family.File);
         return axis is null
-            ? throw new LoadException(PlaceOf(family), "neither CRVAL1 with CDELT1 or CD1_1 nor an array of wavelengths", "wavelengths")
-            : new(axis, family.Flux.Index);
+            ? throw new LoadException(PlaceOf(family), $"neither CRVAL{number} with CDELT{number} or CD{number}_{number} nor an array of wavelengths", "wavelengths")
+            : new(axis, family.Flux.Index, number);
     }
 
     private static UnitContent SidewaysTable(ImageFamily family, int columns)

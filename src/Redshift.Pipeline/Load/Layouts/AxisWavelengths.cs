@@ -5,7 +5,10 @@ using Redshift.Pipeline.Load.SpectralAxis;
 namespace Redshift.Pipeline.Load.Layouts;
 
 /// <summary>Wavelengths computed from a header.</summary>
-internal sealed class AxisWavelengths(PixelAxis axis, int hdu) : WavelengthSource
+/// <param name="axis">The axis.</param>
+/// <param name="hdu">Index of the unit.</param>
+/// <param name="number">1-based number of the axis.</param>
+internal sealed class AxisWavelengths(PixelAxis axis, int hdu, int number = 1) : WavelengthSource
 {
     /// <inheritdoc/>
     public override string Place => $"HDU {hdu} axis";
@@ -26,8 +29,8 @@ internal sealed class AxisWavelengths(PixelAxis axis, int hdu) : WavelengthSourc
     public override bool IsUnitAssumed => axis.Why == LegacyAxis.GuessedWhy && axis.Unit != SpectralUnit.Angstrom.ToString();
 
     /// <inheritdoc/>
-    public override WavelengthSource In(SpectralUnit unit, HeaderScope header) => AxisReader.LinearPart(header, 1) is { } pixels
-        ? new AxisWavelengths(new LinearAxis(pixels, unit, axis.Medium) { Why = "the unit of the pipeline file" }, hdu)
+    public override WavelengthSource In(SpectralUnit unit, HeaderScope header) => AxisReader.LinearPart(header, number) is { } pixels
+        ? new AxisWavelengths(new LinearAxis(pixels, unit, axis.Medium) { Why = "the unit of the pipeline file" }, hdu, number)
         : base.In(unit, header);
 
     /// <inheritdoc/>

@@ -1,3 +1,4 @@
+using System.Text.RegularExpressions;
 using Redshift.Fits;
 using Redshift.Pipeline.Load.Images;
 using Redshift.Pipeline.Load.Metadata;
@@ -7,16 +8,16 @@ using Redshift.Pipeline.Observations;
 namespace Redshift.Pipeline.Load.Layouts;
 
 /// <summary>Finds the observations of a FITS file: which of its units hold spectra, and which of these belong together.</summary>
-internal static class FitsLayouts
+internal static partial class FitsLayouts
 {
     /// <summary>The layouts, in the order of the rows they give.</summary>
     /// <exception cref="LoadException">Nothing is a spectrum, or the structure is ambiguous.</exception>
     /// <param name="file">The file.</param>
-    /// <param name="only">Index or name of the only unit to look at, or null for all.</param>
-    public static IReadOnlyList<Layout> Find(FitsFile file, string? only = null)
+    /// <param name="only">Indices or names of the only units to look at; null or empty for all.</param>
+    public static IReadOnlyList<Layout> Find(FitsFile file, IReadOnlyList<string>? only = null)
     {
-        var tables = TableUnits.Find(file).Where(unit => unit.IsCalled(only)).ToList();
-        List<SpectrumUnit> units = tables.Count > 0 ? tables : [.. ImageUnits.Find(file).Where(unit => unit.IsCalled(only))];
+        var tables = TableUnits.Find(file).Where(unit => unit.IsOneOf(only)).ToList();
+        List<SpectrumUnit> units = tables.Count > 0 ? tables : [.. ImageUnits.Find(file).Where(unit => unit.IsOneOf(only))];
         if (units.Count == 0) throw NothingFound(file);
         var best = BestForms(units, out var aside);
         var layouts = Combine(best, file);
@@ -40,8 +41,8 @@ internal static class FitsLayouts
         if (units.Count == 1) return [Single(units[0], file)];
         if (units.Select(static unit => unit.Arm).Distinct().Count() == units.Count) return [Arms(units, file)];
         if (AreOrders(units)) return [Orders(units, file)];
-        if (AreVersions(units)) return [.. units.Select(unit => Single(unit, file))];
-        return [Covering(units, file)];
+        if (AreVersions(units) || AreTargets(units)) return [.. units.Select(unit => Single(unit, file))];
+        return [AreExposures(units) ? Exposures(units, file) : Covering(units, file)];
     }
 
     private static Layout Single(SpectrumUnit unit, FitsFile file)
@@ -93,18 +94,41 @@ internal static class FitsLayouts
         units.All(unit => unit.Hdu.Name.Equals(units[0].Hdu.Name, StringComparison.OrdinalIgnoreCase) && unit.Hdu.Name.Length > 0)
         && units.Select(static unit => unit.Hdu.Version).Distinct().Count() == units.Count;
 
+    private static bool AreTargets(List<SpectrumUnit> units)
+    {
+        var targets = units.Select(TargetOf).ToList();
+        return !targets.Contains(null) && targets.Distinct().Count() == units.Count;
+    }
+
+    private static string? TargetOf(SpectrumUnit unit) =>
+        new HeaderScope([unit.Hdu.Header]).Text("OBJECT", "OBJNAME", "TARGNAME", "TARGET", "TARGETID", "SOURCEID", "SLTNAME");
+
+    private static bool AreExposures(List<SpectrumUnit> units) => units.All(static unit => ExposurePattern().IsMatch(unit.Hdu.Name));
+
+    private static Layout Exposures(List<SpectrumUnit> units, FitsFile file) => Single(units[0], file) with
+    {
+        Spectra = [.. units.SelectMany(static unit => unit.Read().Labelled(unit.Hdu.Name))],
+        Notes = [new("spectra", Places(units), "the exposures that the names count")],
+    };
+
     // A unit that covers all the others, or stands before a set of tables that differ from it but not among themselves, is their
     // sum; without one, nothing says which to take.
     private static Layout Covering(List<SpectrumUnit> units, FitsFile file)
     {
         var layouts = units.Select(unit => Single(unit, file)).ToList();
         var (low, high) = Range(layouts[0]);
-        var covers = layouts.Skip(1).Select(Range).All(range => range.Low > low * 0.999 && range.High < high * 1.001);
+        var others = layouts.Skip(1).Select(Range).ToList();
+        // Several of one range are rivals; a sum reaches further than at least one of its parts.
+        var covers = others.TrueForAll(range => range.Low > low * 0.999 && range.High < high * 1.001)
+            && (others.Exists(range => range.Low > low * 1.001 || range.High < high * 0.999) || !AreAlike(units));
         if ((!covers && !IsFirstAmongAlike(units)) || layouts[0].Rows != 1)
             throw new LoadException(Places(units), $"{units.Count} units with spectra of equal standing", "one, or a [[load]] rule that names it");
         var sum = new ReadingNote("spectrum", units[0].Place, $"the sum of {Places(units.Skip(1))}, which are parts or exposures");
         return layouts[0] with { Notes = [.. layouts[0].Notes, sum] };
     }
+
+    private static bool AreAlike(List<SpectrumUnit> units) =>
+        units.Select(static unit => unit.Hdu is TableHdu table ? Names(table, int.MaxValue) : "").Distinct().Count() == 1;
 
     private static bool IsFirstAmongAlike(List<SpectrumUnit> units)
     {
@@ -142,4 +166,7 @@ internal static class FitsLayouts
         TableHdu table => $"HDU {hdu.Index} {hdu.Name} table of {table.RowCount} rows with {Names(table, 12)}",
         _ => $"HDU {hdu.Index} {hdu.Name} without data",
     }));
+
+    [GeneratedRegex(@"^(?:exp(?:osure)?|visit|epoch|frame|night|obs|sub)[\W_]*\d+$", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant)]
+    private static partial Regex ExposurePattern();
 }

@@ -1,3 +1,4 @@
+using System.Globalization;
 using Redshift.Pipeline.Load.Assembly;
 using Redshift.Pipeline.Load.Roles;
 
@@ -6,6 +7,9 @@ namespace Redshift.Pipeline.Load.Layouts;
 /// <summary>What fills the roles of one spectrum of an observation.</summary>
 internal sealed record SpectrumSources
 {
+    /// <summary>The word of a load rule for orders that nothing but their place numbers.</summary>
+    public const string RowNumbers = "row";
+
     /// <summary>Arm, order or exposure; empty where there is only one spectrum.</summary>
     public string Label { get; init; } = "";
 
@@ -39,6 +43,10 @@ internal sealed record SpectrumSources
     /// <summary>The places of all that is used.</summary>
     public IEnumerable<string> Places =>
         new[] { Wavelength.Place, Flux.Place, Noise?.Values.Place, Mask?.Place, Width?.Place }.OfType<string>();
+
+    /// <summary>All rows as orders of one object, numbered from 1.</summary>
+    public IReadOnlyList<SpectrumSources> Numbered() =>
+        [.. Enumerable.Range(0, Flux.Rows).Select(row => AtRow(row, string.Create(CultureInfo.InvariantCulture, $"order {row + 1}"), RowNumbers))];
 
     /// <summary>One row of many as a spectrum of its own.</summary>
     /// <param name="row">Which row.</param>

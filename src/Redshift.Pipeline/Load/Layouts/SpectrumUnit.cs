@@ -34,9 +34,9 @@ internal sealed class SpectrumUnit
     /// <summary>Its place as a rule names it.</summary>
     public string Place => Hdu.Name.Length > 0 ? $"HDU {Hdu.Index} ({Hdu.Name})" : $"HDU {Hdu.Index}";
 
-    /// <summary>Whether it has this index or name; null fits all.</summary>
-    public bool IsCalled(string? name) =>
-        name is null || Hdu.Name.Equals(name, StringComparison.OrdinalIgnoreCase) || Hdu.Index.ToString(CultureInfo.InvariantCulture) == name;
+    /// <summary>Whether it has one of these indices or names; null or no names fit all.</summary>
+    public bool IsOneOf(IReadOnlyList<string>? names) => names is not { Count: > 0 }
+        || names.Any(name => Hdu.Name.Equals(name, StringComparison.OrdinalIgnoreCase) || Hdu.Index.ToString(CultureInfo.InvariantCulture) == name);
 
     /// <summary>Reads the layout.</summary>
     public UnitContent Read() => _read();

@@ -9,6 +9,12 @@ internal sealed class HeaderScope(params IReadOnlyList<Header> headers)
     /// <summary>Nothing known, as for text files.</summary>
     public static HeaderScope Empty { get; } = new([]);
 
+    /// <summary>The letter behind keywords of an alternate description of the axes (FITS Standard 4.0, section 8.2.1), or empty.</summary>
+    private string Version { get; init; } = "";
+
+    /// <summary>The same headers, for keywords of an alternate description of the axes.</summary>
+    public HeaderScope Alternate(char version) => new(headers) { Version = version.ToString() };
+
     /// <summary>All cards, the closest header first.</summary>
     public IEnumerable<Card> Cards => headers.SelectMany(static header => header);
 
@@ -17,7 +23,7 @@ internal sealed class HeaderScope(params IReadOnlyList<Header> headers)
     {
         foreach (var keyword in keywords)
             foreach (var header in headers)
-                if (header.Find(keyword) is { Value.Kind: not (CardValueKind.None or CardValueKind.Undefined) } card) return card;
+                if (header.Find(keyword + Version) is { Value.Kind: not (CardValueKind.None or CardValueKind.Undefined) } card) return card;
         return null;
     }
 
@@ -34,7 +40,7 @@ internal sealed class HeaderScope(params IReadOnlyList<Header> headers)
     {
         foreach (var keyword in keywords)
             foreach (var header in headers)
-                if (header.GetDouble(keyword) is { } number && double.IsFinite(number)) return number;
+                if (header.GetDouble(keyword + Version) is { } number && double.IsFinite(number)) return number;
         return null;
     }
 

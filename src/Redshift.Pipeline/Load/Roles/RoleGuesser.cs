@@ -67,7 +67,8 @@ internal static class RoleGuesser
         if (words.Contains("resolution") || words.Contains("resol")) return Role.Resolution;
         var deviation = DeviationOf(words);
         var foreign = Any(Vocabulary.Foreign);
-        if (deviation != Role.Other) return foreign || Any(Vocabulary.Wavelength) || Any(Vocabulary.Sky) ? Role.Other : deviation;
+        var isOfWavelength = Any(Vocabulary.Wavelength) && !words.Any(Vocabulary.Flux.ContainsKey);
+        if (deviation != Role.Other) return foreign || isOfWavelength || Any(Vocabulary.Sky) ? Role.Other : deviation;
         if (Any(Vocabulary.Sky)) return Role.Sky;
         if (foreign) return Role.Other;
         if (Any(Vocabulary.Mask)) return Role.Mask;
@@ -81,7 +82,8 @@ internal static class RoleGuesser
     {
         bool Any(IReadOnlySet<string> set) => words.Any(set.Contains);
         if (Any(Vocabulary.InverseVariance) || (words.Contains("inv") && Any(Vocabulary.Variance))) return Role.InverseVariance;
-        if (Any(Vocabulary.Variance)) return Role.Variance;
+        // The partner of an image called DATA holds its statistical variance.
+        if (Any(Vocabulary.Variance) || words is ["stat"]) return Role.Variance;
         var prefixed = words.Count > 1 && words[0] is "e" or "d" && words.Skip(1).Any(Vocabulary.Flux.ContainsKey);
         return Any(Vocabulary.Error) || prefixed ? Role.Error : Role.Other;
     }
@@ -90,6 +92,7 @@ internal static class RoleGuesser
     {
         var rank = role == Role.Flux ? words.Where(Vocabulary.Flux.ContainsKey).Min(word => Vocabulary.Flux[word]) : 0;
         if (role == Role.Wavelength && words.Contains("air")) rank++;
+        if (role == Role.Flux && words.Any(Vocabulary.Normalised.Contains)) rank++;
         if (role == Role.Mask && (words.Contains("ormask") || words.Contains("or"))) rank++;
         return rank + VariantPenalty * Qualifiers(words).Count(static word => !Vocabulary.Better.Contains(word) && word is not "air");
     }

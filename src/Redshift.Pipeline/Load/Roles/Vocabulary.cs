@@ -74,12 +74,15 @@ internal static class Vocabulary
         "snr", "sn", "mag", "ratio", "sys", "syserror", "syserr", "systematic", "min", "max", "eff", "step", "delta", "width", "npix",
         "chi", "order", "index", "id", "time", "number", "nexp", "covar", "covariance", "lya", "spot", "trace", "profile");
 
+    /// <summary>Words of a flux that is divided by its continuum, and so comes second to the flux itself.</summary>
+    public static readonly FrozenSet<string> Normalised = Set("nor", "norm", "normalized", "normalised", "normflux", "nflux");
+
     /// <summary>Words that choose the better of two forms of the same array.</summary>
     public static readonly FrozenSet<string> Better = Set("opt", "optimal", "optimally", "horne", "coadd", "coadded", "combined", "vac", "vacuum", "merged", "final", "main");
 
     /// <summary>Words that change nothing.</summary>
     public static readonly FrozenSet<string> Neutral = Set(
-        "density", "total", "cal", "calibrated", "obs", "observed", "axis", "spectral", "grid", "array", "vector", "log", "log10", "ln", "nm", "um", "a", "aa",
+        "density", "total", "cal", "calibrated", "obs", "observed", "axis", "spectral", "grid", "array", "vector", "log", "log10", "ln", "nm", "um", "aa",
         "of", "the", "per", "in", "values", "column", "object", "target", "stat", "statistical", "inverse", "extracted", "source", "10", "and");
 
     private static FrozenSet<string> Set(params string[] words) => words.ToFrozenSet(StringComparer.Ordinal);

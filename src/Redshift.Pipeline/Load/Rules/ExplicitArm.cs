@@ -36,11 +36,10 @@ internal sealed record ExplicitArm(IReadOnlyList<SpectrumSources> Spectra, int R
     private static IReadOnlyList<SpectrumSources> Orders(SpectrumSources all, FitsReferences arrays, string order, WavelengthSource wavelength)
     {
         if (ArrayReference.Parse(order).IsAxis && wavelength is ApertureWavelengths apertures) return ApertureReader.Orders(all, apertures);
-        if (!order.Equals(RowNumbers, StringComparison.OrdinalIgnoreCase)) return TableUnits.Orders(all, arrays.Column(order));
-        return [.. Enumerable.Range(0, all.Flux.Rows).Select(row => all.AtRow(row, $"order {row + 1}", RowNumbers))];
+        return order.Equals(SpectrumSources.RowNumbers, StringComparison.OrdinalIgnoreCase)
+            ? all.Numbered()
+            : TableUnits.Orders(all, arrays.Column(order));
     }
-
-    private const string RowNumbers = "row";
 
     private static (WavelengthSource Source, Hdu Hdu) Wavelength(FitsFile file, FitsReferences arrays, SpectrumRule rule, NumberArray flux, Hdu fluxHdu)
     {
@@ -64,11 +63,12 @@ internal sealed record ExplicitArm(IReadOnlyList<SpectrumSources> Spectra, int R
     {
         var header = FitsLayouts.ScopeOf(hdu, file);
         if (ApertureAxis.ReadAll(header) is { Count: > 0 } apertures && apertures.Count >= flux.Rows) return new ApertureWavelengths(apertures, hdu.Index);
-        var found = unit is { } stated && AxisReader.LinearPart(header, 1) is { } pixels
+        var number = hdu is ImageHdu image && SpectralShape.Of(image) is { } shape ? shape.Axis : 1;
+        var found = unit is { } stated && AxisReader.LinearPart(header, number) is { } pixels
             ? new LinearAxis(pixels, stated, null) { Why = "the unit of the pipeline file" }
-            : AxisReader.Read(header, 1, flux.Length, file);
+            : AxisReader.Read(header, number, flux.Length, file);
         return found is null
-            ? throw new LoadException($"HDU {hdu.Index}", "no axis", "CRVAL1 with CDELT1 or CD1_1")
-            : new AxisWavelengths(found, hdu.Index);
+            ? throw new LoadException($"HDU {hdu.Index}", "no axis", $"CRVAL{number} with CDELT{number} or CD{number}_{number}")
+            : new AxisWavelengths(found, hdu.Index, number);
     }
 }

@@ -74,21 +74,17 @@ internal sealed class FitsReferences(FitsFile file, Hdu? own)
 
     private static NumberArray? OfImage(ImageHdu image, ArrayReference reference, NumberArray? flux)
     {
-        if (image.Shape[0] > System.Array.MaxLength) return null;
-        var length = (int)image.Shape[0];
+        if (SpectralShape.Of(image) is not { Lengths: [var length, ..] lengths }) return null;
         var rows = image.Count / length;
         if (reference.Column is { } column) return SidewaysColumn(image, column);
         if (reference.Row is { } row) return row < rows ? Part(image, length, 1, row, $"row {row}") : null;
-        if (reference.Band is { } band) return BandOf(image, length, band);
+        if (reference.Band is { } band) return BandOf(image, lengths, band);
         if (flux is not null && ImageFamily.ArrayOf(image, flux.Length, flux.Rows) is { } companion) return companion;
         return rows <= System.Array.MaxLength ? Part(image, length, (int)rows, 0, "") : null;
     }
 
-    private static ImageArray? BandOf(ImageHdu image, int length, int band)
-    {
-        if (image.Shape is not [_, var rows, var bands, ..] || band >= bands || rows > System.Array.MaxLength) return null;
-        return Part(image, length, (int)rows, band * rows, $"band {band}");
-    }
+    private static ImageArray? BandOf(ImageHdu image, IReadOnlyList<int> lengths, int band) =>
+        lengths is [var length, var rows, var bands] && band < bands ? Part(image, length, rows, (long)band * rows, $"band {band}") : null;
 
     private static ImageArray Part(ImageHdu image, int length, int rows, long firstRow, string name) =>
         new(image, length, rows, firstRow * length, length) { Place = $"HDU {image.Index} {name}".TrimEnd(), Label = ImageFamily.LabelOf(image) };

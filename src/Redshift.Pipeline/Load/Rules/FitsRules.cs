@@ -18,14 +18,12 @@ internal static class FitsRules
             return [.. FitsLayouts.Find(file).Select(static layout => (layout, (LoadRule?)null))];
         if (rule.Flux is not null || rule.Arms.Any(static arm => arm.Flux is not null))
             return [.. Units(file, rule).Select(own => (Explicit(file, rule, own), (LoadRule?)rule))];
-        return [.. FitsLayouts.Find(file, rule.Hdu).Select(layout => (Override(layout, file, rule), (LoadRule?)rule))];
+        return [.. FitsLayouts.Find(file, rule.Hdus).Select(layout => (Override(layout, file, rule), (LoadRule?)rule))];
     }
 
-    private static IReadOnlyList<Hdu?> Units(FitsFile file, LoadRule rule)
-    {
-        if (rule.Hdu is not { } name) return [null];
-        return FitsReferences.Units(file, name) is { Count: > 0 } units ? units : throw FitsReferences.Missing($"HDU {name}");
-    }
+    private static IReadOnlyList<Hdu?> Units(FitsFile file, LoadRule rule) => rule.Hdus.Count == 0
+        ? [null]
+        : [.. rule.Hdus.SelectMany(name => FitsReferences.Units(file, name) is { Count: > 0 } units ? units : throw FitsReferences.Missing($"HDU {name}"))];
 
     private static Layout Explicit(FitsFile file, LoadRule rule, Hdu? own)
     {
@@ -49,7 +47,7 @@ internal static class FitsRules
 
     private static Layout Override(Layout layout, FitsFile file, LoadRule rule)
     {
-        var arrays = new FitsReferences(file, rule.Hdu is { } name && FitsReferences.Units(file, name) is [var own, ..] ? own : null);
+        var arrays = new FitsReferences(file, rule.Hdus is [var name, ..] && FitsReferences.Units(file, name) is [var own, ..] ? own : null);
         return layout with
         {
             Spectra = [.. layout.Spectra.Select(spectrum => Override(spectrum, arrays, rule, layout.Header))],

@@ -24,26 +24,27 @@ internal sealed class RuleText
     private readonly Layout _layout;
     private readonly string? _unit;
 
-    private RuleText(Layout layout, bool isOneOfSeveral)
+    private RuleText(Layout layout, string? unit)
     {
         _layout = layout;
-        _unit = isOneOfSeveral ? layout.Spectra[0].Flux.Place.Split(' ')[1] : null;
+        _unit = unit;
     }
 
     /// <summary>The rule of a layout.</summary>
     /// <param name="layout">The layout.</param>
     /// <param name="given">The rule by which it was read, or null.</param>
-    /// <param name="name">Name of its unit where several units of this name give a layout each; null where there is but one layout.</param>
+    /// <param name="fluxHdus">Index and name of the units with the flux, one for each layout of the file.</param>
     /// <param name="medium">The medium as it was settled.</param>
     /// <param name="frame">The frame as it was settled.</param>
     /// <returns>TOML.</returns>
-    public static string Write(Layout layout, LoadRule? given, string? name, Setting<WavelengthMedium> medium, Setting<VelocityFrame> frame)
+    public static string Write(
+        Layout layout, LoadRule? given, IReadOnlyList<(string Index, string Name)> fluxHdus, Setting<WavelengthMedium> medium, Setting<VelocityFrame> frame)
     {
-        var rule = new RuleText(layout, name is not null);
+        var rule = new RuleText(layout, fluxHdus.Count > 1 ? layout.Spectra[0].Flux.Place.Split(' ')[1] : null);
         // The orders of an arm are one entry, whatever their number.
         var arms = layout.Spectra.DistinctBy(static one => one.Orders is null ? (one.Label, "") : (one.Arm, one.Flux.Place)).ToList();
         var hasArms = arms.Count > 1 || arms[0].Arm.Length > 0;
-        rule.Head(name);
+        rule.Head(fluxHdus);
         if (!hasArms) rule.Roles(arms[0]);
         rule.Value("medium", Words.Of(medium.Value), medium.Assumed, medium.Why);
         rule.Value("frame", Words.Of(frame.Value), frame.Assumed, frame.Why);
@@ -52,13 +53,15 @@ internal sealed class RuleText
         return rule._text.ToString();
     }
 
-    private void Head(string? name)
+    private void Head(IReadOnlyList<(string Index, string Name)> fluxHdus)
     {
         _text.Append("[[load]]\n");
         var conditions = Origins.Select(keyword => (keyword, Text: _layout.Header.Text(keyword))).Where(static origin => origin.Text is not null).ToList();
         if (conditions.Count == 0) _text.Append("# It holds for all files: name header cards in when = { KEYWORD = \"value\" } to choose some.\n");
         else _text.Append("when = { ").AppendJoin(", ", conditions.Select(static origin => $"{origin.keyword} = {Quoted(origin.Text!)}")).Append(" }\n");
-        Value("hdu", name);
+        if (fluxHdus.Count == 1) return;
+        if (fluxHdus[0].Name.Length > 0 && fluxHdus.All(hdu => hdu.Name == fluxHdus[0].Name)) Value("hdu", fluxHdus[0].Name);
+        else _text.Append("hdu = [").AppendJoin(", ", fluxHdus.Select(static hdu => hdu.Index)).Append("]\n");
     }
 
     private void Targets(LoadRule given)

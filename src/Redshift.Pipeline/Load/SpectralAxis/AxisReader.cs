@@ -19,11 +19,23 @@ internal static class AxisReader
     public static PixelAxis? Read(HeaderScope header, int axis, int length, FitsFile? file)
     {
         var type = TypeOf(header, axis);
+        if (type is null && IsUncalibrated(header, axis) && AlternateOf(header, axis) is { } alternate) return Read(alternate, axis, length, file);
         if (type is { } known && IsTable(known.Code)) return TableAxisReader.Read(header, axis, known.Variable, file);
         if (LinearPart(header, axis) is not { } pixels) return LogarithmCards(header);
         return type is { } standard
             ? Standard(header, axis, standard.Variable, standard.Code, pixels, length)
             : LegacyAxis.Read(header, axis, pixels, length);
+    }
+
+    private static bool IsUncalibrated(HeaderScope header, int axis) =>
+        LinearPart(header, axis) is { } pixels ? LegacyAxis.CountsPixels(pixels) : LogarithmCards(header) is null;
+
+    // Where the first description counts pixels, another may tell wavelengths.
+    private static HeaderScope? AlternateOf(HeaderScope header, int axis)
+    {
+        for (var version = 'A'; version <= 'Z'; version++)
+            if (header.Alternate(version) is var alternate && TypeOf(alternate, axis) is not null) return alternate;
+        return null;
     }
 
     /// <summary>Whether CTYPE names a celestial, time or other axis that is not spectral.</summary>

@@ -9,8 +9,11 @@ namespace Redshift.Pipeline.Load.SpectralAxis;
 internal static class LegacyAxis
 {
     /// <summary>Reads the axis.</summary>
+    /// <exception cref="LoadException">It is none of wavelengths.</exception>
     public static PixelAxis Read(HeaderScope header, int axis, LinearPixels pixels, int length)
     {
+        if (CountsPixels(pixels))
+            throw new LoadException($"keyword CRVAL{axis}", "an axis that counts the pixels", "wavelengths");
         var (low, high) = AxisReader.Ends(pixels, length);
         var stated = UnitText.Find(header, axis);
         var logarithm = LogarithmOf(header, axis, pixels, low, high, stated?.Unit);
@@ -23,6 +26,9 @@ internal static class LegacyAxis
             return new LinearAxis(pixels, found.Unit, null) { Why = $"unit from {found.Where}" };
         return new LinearAxis(pixels, WavelengthGuess.Unit(low, high), null) { Why = GuessedWhy };
     }
+
+    /// <summary>Whether an axis says no more than that pixel n is at n, as in frames without calibration.</summary>
+    public static bool CountsPixels(LinearPixels pixels) => pixels.Increment == 1 && pixels.At(1) is 0 or 1;
 
     /// <summary>The reason given where a unit was judged by the size of the values.</summary>
     public const string GuessedWhy = "unit judged by the size of the values";

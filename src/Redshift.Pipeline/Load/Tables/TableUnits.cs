@@ -16,7 +16,7 @@ internal static class TableUnits
     private static readonly string[] OrderColumns = ["SPORDER", "ORDER", "ORDERS", "ECH_ORDER"];
 
     // Parts of a spectrograph, or of a field with a target each.
-    private static readonly string[] PartColumns = ["SEGMENT", "ARM", "CHIP", "CAMERA", "CHANNEL", "APERTURE"];
+    private static readonly string[] PartColumns = ["SEGMENT", "ARM", "CHIP", "CAMERA", "CHANNEL", "APERTURE", "EXPNUM", "EXPID", "EXP_ID", "VISIT", "EPOCH"];
 
     private static readonly string[] StepColumns = ["DELTAW", "DELTA", "STEP", "DW", "DLAMBDA", "DELTA_WAVE", "WAVESTEP", "CDELT"];
 
@@ -48,6 +48,16 @@ internal static class TableUnits
             : new ColumnArray(column, rows) { Place = place, Label = label };
     }
 
+    /// <summary>The columns of wavelengths, as many as the pixels of an image, that tables beside it hold.</summary>
+    public static IReadOnlyList<(NumberArray Array, Hdu Table)> Wavelengths(FitsFile file, int length) =>
+    [
+        .. from table in file.Hdus.OfType<TableHdu>()
+           where table.RowCount == length || table.RowCount == 1
+           from array in Form(table) ?? []
+           where array.Length == length && RoleGuesser.Of(array.Label).Role == Role.Wavelength
+           select (array, (Hdu)table),
+    ];
+
     private static bool IsVector(TableColumn column) => IsCell(column) && CellLength(column) >= FewestPixels;
 
     // The bits of a cell are the several flags of one pixel, unless they are more than an integer would hold.
@@ -72,6 +82,7 @@ internal static class TableUnits
 
     private static bool HoldsSpectra(IReadOnlyList<NumberArray> arrays, TableHdu table, FitsFile file)
     {
+        if (ColumnsByPlace.AreNameless(arrays)) return true;
         var roles = new RoleChoice(arrays, Name(table));
         if (!roles.Has(Role.Flux)) return false;
         if (roles.Has(Role.Wavelength)) return true;
@@ -82,10 +93,12 @@ internal static class TableUnits
 
     private static UnitContent Read(TableHdu table, IReadOnlyList<NumberArray> arrays, FitsFile file)
     {
+        if (ColumnsByPlace.AreNameless(arrays)) return new([ColumnsByPlace.Read(arrays)], arrays[1].Rows) { ListsWavelengths = true };
         var roles = new RoleChoice(arrays, Name(table));
         var flux = roles.Single(Role.Flux)!;
-        WavelengthSource wavelength = roles.Has(Role.Wavelength)
-            ? new ArrayWavelengths(WavelengthOf(roles, flux))
+        var listed = roles.Has(Role.Wavelength) ? WavelengthOf(roles, flux) : null;
+        WavelengthSource wavelength = listed is not null
+            ? new ArrayWavelengths(listed)
             : (WavelengthSource?)Steps(table) ?? Axis(table, flux.Length, file)!;
         var sources = new SpectrumSources
         {
@@ -95,18 +108,21 @@ internal static class TableUnits
             Mask = roles.MaskOf(flux),
             Width = roles.WidthOf(flux),
         };
-        return Arrange(table, sources, file) with { ListsWavelengths = true, Notes = Notes(roles, sources) };
+        return Arrange(table, sources, listed, file) with { ListsWavelengths = true, Notes = Notes(roles, sources) };
     }
 
     // Where several columns give wavelengths, the flux's own qualifiers decide before the plainest name does.
     private static NumberArray WavelengthOf(RoleChoice roles, NumberArray flux) =>
         RoleGuesser.Qualifiers(flux.Label.Words).Any() ? roles.Belonging(Role.Wavelength, flux)! : roles.Single(Role.Wavelength)!;
 
-    private static UnitContent Arrange(TableHdu table, SpectrumSources sources, FitsFile file)
+    private static UnitContent Arrange(TableHdu table, SpectrumSources sources, NumberArray? wavelengths, FitsFile file)
     {
         var rows = sources.Flux.Rows;
         if (rows > 1 && OrderColumn(table, rows) is { } order) return new(Orders(sources, order), 1);
-        return new([sources], rows) { Targets = sources.Flux is CellArray ? TargetTable.For(table, file, rows) : null };
+        var targets = sources.Flux is CellArray ? TargetTable.For(table, file, rows) : null;
+        return targets is null && rows > 1 && wavelengths is not null && OrderRanges.AreOrders(wavelengths)
+            ? new(sources.Numbered(), 1)
+            : new([sources], rows) { Targets = targets };
     }
 
     private static TableColumn? OrderColumn(TableHdu table, int rows)
@@ -125,7 +141,10 @@ internal static class TableUnits
         rows <= 1000 && Enumerable.Range(0, rows).Select(row => OrderLabel(order, row)).Distinct().Count() == rows;
 
     private static string OrderLabel(TableColumn order, int row) =>
-        order.IsText ? order.ReadString(row).Trim() : order.IsNumeric && order.Repeat == 1 ? $"order {order.ReadDoubles(row)[0]:R}" : "";
+        order.IsText ? order.ReadString(row).Trim() : order.IsNumeric && order.Repeat == 1 ? string.Create(CultureInfo.InvariantCulture, $"{WordOf(order)} {order.ReadDoubles(row)[0]:R}") : "";
+
+    private static string WordOf(TableColumn order) =>
+        PartColumns.Contains(order.Name, StringComparer.OrdinalIgnoreCase) ? order.Name.ToLowerInvariant() : "order";
 
     private static StepWavelengths? Steps(TableHdu table)
     {

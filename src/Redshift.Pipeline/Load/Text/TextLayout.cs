@@ -15,7 +15,7 @@ internal static class TextLayout
     public static Layout Find(TextTable table, IReadOnlyList<NumberArray> arrays)
     {
         if (arrays.Count < 2) throw new LoadException("text", "one column of numbers", "wavelengths and fluxes");
-        var sources = ByName(arrays) ?? ByPlace(arrays, table);
+        var sources = ByName(arrays) ?? ColumnsByPlace.Read(arrays);
         return new() { Spectra = [sources], Header = HeaderScope.Empty, Remarks = table.Remarks, Notes = Notes(table) };
     }
 
@@ -39,41 +39,6 @@ internal static class TextLayout
             Mask = roles.MaskOf(flux),
             Width = roles.WidthOf(flux),
         };
-    }
-
-    private static SpectrumSources ByPlace(IReadOnlyList<NumberArray> arrays, TextTable table)
-    {
-        RequireWavelengths(table.Columns[0]);
-        return new()
-        {
-            Wavelength = new ArrayWavelengths(arrays[0]),
-            Flux = arrays[1],
-            Noise = arrays.Count == 3 && LooksLikeError(table.Columns[1], table.Columns[2]) ? (Role.Error, arrays[2]) : null,
-        };
-    }
-
-    private static void RequireWavelengths(double[] values)
-    {
-        int rising = 0, falling = 0;
-        for (var i = 1; i < values.Length; i++)
-        {
-            if (values[i] > values[i - 1]) rising++;
-            if (values[i] < values[i - 1]) falling++;
-        }
-        var isOrdered = Math.Min(rising, falling) * 10 <= values.Length && Math.Max(rising, falling) * 2 >= values.Length;
-        if (!isOrdered || values.Any(static value => value <= 0))
-            throw new LoadException("column 1", "numbers that are not in order or not positive", "wavelengths");
-    }
-
-    // A third column without a name is an error if it is positive and speaks of the scatter from pixel to pixel.
-    private static bool LooksLikeError(double[] flux, double[] third)
-    {
-        if (third.Any(static value => value < 0) || third.Count(static value => value > 0) * 2 < third.Length) return false;
-        var ratios = new List<double>();
-        for (var i = 2; i < flux.Length; i++)
-            if (third[i - 1] > 0) ratios.Add(Math.Abs(flux[i - 1] - (flux[i - 2] + flux[i]) / 2) / third[i - 1]);
-        ratios.Sort();
-        return ratios.Count > 0 && ratios[ratios.Count / 2] is > 0.05 and < 5;
     }
 
     private static IReadOnlyList<ReadingNote> Notes(TextTable table) =>
