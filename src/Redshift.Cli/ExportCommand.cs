@@ -22,7 +22,7 @@ internal sealed class ExportCommand
 
     private readonly Option<string?> _where = new("--where")
     {
-        Description = "Only rows that meet a condition, such as \"verdict = 'firm' and z > 2\"; needs --output",
+        Description = "Only rows that meet a condition on columns, such as \"verdict = 'firm' and z > 2\"; needs --output",
         HelpName = "CONDITION",
     };
 

@@ -37,6 +37,17 @@ public sealed partial class SampleSpectraTests : IClassFixture<SampleSpectraTest
         Assert.True(wrong.Count <= known.Count / 4, "wrong: " + string.Join(", ", wrong));
     }
 
+    [Theory]
+    [InlineData("export")]
+    [InlineData("compare")]
+    public void The_readme_goes_on_with_commands_that_work(string command)
+    {
+        var outcome = Zladder.Run(_run.Next(command));
+
+        Assert.Equal((0, ""), (outcome.Status, outcome.Errors));
+        Assert.Contains("34 rows", outcome.Output, StringComparison.Ordinal);
+    }
+
     // The tolerances of the column confidence: 100 km/s for stars, 1000 for galaxies and nebulae, 3000 for quasars.
     private static bool IsRight(Dictionary<string, string> truth, Dictionary<string, string> row)
     {
@@ -50,11 +61,12 @@ public sealed partial class SampleSpectraTests : IClassFixture<SampleSpectraTest
     public sealed partial class ReadmeRun : IDisposable
     {
         private readonly TemporaryFolder _folder = new();
+        private readonly string _readme = File.ReadAllText(Repository.PathOf("README.md"));
 
         /// <summary>Runs the command as the README has it, but into a temporary folder.</summary>
         public ReadmeRun()
         {
-            var command = Command().Match(File.ReadAllText(Repository.PathOf("README.md")));
+            var command = Command().Match(_readme);
             Assert.True(command.Success, "the README has no run command");
             Outcome = Zladder.Run("run", Repository.PathOf(command.Groups["input"].Value), "--out", _folder.Path);
             Catalogue = Read(_folder.File("catalogue.csv"));
@@ -67,8 +79,17 @@ public sealed partial class SampleSpectraTests : IClassFixture<SampleSpectraTest
 
         internal Dictionary<string, Dictionary<string, string>> Truth { get; }
 
+        /// <summary>The arguments of the README's line with another command, its folders in the right place.</summary>
+        public string[] Next(string command)
+        {
+            var line = _readme.Split('\n').First(line => line.StartsWith($"zladder {command} ", StringComparison.Ordinal)).Split('#')[0];
+            return [.. line.Split(' ', StringSplitOptions.RemoveEmptyEntries).Skip(1).Select(Placed)];
+        }
+
         /// <inheritdoc/>
         public void Dispose() => _folder.Dispose();
+
+        private string Placed(string word) => word == "out" ? _folder.Path : word.StartsWith("sample-spectra", StringComparison.Ordinal) ? Repository.PathOf(word) : word;
 
         private static Dictionary<string, Dictionary<string, string>> Read(string path)
         {
