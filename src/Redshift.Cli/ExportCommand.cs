@@ -52,6 +52,8 @@ internal sealed class ExportCommand
         var folder = parsed.GetRequiredValue(_folder);
         if (!File.Exists(Path.Combine(folder, LedgerFile.Name)))
             throw new UsageException($"{folder}: found no {LedgerFile.Name}; expected the output folder of a run");
+        // A run that ends meanwhile writes some of the same files.
+        using var held = parsed.GetValue(_output) is null ? new OutputFolder(folder) : null;
         using var ledger = LedgerFile.OpenExisting(folder);
         var table = Tables[parsed.GetValue(_table) ?? "catalogue"](ledger).Until(token);
         if (parsed.GetValue(_where) is { } condition)

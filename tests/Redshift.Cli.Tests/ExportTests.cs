@@ -1,4 +1,5 @@
 using Redshift.Fits;
+using Redshift.Pipeline.Report;
 using Redshift.Testing;
 using Xunit;
 
@@ -69,6 +70,15 @@ public sealed class ExportTests : IClassFixture<ExportTests.OneRun>, IDisposable
         Check("'xml': --format expects one of csv, fits, parquet, votable", _run.Out, "--format", "xml");
         Check("Option '--format' is required.", _run.Out);
         Assert.Empty(Directory.GetFiles(_folder.Path));
+    }
+
+    [Fact]
+    public void A_folder_that_is_being_written_is_left_alone_but_can_be_read()
+    {
+        using var held = new OutputFolder(_run.Out);
+
+        Assert.Equal(5, Zladder.Run("export", _run.Out, "--format", "csv").Status);
+        Assert.Equal(0, Zladder.Run("export", _run.Out, "--format", "csv", "-o", _folder.File("elsewhere")).Status);
     }
 
     [Fact]

@@ -82,7 +82,7 @@ public sealed class ComparedTable : IDisposable
         return new()
         {
             Source = Text(_source),
-            Row = (int)(Number(_row) ?? 0),
+            Row = _row < 0 ? 0 : ReadWhole(place, _file.Names[_row], cells[_row]),
             Target = Text(_target),
             RaDeg = Angle(_ra, SkyAngle.RightAscension),
             DecDeg = Angle(_dec, SkyAngle.Declination),
@@ -100,6 +100,15 @@ public sealed class ComparedTable : IDisposable
         return double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out var value) && double.IsFinite(value)
             ? value
             : throw Wrong(place, column, text, "a number, or nothing");
+    }
+
+    private int ReadWhole(string place, string column, string text)
+    {
+        if (text.Length == 0)
+            return 0;
+        return int.TryParse(text, NumberStyles.None, CultureInfo.InvariantCulture, out var value)
+            ? value
+            : throw Wrong(place, column, text, "a whole number from 0, or nothing");
     }
 
     private double? ReadAngle(string place, string column, string text, Func<string, AngleUnit, double?> read)

@@ -21,6 +21,9 @@ public sealed class Comparison
     /// <summary>Rows of the old table.</summary>
     public int OldRows { get; private set; }
 
+    /// <summary>Rows of the old table that are left aside because an earlier one has the same name.</summary>
+    public int OldDoubled { get; private set; }
+
     /// <summary>Rows of the new table.</summary>
     public int NewRows { get; private set; }
 
@@ -56,7 +59,7 @@ public sealed class Comparison
     {
         ComparedRow[] rows = [.. old];
         var finder = RowFinder.Create(pairing, rows, radiusArcsec);
-        var comparison = new Comparison { OldRows = rows.Length };
+        var comparison = new Comparison { OldRows = rows.Length, OldDoubled = finder.Hidden };
         var found = new bool[rows.Length];
         foreach (var row in now)
         {

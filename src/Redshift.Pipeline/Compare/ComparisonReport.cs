@@ -43,6 +43,8 @@ public sealed class ComparisonReport(Comparison comparison, string oldPath, stri
         output.WriteLine(FormattableString.Invariant($"old: {HarmlessText.Printable(oldPath)}, {comparison.OldRows} rows"));
         output.WriteLine(FormattableString.Invariant($"new: {HarmlessText.Printable(newPath)}, {comparison.NewRows} rows"));
         output.WriteLine(FormattableString.Invariant($"{comparison.Pairs} rows paired by {Word(pairing)}"));
+        if (comparison.OldDoubled > 0)
+            output.WriteLine(FormattableString.Invariant($"{comparison.OldDoubled} old rows left aside, because an earlier one has the same {Word(pairing)}"));
         WriteTable(output, "Redshifts, new against old", TextOf(GroupColumns, Groups()));
         WriteTable(output, "Changes", [.. Changes.Where(change => comparison.Count(change.Word) > 0).Select(ChangeRow)]);
         WriteTable(output, "Kinds, old to new", [.. comparison.KindChanges.Select(TransitionRow)]);
@@ -58,6 +60,7 @@ public sealed class ComparisonReport(Comparison comparison, string oldPath, stri
         writer.WriteString("new", newPath);
         writer.WriteString("paired_by", Word(pairing));
         writer.WriteNumber("old_rows", comparison.OldRows);
+        writer.WriteNumber("old_doubled", comparison.OldDoubled);
         writer.WriteNumber("new_rows", comparison.NewRows);
         writer.WriteNumber("pairs", comparison.Pairs);
         writer.WriteStartObject("changes");

@@ -5,6 +5,9 @@ namespace Redshift.Pipeline.Compare;
 /// <summary>Finds the row of the old table that a row of the new one belongs to.</summary>
 internal abstract class RowFinder
 {
+    /// <summary>Number of old rows that an earlier one hides, so that they are never found.</summary>
+    public int Hidden { get; private protected init; }
+
     /// <summary>Number of the old row, or -1 where there is none.</summary>
     public abstract int Find(ComparedRow row);
 
@@ -26,8 +29,10 @@ internal abstract class RowFinder
         {
             _key = key;
             for (var i = 0; i < rows.Count; i++)
-                _rows.TryAdd(key(rows[i]), i);
-            _rows.Remove("");
+            {
+                if (key(rows[i]) is { Length: > 0 } text && !_rows.TryAdd(text, i))
+                    Hidden++;
+            }
         }
 
         public override int Find(ComparedRow row) => _rows.GetValueOrDefault(_key(row), -1);

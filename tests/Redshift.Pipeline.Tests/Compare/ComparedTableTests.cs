@@ -60,6 +60,7 @@ public sealed class ComparedTableTests : IDisposable
 
     [Theory]
     [InlineData("target,z\na,0.1\nb,high\n", ", line 3, column z: found 'high'; expected a number, or nothing")]
+    [InlineData("source,row,z\na,0.5,0\n", ", line 2, column row: found '0.5'; expected a whole number from 0, or nothing")]
     [InlineData("target,z\na,-1.5\n", ", line 2, column z: found '-1.5'; expected a redshift greater than -1")]
     [InlineData("ra,dec,z\n1,91,0\n", ", line 2, column dec: found '91'; expected an angle in degrees, or sexagesimal such as 12:29:06.7 or +02:03:08")]
     [InlineData("target,mag\na,1\n", ": found the columns target, mag; expected a column z or redshift, or velocity_km_s")]

@@ -93,6 +93,7 @@ public sealed class ComparisonTests
         var comparison = Comparison.Of(old, now, Pairing.Target, 1, _ => { });
 
         Assert.Equal((1, 0, 1, 2), (comparison.Pairs, comparison.All.Outliers, comparison.Count("added"), comparison.Count("missing")));
+        Assert.Equal(1, comparison.OldDoubled);
     }
 
     [Fact]
