@@ -1,3 +1,5 @@
+using System.Runtime.Intrinsics;
+
 namespace Redshift.Pipeline.Numerics;
 
 /// <summary>Convolution with a normalised Gaussian on an even grid; the ends are continued by their last value.</summary>
@@ -16,16 +18,19 @@ internal static class GaussianFilter
     {
         var reach = (int)Math.Ceiling(4 * sigma);
         var kernel = Kernel(sigma, reach);
-        var padded = Pad(input, reach);
+        var padded = Pad(input, reach + Kernels.Lanes);
         var output = new float[input.Length];
-        for (var j = 0; j <= 2 * reach; j++)
-        {
-            var weight = kernel[j];
-            var shifted = padded.AsSpan(j, output.Length);
-            for (var i = 0; i < output.Length; i++) output[i] += weight * shifted[i];
-        }
-
+        var i = 0;
+        for (; i <= output.Length - Kernels.Lanes; i += Kernels.Lanes) Sum(kernel, padded.AsSpan(i + Kernels.Lanes)).CopyTo(output, i);
+        for (; i < output.Length; i++) output[i] = Sum(kernel, padded.AsSpan(i + Kernels.Lanes))[0];
         return output;
+    }
+
+    private static Vector256<float> Sum(ReadOnlySpan<float> kernel, ReadOnlySpan<float> values)
+    {
+        Vector256<float> sum = default;
+        for (var j = 0; j < kernel.Length; j++) sum += kernel[j] * Vector256.Create(values[j..]);
+        return sum;
     }
 
     /// <summary>Four running means in a row come within a percent of a Gaussian of the same variance (central limit theorem).</summary>
@@ -42,13 +47,13 @@ internal static class GaussianFilter
     private static float[] RunningMean(float[] values, int half)
     {
         var output = new float[values.Length - 2 * half];
-        var sum = 0.0;
-        for (var i = 0; i < 2 * half; i++) sum += values[i];
-        for (var i = 0; i < output.Length; i++)
+        double sum = 0, share = 1.0 / (2 * half + 1);
+        for (var i = 0; i <= 2 * half; i++) sum += values[i];
+        output[0] = (float)(sum * share);
+        for (var i = 1; i < output.Length; i++)
         {
-            sum += values[i + 2 * half];
-            output[i] = (float)(sum / (2 * half + 1));
-            sum -= values[i];
+            sum += (double)values[i + 2 * half] - values[i - 1];
+            output[i] = (float)(sum * share);
         }
 
         return output;

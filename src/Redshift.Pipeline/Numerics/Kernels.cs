@@ -47,4 +47,12 @@ internal static class Kernels
         for (; i <= into.Length - 8; i += 8) (Vector256.Create(a[i..]) * Vector256.Create(b[i..])).CopyTo(into[i..]);
         for (; i < into.Length; i++) into[i] = a[i] * b[i];
     }
+
+    /// <summary>into = a·(b − c), element by element.</summary>
+    public static void MultiplyDifference(ReadOnlySpan<float> a, ReadOnlySpan<float> b, ReadOnlySpan<float> c, Span<float> into)
+    {
+        var i = 0;
+        for (; i <= into.Length - 8; i += 8) (Vector256.Create(a[i..]) * (Vector256.Create(b[i..]) - Vector256.Create(c[i..]))).CopyTo(into[i..]);
+        for (; i < into.Length; i++) into[i] = a[i] * (b[i] - c[i]);
+    }
 }

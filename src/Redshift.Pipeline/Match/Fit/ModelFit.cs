@@ -21,6 +21,8 @@ internal sealed class ModelFit
     private readonly FitColumns _columns;
     private readonly ColumnSelection _selection;
     private readonly GroupProfiles _profiles;
+    private readonly TemplateRenderer _renderer;
+    private readonly float[] _ones;
     private readonly float[] _template;
     private readonly float[] _transmission;
     private readonly float[] _weight;
@@ -34,10 +36,13 @@ internal sealed class ModelFit
         _columns = new(pixels, _spline);
         _selection = new(_columns);
         _profiles = new(pixels);
+        _renderer = new(pixels);
         var length = pixels.Flux.Length;
         (_template, _transmission, _work) = (new float[length], new float[length], new float[length]);
         _weight = (float[])pixels.Weight.Clone();
-        Array.Fill(_template, 1f);
+        _ones = new float[length];
+        Array.Fill(_ones, 1f);
+        _ones.CopyTo(_template, 0);
         _null = _spline.Solve(_weight, _template);
     }
 
@@ -84,38 +89,11 @@ internal sealed class ModelFit
 
     private void Render(FitModel model, double lnShift)
     {
-        if (model.Template is null) Array.Fill(_template, 1f);
-        else Render(model.Template, lnShift, _template);
+        if (model.Template is null) _ones.CopyTo(_template, 0);
+        else _renderer.Render(model.Template, lnShift, _template);
         if (!model.Forest) return;
         _pixels.Forest.Transmit(lnShift, _transmission);
         Kernels.Multiply(_template, _transmission, _template);
-    }
-
-    private void Render(Template template, double lnShift, Span<float> into)
-    {
-        var shift = lnShift / TemplateGrid.Step;
-        var whole = (int)Math.Floor(shift);
-        var part = (float)(shift - whole);
-        foreach (var (start, end, level) in _pixels.Levels)
-            Interpolate(template.Broadened(level), whole, part, _pixels.TemplateIndex.AsSpan(start..end), _pixels.TemplateFraction.AsSpan(start..end), into[start..end]);
-    }
-
-    /// <summary>Linear interpolation at places moved down by a shift; beyond the ends the last value holds.</summary>
-    private static void Interpolate(ReadOnlySpan<float> values, int whole, float part, ReadOnlySpan<int> index, ReadOnlySpan<float> fraction, Span<float> into)
-    {
-        for (var p = 0; p < into.Length; p++)
-        {
-            var i = index[p] - whole;
-            var t = fraction[p] - part;
-            if (t < 0)
-            {
-                i--;
-                t++;
-            }
-
-            if ((uint)i >= (uint)(values.Length - 1)) (i, t) = i < 0 ? (0, 0) : (values.Length - 2, 1);
-            into[p] = values[i] + t * (values[i + 1] - values[i]);
-        }
     }
 
     /// <summary>Columns smooth × (partner − template), and smooth × (template − 1) for the contrast, with the smooth part just found.</summary>
@@ -126,12 +104,11 @@ internal sealed class ModelFit
         foreach (var partner in model.Partners)
         {
             var values = AddMixture(PartnerSpread);
-            Render(partner, lnShift, values);
-            for (var p = 0; p < values.Length; p++) values[p] = _work[p] * (values[p] - _template[p]);
+            _renderer.Render(partner, lnShift, values);
+            Kernels.MultiplyDifference(_work, values, _template, values);
         }
 
-        var contrast = AddMixture(ContrastSpread);
-        for (var p = 0; p < contrast.Length; p++) contrast[p] = _work[p] * (_template[p] - 1);
+        Kernels.MultiplyDifference(_work, _template, _ones, AddMixture(ContrastSpread));
     }
 
     private Span<float> AddMixture(double spread)

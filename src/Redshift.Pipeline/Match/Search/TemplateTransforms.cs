@@ -1,3 +1,4 @@
+using System.Collections.Concurrent;
 using System.Runtime.Intrinsics;
 using Redshift.Pipeline.Match.Models;
 using Redshift.Pipeline.Numerics;
@@ -13,13 +14,13 @@ internal sealed class TemplateTransforms
     /// <summary>Sets that are kept, half a megabyte each.</summary>
     private const int MostKept = 96;
 
+    private static readonly ConcurrentDictionary<(TemplateRange Range, int Octet, int Level), Vector256<float>[]> Templates = new();
     private static readonly Lock Gate = new();
     private static readonly Dictionary<(TemplateRange Range, int Octet, int Level, int Start, int Length), TemplateTransforms> Kept = [];
 
     private TemplateTransforms(TemplateRange range, int octet, int level, int start, int length)
     {
-        var lanes = range.Templates.Skip(octet * Vector256<float>.Count).Take(Vector256<float>.Count);
-        var cells = Octet.Interleave([.. lanes.Select(t => Cut(CellTemplate.Relative(t.Template, level, range.ForestLnShift), start, length))]);
+        var cells = Cut(Templates.GetOrAdd((range, octet, level), key => Pairs(key.Range, key.Octet, key.Level)), start, length);
         var squares = Array.ConvertAll(cells, c => c * c);
         FourierTransform.OfLength(length).Forward(cells, squares);
         var half = length / 2 + 1;
@@ -65,11 +66,21 @@ internal sealed class TemplateTransforms
         return made;
     }
 
-    private static float[] Cut(float[] relative, int start, int length)
+    /// <summary>The templates on all double cells.</summary>
+    private static Vector256<float>[] Pairs(TemplateRange range, int octet, int level)
     {
-        var cut = new float[length];
-        for (var j = Math.Max(0, -start); j < length && 2 * (start + j) + 1 < relative.Length; j++)
-            cut[j] = 0.5f * (relative[2 * (start + j)] + relative[2 * (start + j) + 1]);
+        var lanes = range.Templates.Skip(octet * Vector256<float>.Count).Take(Vector256<float>.Count);
+        var single = Octet.Interleave([.. lanes.Select(t => CellTemplate.Relative(t.Template, level, range.ForestLnShift))]);
+        var pairs = new Vector256<float>[single.Length / 2];
+        for (var j = 0; j < pairs.Length; j++) pairs[j] = (single[2 * j] + single[2 * j + 1]) * 0.5f;
+        return pairs;
+    }
+
+    private static Vector256<float>[] Cut(Vector256<float>[] templates, int start, int length)
+    {
+        var cut = new Vector256<float>[length];
+        int from = Math.Max(0, start), to = Math.Min(templates.Length, start + length);
+        if (from < to) templates.AsSpan(from..to).CopyTo(cut.AsSpan(from - start));
         return cut;
     }
 }
