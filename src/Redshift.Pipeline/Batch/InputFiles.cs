@@ -16,7 +16,20 @@ public static class InputFiles
         var root = CommonParent(inputs.Select(input => Directory.Exists(input) ? input : Path.GetDirectoryName(input)!));
         var excluded = except is null ? null : Path.TrimEndingDirectorySeparator(Path.GetFullPath(except));
         var files = inputs.SelectMany(input => Expand(root, input, excluded)).DistinctBy(file => file.Relative).ToArray();
-        Array.Sort(files, (a, b) => string.CompareOrdinal(a.Source, b.Source));
+        Array.Sort(files, static (a, b) =>
+            string.CompareOrdinal(a.Source, b.Source) is var order and not 0 ? order : string.CompareOrdinal(a.Relative, b.Relative));
+        return TellTwinsApart(files);
+    }
+
+    // A name that cannot be printed as it is may look like another one; the source must still be the file's own.
+    private static InputFile[] TellTwinsApart(InputFile[] files)
+    {
+        for (var i = 1; i < files.Length; i++)
+        {
+            if (files[i].Printable == files[i - 1].Printable)
+                files[i] = files[i] with { Twin = files[i - 1].Twin + 1 };
+        }
+
         return files;
     }
 

@@ -10,10 +10,12 @@ internal sealed class LedgerDatabase : IDisposable
     private const int Patience = 5;
 
     private readonly SqliteConnection _connection;
+    private readonly bool _writes;
 
     private LedgerDatabase(string path, SqliteOpenMode mode)
     {
         Path = path;
+        _writes = mode != SqliteOpenMode.ReadOnly;
         _connection = new(new SqliteConnectionStringBuilder
         {
             DataSource = path,
@@ -104,7 +106,27 @@ internal sealed class LedgerDatabase : IDisposable
     }
 
     /// <inheritdoc/>
-    public void Dispose() => _connection.Dispose();
+    public void Dispose()
+    {
+        if (_writes)
+            MakeSingleFile();
+        _connection.Dispose();
+    }
+
+    // Without a write-ahead log beside it a ledger can be copied as one file, and be read where nobody may write.
+    private void MakeSingleFile()
+    {
+        try
+        {
+            using var command = Command("PRAGMA journal_mode=DELETE");
+            command.CommandTimeout = 1;
+            command.ExecuteNonQuery();
+        }
+        catch (SqliteException)
+        {
+            // Somebody reads it at this moment, or the disk is full. The log then stays beside the ledger, which is as good.
+        }
+    }
 
     private LedgerDatabase Opened(Action prepare)
     {

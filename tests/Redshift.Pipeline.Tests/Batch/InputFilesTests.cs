@@ -52,6 +52,15 @@ public sealed class InputFilesTests : IDisposable
     }
 
     [Fact]
+    public void Names_that_look_the_same_in_print_are_told_apart()
+    {
+        File.WriteAllText(At("c/z.fits "), "");
+        File.WriteAllText(At("c/ z.fits"), "");
+
+        Assert.Equal(["z.fits", "z.fits (2)", "z.fits (3)"], Sources([At("c")]));
+    }
+
+    [Fact]
     public void Odd_names_are_printable()
     {
         File.WriteAllText(At("a/=caf\u00e9\n.fits"), "");
