@@ -48,7 +48,7 @@ public sealed class ImageHdu : Hdu
     public double[] ReadDoubles(long first, int count)
     {
         RequireRange(first, count);
-        var values = new double[count];
+        var values = GC.AllocateUninitializedArray<double>(count);
         ReadDoubles(first, values);
         return values;
     }

@@ -79,7 +79,7 @@ public sealed class TableColumn
     /// <summary>The numbers of a cell, TSCALn and TZEROn applied; TNULLn becomes NaN.</summary>
     public double[] ReadDoubles(long row)
     {
-        var values = new double[NumericLength(row)];
+        var values = GC.AllocateUninitializedArray<double>(NumericLength(row));
         _cells.ReadDoubles(row, values);
         return values;
     }
@@ -97,7 +97,7 @@ public sealed class TableColumn
     {
         RequireScalar();
         if (Table.RowCount > Array.MaxLength) throw Unsupported("has more rows than an array can hold");
-        var values = new double[Table.RowCount];
+        var values = GC.AllocateUninitializedArray<double>((int)Table.RowCount);
         ReadColumn(0, values);
         return values;
     }

@@ -26,6 +26,9 @@ public sealed class Header : IReadOnlyList<Card>
         IndexCards();
     }
 
+    /// <summary>A header that no file holds, with these cards.</summary>
+    public static Header Of(IEnumerable<Card> cards) => new(Encoding.ASCII.GetBytes(string.Concat(cards.SelectMany(CardFormatter.Format))));
+
     /// <summary>Number of cards; a continued string counts as one.</summary>
     public int Count => _starts.Length;
 

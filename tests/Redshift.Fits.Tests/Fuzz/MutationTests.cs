@@ -1,10 +1,13 @@
+using System.Globalization;
 using Xunit;
 
 namespace Redshift.Fits.Tests;
 
 public sealed class MutationTests
 {
-    private const int Count = 20_000;
+    // A million (MUTATIONS=1000000) takes minutes: to be asked for after changes to the reader.
+    private static readonly int Count =
+        int.TryParse(Environment.GetEnvironmentVariable("MUTATIONS"), CultureInfo.InvariantCulture, out var count) ? count : 20_000;
 
     // A mutated file of some kilobytes may expand to the megabyte that the tour allows, several times over.
     private const long MostAllocated = 48 << 20;

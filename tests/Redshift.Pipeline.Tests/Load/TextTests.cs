@@ -82,6 +82,40 @@ public sealed class TextTests : IDisposable
     }
 
     [Fact]
+    public void Remarks_in_the_form_of_header_cards_are_read_as_these()
+    {
+        const string Remarks = "# OBJECT = HD 12345\n# RA: 12:30:00\n# DEC: -05:15:00\n# DATE-OBS = 2020-01-02T03:04:05\n# EXPTIME = 600 / s\n# INSTRUME = Prism 3\n# SPECSYS = BARYCENT\n# AIRORVAC = vac\n";
+        var observation = LoadBench.One(_bench.Text(Remarks + Lines("{0} {1}")));
+        Assert.Equal(("HD 12345", 187.5, -5.25, 600.0, "Prism 3"), (observation.Target, observation.RaDeg, observation.DecDeg, observation.ExposureS, observation.Instrument));
+        Assert.Equal(new DateTime(2020, 1, 2, 3, 9, 5, DateTimeKind.Utc), observation.MidTimeUtc);
+        Assert.Equal((WavelengthMedium.Vacuum, false, VelocityFrame.Barycentric), (observation.Medium, observation.MediumAssumed, observation.Frame));
+    }
+
+    [Theory]
+    [InlineData("wave flux\n---- ----\n", "{0} {1}")]
+    [InlineData("==== ====\nwave flux\n==== ====\n", "{0} {1}")]
+    [InlineData("|wave|flux|\n|----|----|\n", "|{0}|{1}|")]
+    public void Lines_drawn_between_names_and_numbers_are_passed_over(string head, string line) =>
+        Assert.Equal(LoadBench.Flux(), LoadBench.One(_bench.Text(head + Lines(line))).Spectra[0].Flux);
+
+    [Theory]
+    [InlineData("# wavelength (Angstrom)  flux density (mJy)\n")]
+    [InlineData("# - {name: wave, unit: Angstrom, datatype: float64}\n# - {name: flux, unit: mJy, datatype: float64}\nwave flux\n")]
+    public void Unit_of_the_flux_in_the_lines_above_is_used(string head) =>
+        Assert.Equal("erg/s/cm2/Angstrom", LoadBench.One(_bench.Text(head + Lines("{0} {1}"))).Spectra[0].FluxUnit);
+
+    [Theory]
+    [InlineData("nan")]
+    [InlineData("inf")]
+    [InlineData("*****")]
+    [InlineData("INDEF")]
+    public void Words_for_a_missing_number_mask_their_pixel(string word)
+    {
+        var spectrum = LoadBench.One(_bench.Text(string.Concat(Enumerable.Range(0, LoadBench.Pixels).Select(i => $"{5000 + i} {(i == 3 ? word : $"1{i % 7}")}\n")))).Spectra[0];
+        Assert.Equal([1, 1, 1, 0, 1], spectrum.InverseVariance[..5]);
+    }
+
+    [Fact]
     public void Masked_pixels_of_a_named_column_are_left_out()
     {
         var spectrum = LoadBench.One(_bench.Text("# wl flux error bpmap\n" + string.Concat(Enumerable.Range(0, LoadBench.Pixels).Select(static i => $"{5000 + i} {10 + i % 7} 0.5 {(i == 3 ? 1 : 0)}\n")))).Spectra[0];

@@ -11,24 +11,16 @@ internal static class NoiseReader
     /// <returns>Whether at least one pixel has an error; an array of zeros states nothing.</returns>
     public static bool ToInverseVariance(Role role, double[] values)
     {
+        if (role == Role.Error)
+            foreach (ref var value in values.AsSpan()) value = value > 0 ? 1 / (value * value) : 0;
+        if (role == Role.Variance)
+            foreach (ref var value in values.AsSpan()) value = 1 / value;
         var any = false;
-        for (var i = 0; i < values.Length; i++)
+        foreach (ref var value in values.AsSpan())
         {
-            values[i] = InverseVariance(role, values[i]);
-            any |= values[i] > 0;
+            if (value > 0 && double.IsFinite(value)) any = true;
+            else value = 0;
         }
         return any;
-    }
-
-    private static double InverseVariance(Role role, double value)
-    {
-        if (!(value > 0)) return 0;
-        var inverse = role switch
-        {
-            Role.Error => 1 / (value * value),
-            Role.Variance => 1 / value,
-            _ => value,
-        };
-        return double.IsFinite(inverse) ? inverse : 0;
     }
 }

@@ -46,17 +46,19 @@ internal sealed class SpectrumBuilder(SpectrumSources sources, WavelengthMedium 
     private static LoadException Unequal(WavelengthSource wavelength, int wavelengths, int fluxes) =>
         new(wavelength.Place, $"{wavelengths} wavelengths for {fluxes} fluxes", "as many of one as of the other");
 
-    // A flux that is the same everywhere is a fibre without light or an array that was never filled.
+    // A flux that is the same everywhere is a fibre without light or an array that was never filled. Sound spectra are known after a
+    // few pixels.
     private static bool IsUsable(Spectrum spectrum)
     {
         var usable = 0;
         double low = double.PositiveInfinity, high = double.NegativeInfinity;
-        for (var i = 0; i < spectrum.Count; i++)
+        var (flux, inverseVariance) = (spectrum.Flux, spectrum.InverseVariance);
+        for (var i = 0; i < flux.Length && (usable < WavelengthGrid.ShortestRun || high <= low); i++)
         {
-            if (spectrum.InverseVariance[i] <= 0) continue;
+            if (inverseVariance[i] <= 0) continue;
             usable++;
-            low = Math.Min(low, spectrum.Flux[i]);
-            high = Math.Max(high, spectrum.Flux[i]);
+            low = Math.Min(low, flux[i]);
+            high = Math.Max(high, flux[i]);
         }
         return usable >= WavelengthGrid.ShortestRun && high > low;
     }

@@ -23,14 +23,22 @@ internal static partial class SkyAngle
     {
         if (Value(text) is not { } value) return null;
         var isSexagesimal = Sexagesimal(text)!.Count > 1 && !text.Contains('d', StringComparison.Ordinal);
-        var degrees = value * DegreesPerUnit(isSexagesimal ? AngleUnit.Hour : unit, value);
+        return RightAscension(value, isSexagesimal ? AngleUnit.Hour : unit);
+    }
+
+    /// <summary>Degrees of a right ascension, 0 to 360; null where the number is none.</summary>
+    public static double? RightAscension(double value, AngleUnit unit)
+    {
+        var degrees = value * DegreesPerUnit(unit, value);
         return degrees is >= -360 and <= 720 ? (degrees % 360 + 360) % 360 : null;
     }
 
     /// <summary>Degrees of a declination; null where the text is none.</summary>
-    public static double? Declination(string text, AngleUnit unit)
+    public static double? Declination(string text, AngleUnit unit) => Value(text) is { } value ? Declination(value, unit) : null;
+
+    /// <summary>Degrees of a declination; null where the number is none.</summary>
+    public static double? Declination(double value, AngleUnit unit)
     {
-        if (Value(text) is not { } value) return null;
         var degrees = unit == AngleUnit.Radian ? double.RadiansToDegrees(value) : value;
         return degrees is >= -90 and <= 90 ? degrees : null;
     }

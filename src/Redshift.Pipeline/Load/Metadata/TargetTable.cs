@@ -100,8 +100,8 @@ internal sealed partial record TargetTable
     public (double Ra, double Dec)? Position(int row)
     {
         if (Ra is null || Dec is null) return null;
-        var ra = SkyAngle.RightAscension(Text(Ra, row), Unit);
-        var dec = SkyAngle.Declination(Text(Dec, row), Unit);
+        var ra = IsNumber(Ra) ? SkyAngle.RightAscension(Ra.ReadDoubles(row)[0], Unit) : SkyAngle.RightAscension(Text(Ra, row), Unit);
+        var dec = IsNumber(Dec) ? SkyAngle.Declination(Dec.ReadDoubles(row)[0], Unit) : SkyAngle.Declination(Text(Dec, row), Unit);
         return ra is { } alpha && dec is { } delta ? (alpha, delta) : null;
     }
 
@@ -148,6 +148,8 @@ internal sealed partial record TargetTable
                 largest = Math.Max(largest, Math.Abs(value));
         return largest;
     }
+
+    private static bool IsNumber(TableColumn column) => column is { IsNumeric: true, IsVariableLength: false, Repeat: 1 };
 
     private static string Text(TableColumn column, int row)
     {

@@ -12,12 +12,13 @@ internal static class TextRules
     /// <summary>The layout of a table and the rule that applies to it.</summary>
     public static (Layout, LoadRule?) Find(TextTable table, LoadSettings settings)
     {
-        var rule = RuleChoice.Find(settings, HeaderScope.Empty);
+        var header = RemarkCards.Read(table.Remarks);
+        var rule = RuleChoice.Find(settings, header);
         var arrays = TextLayout.Arrays(table);
         if (rule is null) return (TextLayout.Find(table, arrays), null);
         NumberArray Column(string text) => TextRules.Column(arrays, text);
         var layout = rule.Flux is { } flux
-            ? new Layout { Spectra = [new() { Flux = Column(flux), Wavelength = new ArrayWavelengths(Column(rule.Wavelength ?? "1")) }], Header = HeaderScope.Empty, Remarks = table.Remarks }
+            ? new Layout { Spectra = [new() { Flux = Column(flux), Wavelength = new ArrayWavelengths(Column(rule.Wavelength ?? "1")) }], Header = header, Remarks = table.Remarks }
             : TextLayout.Find(table, arrays);
         return (layout with { Spectra = [.. layout.Spectra.Select(spectrum => Override(spectrum, rule, Column))] }, rule);
     }

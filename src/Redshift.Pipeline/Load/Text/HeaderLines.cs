@@ -20,7 +20,7 @@ internal static partial class HeaderLines
         return new(
             [.. columns.Select(static column => column.ToArray())],
             [.. names.Select((name, i) => parts[i].Success ? parts[i].Groups[1].Value.Trim() : (name ?? "").Trim())],
-            [.. names.Select((_, i) => parts[i].Success ? parts[i].Groups[2].Value.Trim() : unitLine?[i].Trim('(', ')', '[', ']') ?? UnitsOfRemarks(remarks, i))],
+            [.. names.Select((_, i) => parts[i].Success ? parts[i].Groups[2].Value.Trim() : unitLine?[i].Trim('(', ')', '[', ']') ?? UnitsOfRemarks(remarks, names[i] ?? "", i))],
             remarks);
     }
 
@@ -32,13 +32,23 @@ internal static partial class HeaderLines
         for (var i = remarks.Count - 1; i >= 0; i--)
         {
             var fields = NumberLine.Fields(remarks[i]);
+            if (WithUnits(remarks[i]) is { } pairs && pairs.Length == count) return pairs;
             if (fields.Length == count && fields.All(static field => field.Length > 0 && char.IsLetter(field[0]))) return fields;
         }
         return null;
     }
 
-    private static string UnitsOfRemarks(List<string> remarks, int column)
+    // "wavelength (micron)  flux density (mJy)": names of several words, told apart by their units.
+    private static string[]? WithUnits(string remark) =>
+        NamedUnitPattern().Matches(remark) is { Count: > 1 } pairs && pairs.Sum(static pair => pair.Length) == remark.Trim().Length
+            ? [.. pairs.Select(static pair => pair.Value.Trim(' ', '\t', ',', ';'))]
+            : null;
+
+    private static string UnitsOfRemarks(List<string> remarks, string name, int column)
     {
+        foreach (var remark in remarks)
+            if (DescribedColumnPattern().Match(remark) is { Success: true } described && described.Groups[1].Value == name)
+                return described.Groups[2].Value.Trim();
         if (column != 0) return "";
         foreach (var remark in remarks)
             if (WavelengthUnitPattern().Match(remark) is { Success: true } match && SpectralUnit.Parse(match.Groups[1].Value) is not null)
@@ -48,6 +58,13 @@ internal static partial class HeaderLines
 
     [GeneratedRegex(@"^(.*?)\s*[\(\[](.+)[\)\]]\s*$", RegexOptions.CultureInvariant)]
     private static partial Regex UnitPattern();
+
+    [GeneratedRegex(@"\s*[A-Za-z][\w ]*?\s*[\(\[][^\)\]]+[\)\]]\s*[,;]?", RegexOptions.CultureInvariant)]
+    private static partial Regex NamedUnitPattern();
+
+    // A column in the YAML lines of an enhanced CSV file.
+    [GeneratedRegex(@"\{\s*name:\s*([^,}]+?)\s*,\s*unit:\s*([^,}]+)", RegexOptions.CultureInvariant)]
+    private static partial Regex DescribedColumnPattern();
 
     [GeneratedRegex(@"(?:wave|lambda)\w*[^\w]{1,4}(?:in |units? |are in )?[\(\[]?([A-Za-z0-9^-]+)", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant)]
     private static partial Regex WavelengthUnitPattern();

@@ -69,7 +69,10 @@ internal sealed class LineCollector
     }
 
     private static bool IsRemark(string line) =>
-        line[0] is '#' or '%' or '!' or ';' or '*' || line.StartsWith("//", StringComparison.Ordinal);
+        line[0] is '#' or '%' or '!' or ';' or '*' || line.StartsWith("//", StringComparison.Ordinal) || IsRule(line);
+
+    // Lines drawn between the names and the numbers, of at least three signs.
+    private static bool IsRule(string line) => line.Length >= 3 && line.All(static letter => letter is '-' or '=' or '+' or '|' or ' ' or '\t');
 
     private static bool IsBinary(string line) => line.Any(static character => character is < ' ' and not '\t');
 

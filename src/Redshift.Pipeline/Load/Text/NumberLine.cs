@@ -55,7 +55,7 @@ internal static partial class NumberLine
     private static bool TryNumber(string field, out double number)
     {
         if (double.TryParse(field, NumberStyles.Float, CultureInfo.InvariantCulture, out number)) return true;
-        if (field.Length == 0 || field.Equals("NULL", StringComparison.OrdinalIgnoreCase) || field is "--" or "INDEF" or "-" or "null" or "N/A")
+        if (IsMissing(field))
         {
             number = double.NaN;
             return true;
@@ -63,6 +63,10 @@ internal static partial class NumberLine
         return field.AsSpan().IndexOfAny('D', 'd') > 0
             && double.TryParse(field.Replace('D', 'E').Replace('d', 'e'), NumberStyles.Float, CultureInfo.InvariantCulture, out number);
     }
+
+    // Fortran fills a field with asterisks where a number does not fit.
+    private static bool IsMissing(string field) =>
+        field.Length == 0 || field.ToUpperInvariant() is "NULL" or "--" or "INDEF" or "-" or "N/A" or "INF" or "+INF" or "-INF" || field.All(static letter => letter == '*');
 
     private static bool TrySplitAtMinus(string field, out double left, out double right)
     {

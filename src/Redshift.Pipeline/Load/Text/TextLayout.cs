@@ -16,7 +16,7 @@ internal static class TextLayout
     {
         if (arrays.Count < 2) throw new LoadException("text", "one column of numbers", "wavelengths and fluxes");
         var sources = ByName(arrays) ?? ColumnsByPlace.Read(arrays);
-        return new() { Spectra = [sources], Header = HeaderScope.Empty, Remarks = table.Remarks, Notes = Notes(table) };
+        return new() { Spectra = [sources], Header = RemarkCards.Read(table.Remarks), Remarks = table.Remarks, Notes = Notes(table) };
     }
 
     /// <summary>The columns as arrays.</summary>
