@@ -1,5 +1,6 @@
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Normalize;
+using Redshift.Pipeline.Numerics;
 
 namespace Redshift.Pipeline.Detect;
 
@@ -43,7 +44,7 @@ internal static class FeatureFinder
     private static List<FilteredResiduals> Filter(NormalizedObservation observation)
     {
         // The line spread changes slowly: one value in sixteen is enough.
-        var spread = NoiseCheck.Median([.. observation.Spectra.SelectMany(s => s.SigmaLn.Where((_, i) => i % 16 == 0)).Select(v => (double)v)]);
+        var spread = Selection.Median([.. observation.Spectra.SelectMany(s => s.SigmaLn.Where((_, i) => i % 16 == 0)).Select(v => (double)v)]);
         var cells = ResidualCells.Build(observation.Spectra, NarrowestWidth * spread / FilteredResiduals.SigmaCells);
         var levels = new List<FilteredResiduals> { new(cells, null) };
         while (2 * levels[^1].SigmaLn < WidestSigma && cells.Count > 2 * FewestCells)

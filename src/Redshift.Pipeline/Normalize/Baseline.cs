@@ -1,3 +1,4 @@
+using System.Runtime.InteropServices;
 using Redshift.Pipeline.Numerics;
 
 namespace Redshift.Pipeline.Normalize;
@@ -46,7 +47,7 @@ internal static class Baseline
             }
 
             levels[b] = values.Count == 0 ? double.NaN
-                : Math.Log(Math.Max(Math.Max(NoiseCheck.Median([.. values]), 0.3 * NoiseCheck.Median([.. noise])), 1e-6));
+                : Math.Log(Math.Max(Math.Max(Selection.Median(CollectionsMarshal.AsSpan(values)), 0.3 * Selection.Median(CollectionsMarshal.AsSpan(noise))), 1e-6));
         }
 
         Continue(levels);

@@ -1,3 +1,5 @@
+using Redshift.Pipeline.Numerics;
+
 namespace Redshift.Pipeline.Normalize;
 
 /// <summary>What the scatter between near pixels says of the errors that a file states.</summary>
@@ -48,18 +50,11 @@ internal static class NoiseCheck
     /// <summary>Standard deviation of the noise within a window.</summary>
     public static double Scatter(ReadOnlySpan<double> values, int step)
     {
-        var differences = new double[Math.Max(0, values.Length - 2 * step)];
+        var count = Math.Max(0, values.Length - 2 * step);
+        var differences = count <= 2 * Window ? stackalloc double[count] : new double[count];
         for (var i = 0; i < differences.Length; i++)
             differences[i] = Math.Abs(2 * values[i + step] - values[i] - values[i + 2 * step]);
-        return MedianToSigma * Median(differences);
-    }
-
-    /// <summary>The median; sorts its argument. 0 for none.</summary>
-    public static double Median(double[] values)
-    {
-        if (values.Length == 0) return 0;
-        Array.Sort(values);
-        return values.Length % 2 == 1 ? values[values.Length / 2] : 0.5 * (values[values.Length / 2 - 1] + values[values.Length / 2]);
+        return MedianToSigma * Selection.Median(differences);
     }
 
     /// <summary>

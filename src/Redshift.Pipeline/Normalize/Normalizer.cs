@@ -1,4 +1,5 @@
 using Redshift.Physics.Units;
+using Redshift.Pipeline.Numerics;
 using Redshift.Pipeline.Observations;
 
 namespace Redshift.Pipeline.Normalize;
@@ -129,16 +130,39 @@ internal static class Normalizer
 
     private static double FluxScale(List<UsablePixels> spectra)
     {
-        var absolute = spectra.SelectMany(s => s.Flux).Select(Math.Abs).ToArray();
-        var level = NoiseCheck.Median(absolute);
+        var absolute = Gathered(spectra, s => s.Count, (s, into) => Fill(into, s.Flux, static f => Math.Abs(f)));
+        var level = Selection.Median(absolute);
         if (level <= 0) level = absolute.Length > 0 ? absolute.Max() : 1;
         return level > 0 ? level : 1;
     }
 
-    private static double SignalToNoise(List<NormalizedSpectrum> spectra, bool perAngstrom) =>
-        NoiseCheck.Median([.. spectra.SelectMany(s => Enumerable.Range(0, s.Count).Select(i =>
-            s.Flux[i] * Math.Sqrt(s.Weight[i] / (perAngstrom ? s.PixelWidth[i] * Math.Exp(s.LnWavelength[i]) : 1))))]);
+    private static double SignalToNoise(List<NormalizedSpectrum> spectra, bool perAngstrom) => Selection.Median(Gathered(spectra, s => s.Count, (s, into) =>
+    {
+        for (var i = 0; i < into.Length; i++)
+            into[i] = s.Flux[i] * Math.Sqrt(s.Weight[i] / (perAngstrom ? s.PixelWidth[i] * Math.Exp(s.LnWavelength[i]) : 1));
+    }));
 
     private static double Resolution(List<NormalizedSpectrum> spectra) =>
-        1 / Math.Max(1e-7, NoiseCheck.Median([.. spectra.SelectMany(s => s.SigmaLn.Select(v => v / FwhmToSigma))]));
+        1 / Math.Max(1e-7, Selection.Median(Gathered(spectra, s => s.Count, (s, into) => Fill(into, s.SigmaLn, static v => v / FwhmToSigma))));
+
+    private delegate void Filling<in T>(T spectrum, Span<double> into);
+
+    /// <summary>One value a pixel of all spectra.</summary>
+    private static double[] Gathered<T>(List<T> spectra, Func<T, int> count, Filling<T> fill)
+    {
+        var values = new double[spectra.Sum(count)];
+        var at = 0;
+        foreach (var spectrum in spectra)
+        {
+            fill(spectrum, values.AsSpan(at, count(spectrum)));
+            at += count(spectrum);
+        }
+
+        return values;
+    }
+
+    private static void Fill<T>(Span<double> into, T[] values, Func<T, double> function)
+    {
+        for (var i = 0; i < into.Length; i++) into[i] = function(values[i]);
+    }
 }

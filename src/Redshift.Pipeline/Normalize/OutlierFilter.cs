@@ -1,3 +1,6 @@
+using System.Runtime.Intrinsics;
+using Redshift.Pipeline.Numerics;
+
 namespace Redshift.Pipeline.Normalize;
 
 /// <summary>Takes the weight from pixels that no spectrum can have: spikes of one or two pixels, and errors far too small for their surroundings.</summary>
@@ -29,32 +32,47 @@ internal static class OutlierFilter
         var usable = new List<int>(flux.Length);
         for (var i = 0; i < flux.Length; i++)
             if (weight[i] > 0) usable.Add(i);
-        Span<float> near = stackalloc float[2 * Half];
-        for (var u = 0; u < usable.Count && usable.Count > 4 * Half; u++)
+        if (usable.Count <= 4 * Half) return spikes;
+        var values = new float[usable.Count];
+        for (var u = 0; u < values.Length; u++) values[u] = flux[usable[u]];
+        for (var u = 0; u < values.Length; u++)
         {
-            var from = Math.Clamp(u - Half, 0, usable.Count - 2 * Half - 1);
-            for (int v = from, n = 0; v <= from + 2 * Half; v++)
-                if (v != u) near[n++] = flux[usable[v]];
-            near.Sort();
-            var median = 0.5 * (near[Half - 1] + near[Half]);
-            // The next-to-extreme neighbours tell how far a real, resolved feature reaches here.
-            double spread = near[^2] - near[1], noise = 1 / Math.Sqrt(weight[usable[u]]);
-            var allowed = SpikeSigma * noise + 2.5 * spread + 0.3 * baseline[usable[u]];
-            if (Math.Abs(flux[usable[u]] - median) > allowed) spikes.Add(usable[u]);
+            var from = Math.Clamp(u - Half, 0, values.Length - 2 * Half - 1);
+            if (IsSpike(values.AsSpan(from, 2 * Half + 1), u - from, 1 / Math.Sqrt(weight[usable[u]]), baseline[usable[u]])) spikes.Add(usable[u]);
         }
 
         return spikes;
     }
 
+    /// <summary>Whether one of a few neighbouring values stands out.</summary>
+    private static bool IsSpike(ReadOnlySpan<float> near, int own, double noise, double baseline)
+    {
+        var least = SpikeSigma * noise + 0.3 * baseline;
+        // What is near all its neighbours is near their median.
+        var off = Vector256.Max(Vector256.Abs(Vector256.Create(near) - Vector256.Create(near[own])), Vector256.Abs(Vector256.Create(near[1..]) - Vector256.Create(near[own])));
+        if (!Vector256.GreaterThanAny(off, Vector256.Create((float)(0.999 * least)))) return false;
+        Span<float> others = stackalloc float[2 * Half];
+        near[..own].CopyTo(others);
+        near[(own + 1)..].CopyTo(others[own..]);
+        others.Sort();
+        var median = 0.5 * (others[Half - 1] + others[Half]);
+        // The next-to-extreme neighbours tell how far a real, resolved feature reaches here.
+        double spread = others[^2] - others[1];
+        return Math.Abs(near[own] - median) > least + 2.5 * spread;
+    }
+
     private static void LimitWeights(float[] weight)
     {
         const int Window = 64;
+        Span<double> used = stackalloc double[Window];
         for (var start = 0; start < weight.Length; start += Window)
         {
             var end = Math.Min(weight.Length, start + Window);
-            var used = weight[Math.Max(0, end - Window)..end].Where(w => w > 0).Select(w => (double)w).ToArray();
-            if (used.Length == 0) continue;
-            var limit = (float)(NoiseCheck.Median(used) / (SmallestErrorShare * SmallestErrorShare));
+            var count = 0;
+            foreach (var w in weight.AsSpan(Math.Max(0, end - Window)..end))
+                if (w > 0) used[count++] = w;
+            if (count == 0) continue;
+            var limit = (float)(Selection.Median(used[..count]) / (SmallestErrorShare * SmallestErrorShare));
             for (var i = start; i < end; i++) weight[i] = Math.Min(weight[i], limit);
         }
     }

@@ -1,3 +1,4 @@
+using System.Runtime.Intrinsics;
 using Redshift.Pipeline.Numerics;
 
 namespace Redshift.Pipeline.Normalize;
@@ -31,14 +32,27 @@ internal static class SmoothFit
         ReadOnlySpan<double> lnWavelength, ReadOnlySpan<float> flux, ReadOnlySpan<float> weight, ReadOnlySpan<float> baseline, double scatter)
     {
         var spline = new CubicBSpline(lnWavelength[0], lnWavelength[^1], KnotSpacing);
-        var continuum = baseline.ToArray();
+        var basis = new SplineBasis(flux.Length, spline.Count);
+        basis.Add(spline, lnWavelength, baseline, 0, 0);
+        float[] data = Padded(flux), level = Padded(baseline), weights = Padded(weight), continuum = Padded(baseline);
+        float[] robust = new float[data.Length], ones = new float[data.Length];
+        Array.Fill(ones, 1f);
+        var fit = new SplineFit(basis, data);
         for (var iteration = 0; iteration < Iterations; iteration++)
         {
-            var robust = RobustWeights(flux, weight, baseline, continuum, scatter, iteration == 0 ? 10 : 3);
-            continuum = Solve(spline, lnWavelength, flux, robust, baseline);
+            SetRobust(robust, data, weights, level, continuum, (float)scatter, iteration == 0 ? 10 : 3);
+            fit.Solve(robust, ones);
+            fit.Smooth(fit.Right, continuum);
         }
 
-        return continuum;
+        return continuum[..flux.Length];
+    }
+
+    private static float[] Padded(ReadOnlySpan<float> values)
+    {
+        var padded = new float[values.Length + Kernels.Lanes];
+        values.CopyTo(padded);
+        return padded;
     }
 
     /// <summary>Adds the smoothness prior of one spline to normal equations.</summary>
@@ -62,53 +76,16 @@ internal static class SmoothFit
                 matrix[(first + i) * (BandedCholesky.Band + 1) + (i - j)] += Strength * difference[i] * difference[j];
     }
 
-    private static float[] Solve(
-        CubicBSpline spline, ReadOnlySpan<double> lnWavelength, ReadOnlySpan<float> flux, float[] weight, ReadOnlySpan<float> baseline)
-    {
-        var matrix = new double[spline.Count * (BandedCholesky.Band + 1)];
-        var right = new double[spline.Count];
-        Span<float> four = stackalloc float[4];
-        for (var i = 0; i < flux.Length; i++)
-        {
-            if (weight[i] <= 0) continue;
-            var first = spline.Evaluate(lnWavelength[i], four);
-            for (var j = 0; j < 4; j++)
-            {
-                var wb = (double)weight[i] * four[j] * baseline[i];
-                right[first + j] += wb * flux[i];
-                for (var k = 0; k <= j; k++) matrix[(first + j) * (BandedCholesky.Band + 1) + (j - k)] += wb * four[k] * baseline[i];
-            }
-        }
-
-        AddPrior(matrix, 0, spline.Count);
-        var cholesky = new BandedCholesky();
-        cholesky.Factor(matrix, spline.Count);
-        cholesky.Forward(right);
-        cholesky.Backward(right);
-        var fit = new float[flux.Length];
-        for (var i = 0; i < fit.Length; i++)
-        {
-            var first = spline.Evaluate(lnWavelength[i], four);
-            var sum = four[0] * right[first] + four[1] * right[first + 1] + four[2] * right[first + 2] + four[3] * right[first + 3];
-            fit[i] = (float)(sum * baseline[i]);
-        }
-
-        return fit;
-    }
-
     /// <summary>Cauchy weights 1/(1+(r/kσ)²): lines and cosmic rays fade out, noise keeps its weight.</summary>
-    private static float[] RobustWeights(
-        ReadOnlySpan<float> flux, ReadOnlySpan<float> weight, ReadOnlySpan<float> baseline, float[] continuum, double scatter, double k)
+    private static void SetRobust(float[] robust, float[] flux, float[] weight, float[] baseline, float[] continuum, float scatter, float k)
     {
-        var robust = new float[flux.Length];
-        for (var i = 0; i < robust.Length; i++)
+        for (var i = 0; i <= robust.Length - Kernels.Lanes; i += Kernels.Lanes)
         {
-            if (weight[i] <= 0) continue;
-            double level = scatter * Math.Max(Math.Abs(continuum[i]), baseline[i]), off = flux[i] - continuum[i];
-            var variance = 1 / weight[i] + level * level;
-            robust[i] = (float)(1 / variance / (1 + off * off / (variance * k * k)));
+            Vector256<float> smooth = Vector256.Create(continuum, i), off = (Vector256.Create(flux, i) - smooth) * (1 / k);
+            var level = scatter * Vector256.Max(Vector256.Abs(smooth), Vector256.Create(baseline, i));
+            // A pixel without weight has an infinite variance, and so no weight here.
+            var variance = Vector256<float>.One / Vector256.Create(weight, i) + level * level;
+            (Vector256<float>.One / (variance + off * off)).CopyTo(robust, i);
         }
-
-        return robust;
     }
 }

@@ -19,11 +19,11 @@ internal sealed class DenseFit
 
     public DenseFit(FitPixels pixels, float[] template, params DenseColumn[] columns)
     {
-        _coefficients = pixels.Coefficients;
+        _coefficients = pixels.Basis.Coefficients;
         _design = Matrix<double>.Build.Dense(pixels.Count, _coefficients + columns.Length);
         for (var p = 0; p < pixels.Count; p++)
         {
-            for (var j = 0; j < 4; j++) _design[p, pixels.SplineFirst[p] + j] = pixels.Spline[j][p] * template[p];
+            for (var j = 0; j < 4; j++) _design[p, pixels.Basis.First[p] + j] = pixels.Basis.Values[j][p] * template[p];
             for (var c = 0; c < columns.Length; c++) _design[p, _coefficients + c] = columns[c].Values[p];
         }
 
@@ -46,16 +46,16 @@ internal sealed class DenseFit
 
     /// <summary>The spline alone, without the template.</summary>
     public float[] Smooth(FitPixels pixels) =>
-        [.. Enumerable.Range(0, pixels.Count).Select(p => (float)Enumerable.Range(0, 4).Sum(j => pixels.Spline[j][p] * _solution[pixels.SplineFirst[p] + j]))];
+        [.. Enumerable.Range(0, pixels.Count).Select(p => (float)Enumerable.Range(0, 4).Sum(j => pixels.Basis.Values[j][p] * _solution[pixels.Basis.First[p] + j]))];
 
     private static (Matrix<double> Precision, Vector<double> Mean) Prior(FitPixels pixels, DenseColumn[] columns)
     {
         const int Row = BandedCholesky.Band + 1;
-        var size = pixels.Coefficients + columns.Length;
+        var size = pixels.Basis.Coefficients + columns.Length;
         var precision = Matrix<double>.Build.Dense(size, size);
-        for (var i = 0; i < pixels.Coefficients; i++)
-            for (var d = 0; d <= Math.Min(i, BandedCholesky.Band); d++) precision[i, i - d] = precision[i - d, i] = pixels.PriorMatrix[i * Row + d];
-        for (var c = 0; c < columns.Length; c++) precision[pixels.Coefficients + c, pixels.Coefficients + c] = 1 / (columns[c].Spread * columns[c].Spread);
-        return (precision, Vector<double>.Build.Dense(size, i => i < pixels.Coefficients ? 0 : columns[i - pixels.Coefficients].Mean));
+        for (var i = 0; i < pixels.Basis.Coefficients; i++)
+            for (var d = 0; d <= Math.Min(i, BandedCholesky.Band); d++) precision[i, i - d] = precision[i - d, i] = pixels.Basis.PriorMatrix[i * Row + d];
+        for (var c = 0; c < columns.Length; c++) precision[pixels.Basis.Coefficients + c, pixels.Basis.Coefficients + c] = 1 / (columns[c].Spread * columns[c].Spread);
+        return (precision, Vector<double>.Build.Dense(size, i => i < pixels.Basis.Coefficients ? 0 : columns[i - pixels.Basis.Coefficients].Mean));
     }
 }

@@ -80,13 +80,6 @@ public class NoiseCheckTests
     [Fact]
     public void A_short_spectrum_is_measured_as_a_whole() => Assert.Equal(4, NoiseCheck.Measure(White(1, 4).AsSpan(0, 100)).Scale, 1.2);
 
-    [Theory]
-    [InlineData(new double[0], 0)]
-    [InlineData(new[] { 3.0 }, 3)]
-    [InlineData(new[] { 5.0, 1, 3 }, 3)]
-    [InlineData(new[] { 5.0, 1, 3, 4 }, 3.5)]
-    public void Median_is_the_middle(double[] values, double median) => Assert.Equal(median, NoiseCheck.Median(values));
-
     private static double[] White(ulong seed, double sigma)
     {
         var random = new RandomSource(seed);

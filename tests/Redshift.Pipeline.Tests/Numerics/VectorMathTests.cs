@@ -22,7 +22,8 @@ public class VectorMathTests
     {
         var x = VectorMath.Exp(Vector256.Create(values) * 80f);
         var found = VectorMath.Ln(x);
-        for (var i = 0; i < 8; i++) Assert.Equal(Math.Log(x[i]), found[i], 1e-6 + 1e-7 * Math.Abs(Math.Log(x[i])));
+        // To 1e-6 and two units in the last place of the result.
+        for (var i = 0; i < 8; i++) Assert.Equal(Math.Log(x[i]), found[i], 1e-6 + 2.4e-7 * Math.Abs(Math.Log(x[i])));
     });
 
     [Fact]

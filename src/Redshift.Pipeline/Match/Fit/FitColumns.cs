@@ -1,5 +1,6 @@
 using System.Runtime.Intrinsics;
 using Redshift.Pipeline.Match.Models;
+using Redshift.Pipeline.Normalize;
 using Redshift.Pipeline.Numerics;
 
 namespace Redshift.Pipeline.Match.Fit;
@@ -40,7 +41,7 @@ internal sealed class FitColumns(FitPixels pixels, SplineFit spline)
 {
     private readonly List<Segment> _segments = [];
     private Column[] _columns = new Column[32];
-    private double[] _projected = new double[32 * pixels.Coefficients];
+    private double[] _projected = new double[32 * pixels.Basis.Coefficients];
     private double[] _products = new double[32 * 32];
     private float[] _values = new float[2 * pixels.Flux.Length];
     private float[] _weighted = new float[2 * pixels.Flux.Length];
@@ -56,7 +57,7 @@ internal sealed class FitColumns(FitPixels pixels, SplineFit spline)
     public double Curvature(int column) => _products[column * Count + column];
 
     /// <summary>L⁻¹ of a column's products with the spline.</summary>
-    public ReadOnlySpan<double> Projected(int column) => _projected.AsSpan(column * pixels.Coefficients, pixels.Coefficients);
+    public ReadOnlySpan<double> Projected(int column) => _projected.AsSpan(column * pixels.Basis.Coefficients, pixels.Basis.Coefficients);
 
     public void Clear()
     {
@@ -95,7 +96,7 @@ internal sealed class FitColumns(FitPixels pixels, SplineFit spline)
     /// <summary>Projects the spline out of all columns and forms their products.</summary>
     public void Project()
     {
-        if (_projected.Length < Count * pixels.Coefficients) _projected = new double[2 * Count * pixels.Coefficients];
+        if (_projected.Length < Count * pixels.Basis.Coefficients) _projected = new double[2 * Count * pixels.Basis.Coefficients];
         if (_products.Length < Count * Count) _products = new double[2 * Count * Count];
         for (var c = 0; c < Count; c++) Project(c);
         for (var g = 0; g < Count; g++)
@@ -115,7 +116,7 @@ internal sealed class FitColumns(FitPixels pixels, SplineFit spline)
 
     private void Project(int column)
     {
-        var projected = _projected.AsSpan(column * pixels.Coefficients, pixels.Coefficients);
+        var projected = _projected.AsSpan(column * pixels.Basis.Coefficients, pixels.Basis.Coefficients);
         projected.Clear();
         double gradient = 0;
         foreach (var (start, end, offset) in Segments(column)) gradient += spline.AddProducts(start, end, _values.AsSpan(offset), _weighted.AsSpan(offset), projected);

@@ -14,11 +14,8 @@ internal sealed class FitPixels
     /// <summary>Emission lines are no Gaussians: their model is wrong by this share of what stands above the continuum.</summary>
     private const double LineError = 0.08;
 
-    private readonly int[] _intervalOfCoefficient;
-
     private FitPixels(int count, int coefficients)
     {
-        _intervalOfCoefficient = new int[coefficients];
         Count = count;
         var padded = count + Kernels.Lanes;
         LnWavelength = new double[padded];
@@ -28,9 +25,7 @@ internal sealed class FitPixels
         Continuum = new float[padded];
         TemplateIndex = new int[padded];
         TemplateFraction = new float[padded];
-        SplineFirst = new int[count];
-        Spline = [new float[padded], new float[padded], new float[padded], new float[padded]];
-        PriorMatrix = new double[coefficients * (BandedCholesky.Band + 1)];
+        Basis = new(count, coefficients);
     }
 
     /// <summary>Number of pixels.</summary>
@@ -57,19 +52,8 @@ internal sealed class FitPixels
     /// <summary>Stretches of pixels of the same one of <see cref="LineSpreadLevels"/>.</summary>
     public List<(int Start, int End, int Level)> Levels { get; } = [];
 
-    /// <summary>First spline coefficient of a pixel.</summary>
-    public int[] SplineFirst { get; }
-
-    /// <summary>The four basis values at each pixel, times the baseline.</summary>
-    public float[][] Spline { get; }
-
-    /// <summary>Stretches of pixels that share their four coefficients, and the first of these.</summary>
-    public List<(int Start, int End, int First)> Intervals { get; } = [];
-
-    /// <summary>Smoothness prior of all splines.</summary>
-    public double[] PriorMatrix { get; }
-
-    public int Coefficients => PriorMatrix.Length / (BandedCholesky.Band + 1);
+    /// <summary>The smooth nuisance, a spline for each spectrum.</summary>
+    public SplineBasis Basis { get; }
 
     /// <summary>Index of the first pixel of each spectrum, and the end.</summary>
     public required int[] Starts { get; init; }
@@ -99,7 +83,6 @@ internal sealed class FitPixels
 
     private void Fill(PixelRun run, CubicBSpline spline, int at, int coefficient, ModelError modelError, double errorWidth)
     {
-        Span<float> four = stackalloc float[4];
         for (var i = 0; i < run.Flux.Length; i++)
         {
             var p = at + i;
@@ -114,24 +97,10 @@ internal sealed class FitPixels
             TemplateIndex[p] = (int)Math.Floor(place);
             TemplateFraction[p] = (float)(place - TemplateIndex[p]);
             Continuum[p] = Math.Max(run.Continuum[i], 0.5f * run.Baseline[i]);
-            SplineFirst[p] = coefficient + spline.Evaluate(run.LnWavelength[i], four);
-            for (var j = 0; j < 4; j++) Spline[j][p] = four[j] * run.Baseline[i];
         }
 
-        AddIntervals(at, at + run.Flux.Length);
+        Basis.Add(spline, run.LnWavelength, run.Baseline, at, coefficient);
         AddLevels(at, at + run.Flux.Length);
-        SmoothFit.AddPrior(PriorMatrix, coefficient, spline.Count);
-    }
-
-    private void AddIntervals(int start, int end)
-    {
-        for (var p = start + 1; p <= end; p++)
-        {
-            if (p < end && SplineFirst[p] == SplineFirst[start]) continue;
-            _intervalOfCoefficient[SplineFirst[start]] = Intervals.Count;
-            Intervals.Add((start, p, SplineFirst[start]));
-            start = p;
-        }
     }
 
     private void AddLevels(int start, int end)
@@ -145,9 +114,6 @@ internal sealed class FitPixels
             (start, level) = (p, next);
         }
     }
-
-    /// <summary>Index in <see cref="Intervals"/> of the stretch that a pixel lies in.</summary>
-    public int IntervalOf(int pixel) => _intervalOfCoefficient[SplineFirst[pixel]];
 
     /// <summary>The first pixel of a spectrum at or above a wavelength.</summary>
     public int Find(int spectrum, double lnWavelength)

@@ -1,4 +1,5 @@
 using Redshift.Pipeline.Normalize;
+using Redshift.Pipeline.Numerics;
 
 namespace Redshift.Pipeline.Match.Fit;
 
@@ -62,6 +63,6 @@ internal sealed class ModelError
                 excess[Math.Min(blocks - 1, (int)((run.LnWavelength[i] - start) / Block))].Add((residual * residual - 0.455 / run.Weight[i]) / (0.455 * level * level));
             }
 
-        return new(start, Array.ConvertAll(excess, e => Math.Clamp(Math.Sqrt(Math.Max(0, NoiseCheck.Median([.. e]))), Least, Most)));
+        return new(start, Array.ConvertAll(excess, e => Math.Clamp(Math.Sqrt(Math.Max(0, Selection.Median([.. e]))), Least, Most)));
     }
 }

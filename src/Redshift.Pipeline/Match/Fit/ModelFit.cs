@@ -1,4 +1,5 @@
 using Redshift.Pipeline.Match.Models;
+using Redshift.Pipeline.Normalize;
 using Redshift.Pipeline.Numerics;
 
 namespace Redshift.Pipeline.Match.Fit;
@@ -32,7 +33,7 @@ internal sealed class ModelFit
     public ModelFit(FitPixels pixels)
     {
         _pixels = pixels;
-        _spline = new(pixels);
+        _spline = new(pixels.Basis, pixels.Flux);
         _columns = new(pixels, _spline);
         _selection = new(_columns);
         _profiles = new(pixels);

@@ -227,7 +227,7 @@ internal static class GaussianFit
 
         public double LnSigma { get; private set; } = Math.Log(shape.Sigma);
 
-        public double Sigma => Math.Exp(LnSigma);
+        public double Sigma { get; private set; } = Math.Exp(Math.Log(shape.Sigma));
 
         public double Level { get; private set; }
 
@@ -247,6 +247,7 @@ internal static class GaussianFit
             double centre = Centre, lnSigma = LnSigma;
             Centre = Math.Clamp(Centre + Sigma * Math.Clamp(solution[3], -0.5, 0.5), shape.Centre - MostShift * shape.CentreSpread, shape.Centre + MostShift * shape.CentreSpread);
             LnSigma = Math.Max(LnSigma + Math.Clamp(solution[4], -0.35, 0.35), Math.Log(shape.LeastSigma));
+            Sigma = Math.Exp(LnSigma);
             return Math.Abs(Centre - centre) < Settled * Sigma && Math.Abs(LnSigma - lnSigma) < Settled;
         }
     }

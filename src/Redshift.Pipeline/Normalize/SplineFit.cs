@@ -1,16 +1,18 @@
 using System.Runtime.Intrinsics;
 using Redshift.Pipeline.Numerics;
 
-namespace Redshift.Pipeline.Match.Fit;
+namespace Redshift.Pipeline.Normalize;
 
 /// <summary>The smooth spline times a template, fitted by weighted least squares with its prior: what is projected out of all else.</summary>
-internal sealed class SplineFit(FitPixels pixels)
+/// <param name="basis">The spline at the basis.</param>
+/// <param name="flux">Flux of each pixel and a vector more.</param>
+internal sealed class SplineFit(SplineBasis basis, float[] flux)
 {
     private const int Row = BandedCholesky.Band + 1;
 
-    private readonly double[] _matrix = new double[pixels.PriorMatrix.Length];
-    private readonly double[] _right = new double[pixels.Coefficients];
-    private readonly double[] _coefficients = new double[pixels.Coefficients];
+    private readonly double[] _matrix = new double[basis.PriorMatrix.Length];
+    private readonly double[] _right = new double[basis.Coefficients];
+    private readonly double[] _coefficients = new double[basis.Coefficients];
     private readonly BandedCholesky _cholesky = new();
     private float[] _weight = [];
     private float[] _template = [];
@@ -19,15 +21,15 @@ internal sealed class SplineFit(FitPixels pixels)
     public ReadOnlySpan<double> Right => _right;
 
     /// <summary>Solves for the spline; returns its part of the ln evidence.</summary>
-    /// <param name="weight">Weights of the pixels.</param>
+    /// <param name="weight">Weights of the basis.</param>
     /// <param name="template">What multiplies the spline; kept for what is projected.</param>
     public double Solve(float[] weight, float[] template)
     {
         (_weight, _template) = (weight, template);
-        pixels.PriorMatrix.CopyTo(_matrix, 0);
+        basis.PriorMatrix.CopyTo(_matrix, 0);
         Array.Clear(_right);
-        foreach (var (start, end, first) in pixels.Intervals) AddInterval(start, end, _matrix.AsSpan(first * Row), _right.AsSpan(first));
-        _cholesky.Factor(_matrix, pixels.Coefficients);
+        foreach (var (start, end, first) in basis.Intervals) AddInterval(start, end, _matrix.AsSpan(first * Row), _right.AsSpan(first));
+        _cholesky.Factor(_matrix, basis.Coefficients);
         _cholesky.Forward(_right);
         return 0.5 * Kernels.Dot(_right, _right) - _cholesky.HalfLogDeterminant;
     }
@@ -46,19 +48,19 @@ internal sealed class SplineFit(FitPixels pixels)
     public float AddProducts(int start, int end, ReadOnlySpan<float> column, Span<float> weighted, Span<double> sums)
     {
         Vector256<float> gradient = default;
-        for (var interval = pixels.IntervalOf(start); start < end; interval++)
+        for (var interval = basis.IntervalOf(start); start < end; interval++)
         {
-            var (_, stop, first) = pixels.Intervals[interval];
+            var (_, stop, first) = basis.Intervals[interval];
             var to = Math.Min(stop, end);
             Vector256<float> r0 = default, r1 = default, r2 = default, r3 = default;
-            var (s0, s1, s2, s3) = (pixels.Spline[0], pixels.Spline[1], pixels.Spline[2], pixels.Spline[3]);
+            var (s0, s1, s2, s3) = (basis.Values[0], basis.Values[1], basis.Values[2], basis.Values[3]);
             var at = 0;
             for (var p = start; p < to; p += Kernels.Lanes, at += Kernels.Lanes)
             {
                 var product = Vector256.Create(_weight, p) * Vector256.Create(column[at..]);
                 if (to - p < Kernels.Lanes) product &= Kernels.Mask(to - p);
                 product.CopyTo(weighted[at..]);
-                gradient += product * Vector256.Create(pixels.Flux, p);
+                gradient += product * Vector256.Create(flux, p);
                 product *= Vector256.Create(_template, p);
                 r0 += product * Vector256.Create(s0, p);
                 r1 += product * Vector256.Create(s1, p);
@@ -82,8 +84,8 @@ internal sealed class SplineFit(FitPixels pixels)
     {
         forward.CopyTo(_coefficients);
         _cholesky.Backward(_coefficients);
-        var (s0, s1, s2, s3) = (pixels.Spline[0], pixels.Spline[1], pixels.Spline[2], pixels.Spline[3]);
-        foreach (var (start, end, first) in pixels.Intervals)
+        var (s0, s1, s2, s3) = (basis.Values[0], basis.Values[1], basis.Values[2], basis.Values[3]);
+        foreach (var (start, end, first) in basis.Intervals)
         {
             Vector256<float> c0 = Vector256.Create((float)_coefficients[first]), c1 = Vector256.Create((float)_coefficients[first + 1]);
             Vector256<float> c2 = Vector256.Create((float)_coefficients[first + 2]), c3 = Vector256.Create((float)_coefficients[first + 3]);
@@ -98,18 +100,18 @@ internal sealed class SplineFit(FitPixels pixels)
         Vector256<float> m00 = default, m10 = default, m11 = default, m20 = default, m21 = default;
         Vector256<float> m22 = default, m30 = default, m31 = default, m32 = default, m33 = default;
         Vector256<float> r0 = default, r1 = default, r2 = default, r3 = default;
-        var (b0, b1, b2, b3) = (pixels.Spline[0], pixels.Spline[1], pixels.Spline[2], pixels.Spline[3]);
+        var (b0, b1, b2, b3) = (basis.Values[0], basis.Values[1], basis.Values[2], basis.Values[3]);
         for (var p = start; p < end; p += Kernels.Lanes)
         {
             Vector256<float> s0 = Vector256.Create(b0, p), s1 = Vector256.Create(b1, p), s2 = Vector256.Create(b2, p), s3 = Vector256.Create(b3, p);
             var template = Vector256.Create(_template, p);
             var product = Vector256.Create(_weight, p) * template;
             if (end - p < Kernels.Lanes) product &= Kernels.Mask(end - p);
-            var flux = product * Vector256.Create(pixels.Flux, p);
-            r0 += flux * s0;
-            r1 += flux * s1;
-            r2 += flux * s2;
-            r3 += flux * s3;
+            var data = product * Vector256.Create(flux, p);
+            r0 += data * s0;
+            r1 += data * s1;
+            r2 += data * s2;
+            r3 += data * s3;
             product *= template;
             m00 += product * s0 * s0;
             var row = product * s1;
