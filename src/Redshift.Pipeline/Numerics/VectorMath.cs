@@ -33,6 +33,6 @@ internal static class VectorMath
         var one = Vector256<float>.One;
         var z = (mantissa - one) / (mantissa + one);
         var square = z * z;
-        return exponent * Ln2 + z * (Vector256.Create(2f) + square * (Vector256.Create(2f / 3) + square * (2f / 5)));
+        return exponent * Ln2 + z * (Vector256.Create(2f) + square * (Vector256.Create(2f / 3) + square * (Vector256.Create(2f / 5) + square * (2f / 7))));
     }
 }
