@@ -39,6 +39,7 @@ internal static class CommandLine
             ExplainCommand.Build(),
             LinesCommand.Build(),
             ExportCommand.Build(),
+            MergeCommand.Build(),
             CompareCommand.Build(),
         };
         root.SetAction((Action<ParseResult>)(_ => throw new UsageException("no command given; see zladder --help")));

@@ -1,6 +1,8 @@
 using System.CommandLine;
+using System.CommandLine.Parsing;
 using System.Diagnostics;
 using Redshift.Pipeline.Batch;
+using Redshift.Pipeline.Ledger;
 
 namespace Redshift.Cli;
 
@@ -29,6 +31,13 @@ internal sealed class RunCommand
         Description = "Read all files and compare their content with the ledger; otherwise size and time tell whether a file changed",
     };
 
+    private readonly Option<Shard?> _shard = new("--shard")
+    {
+        Description = "Measure only part I of N; the same inputs must be given for every part, and 'zladder merge' joins them",
+        HelpName = "I/N",
+        CustomParser = ParseShard,
+    };
+
     private readonly Option<bool> _json = new("--json") { Description = "Print the summary as JSON" };
 
     private RunCommand()
@@ -39,6 +48,7 @@ internal sealed class RunCommand
         _command.Add(_plots);
         _command.Add(_jobs);
         _command.Add(_maxRejects);
+        _command.Add(_shard);
         _command.Add(_again);
         _command.Add(_verify);
         _command.Add(_json);
@@ -56,11 +66,21 @@ internal sealed class RunCommand
         var settings = _shared.Settings(parsed);
         var files = InputFiles.Find(_paths.Read(parsed), parsed.GetRequiredValue(_out));
         var jobs = parsed.GetValue(_jobs) ?? Workers.Available(Environment.GetEnvironmentVariable);
-        using var session = new Session(parsed.GetRequiredValue(_out), settings, jobs, parsed.GetValue(_plots));
+        using var session = new Session(parsed.GetRequiredValue(_out), settings, jobs, parsed.GetValue(_plots), parsed.GetValue(_shard));
         var measured = await session.MeasureAsync(files, parsed.GetValue(_again), parsed.GetValue(_verify), token).ConfigureAwait(false);
         var tally = Tally.Of(session.Ledger);
         Summary.Print(tally, measured, parsed.GetRequiredValue(_out), watch.Elapsed, parsed.GetValue(_json));
-        return tally.Results == 0 || tally.Rejects > parsed.GetValue(_maxRejects) ? ExitCode.Unusable : ExitCode.Done;
+        // A part of the inputs may be empty; whether anything can be used is for the merge to say.
+        return (tally.Results == 0 && parsed.GetValue(_shard) is null) || tally.Rejects > parsed.GetValue(_maxRejects) ? ExitCode.Unusable : ExitCode.Done;
+    }
+
+    private static Shard? ParseShard(ArgumentResult result)
+    {
+        var text = result.Tokens[0].Value;
+        if (Shard.TryParse(text, out var shard))
+            return shard;
+        result.AddError($"'{text}': expected a part and the number of parts, such as 3/7");
+        return null;
     }
 
     private static Option<int?> Count(string name, string description, int least) => new(name)

@@ -11,6 +11,7 @@ internal sealed class Session : IDisposable
 {
     private readonly OutputFolder _folder;
     private readonly PipelineSettings _settings;
+    private readonly Shard? _shard;
     private readonly PlotFolder? _plots;
     private readonly BatchRun _batch;
     private Progress? _progress;
@@ -20,9 +21,10 @@ internal sealed class Session : IDisposable
     /// <param name="settings">The parameters of the stages.</param>
     /// <param name="jobs">Number of workers.</param>
     /// <param name="plots">Whether every spectrum is drawn.</param>
+    /// <param name="shard">Which part of the inputs, or null for all.</param>
     /// <exception cref="FolderInUseException">Another run writes there.</exception>
     /// <exception cref="IOException">The folder or its ledger cannot be used.</exception>
-    public Session(string folder, PipelineSettings settings, int jobs, bool plots)
+    public Session(string folder, PipelineSettings settings, int jobs, bool plots, Shard? shard = null)
     {
         _folder = new(folder);
         try
@@ -36,8 +38,9 @@ internal sealed class Session : IDisposable
         }
 
         _settings = settings;
+        _shard = shard;
         _plots = plots ? new(folder, message => _progress?.Say(message)) : null;
-        _batch = new(settings, jobs, _plots is null ? null : _plots.Draw);
+        _batch = new(settings, jobs, _plots is null ? null : _plots.Draw, shard);
     }
 
     /// <summary>The ledger of the folder.</summary>
@@ -52,12 +55,13 @@ internal sealed class Session : IDisposable
     /// <exception cref="OperationCanceledException">The token ended the work; what was done is in the ledger.</exception>
     public async Task<int> MeasureAsync(IEnumerable<InputFile> files, bool again, bool verify, CancellationToken token)
     {
-        var plan = WorkPlan.Make(Ledger, files, _settings, again, verify, _plots is null ? null : _plots.Has);
+        var plan = WorkPlan.Make(Ledger, files, _settings, again, verify, _plots is null ? null : _plots.Has, _shard);
         using var progress = _progress = Progress.Start(plan.Bytes);
         try
         {
             await new RecordedRun(_batch, Ledger, progress.Update).RunAsync(plan.Files, token).ConfigureAwait(false);
             CatalogueFiles.Write(Ledger, _folder.Path, token);
+            Ledger.Setup = Ledger.Setup! with { Finished = true };
             return progress.Measured;
         }
         catch (OperationCanceledException)

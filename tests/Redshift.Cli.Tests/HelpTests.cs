@@ -10,6 +10,7 @@ public sealed class HelpTests
     [InlineData("run")]
     [InlineData("explain")]
     [InlineData("lines")]
+    [InlineData("merge")]
     [InlineData("export")]
     [InlineData("compare")]
     public void Help_is_as_approved(params string[] command)

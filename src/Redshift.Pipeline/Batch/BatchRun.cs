@@ -15,7 +15,8 @@ namespace Redshift.Pipeline.Batch;
 /// <param name="settings">The parameters of the stages.</param>
 /// <param name="jobs">Number of workers, at least 1.</param>
 /// <param name="finish">What a worker does with each result beside handing it on (pictures), or null.</param>
-public sealed class BatchRun(PipelineSettings settings, int jobs, Action<ObservationResult>? finish = null)
+/// <param name="shard">Which part of the spectra of large files, or null for all.</param>
+public sealed class BatchRun(PipelineSettings settings, int jobs, Action<ObservationResult>? finish = null, Shard? shard = null)
 {
     // Spectra that may wait for each worker: enough to ride over a slow file, few enough for a laptop.
     private const int WaitingPerJob = 8;
@@ -38,7 +39,7 @@ public sealed class BatchRun(PipelineSettings settings, int jobs, Action<Observa
     {
         using var stop = CancellationTokenSource.CreateLinkedTokenSource(token);
         var work = Channel.CreateBounded<PendingSpectrum>(jobs * WaitingPerJob);
-        var reader = new FileReader(settings.Load, _fingerprint, work.Writer, entries);
+        var reader = new FileReader(settings.Load, _fingerprint, shard ?? Shard.Whole, work.Writer, entries);
         var next = -1;
 
         async Task ReadFiles()

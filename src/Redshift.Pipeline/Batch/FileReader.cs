@@ -9,10 +9,11 @@ namespace Redshift.Pipeline.Batch;
 /// <summary>Reads one file after the other: what is new in it goes to the workers, what cannot be used is reported.</summary>
 /// <param name="settings">How files are read.</param>
 /// <param name="fingerprint">What the answers depend on beside the files.</param>
+/// <param name="shard">Which part of large files is read.</param>
 /// <param name="work">Takes the spectra.</param>
 /// <param name="entries">Takes the reports.</param>
 internal sealed class FileReader(
-    LoadSettings settings, string fingerprint, ChannelWriter<PendingSpectrum> work, ChannelWriter<LedgerEntry> entries)
+    LoadSettings settings, string fingerprint, Shard shard, ChannelWriter<PendingSpectrum> work, ChannelWriter<LedgerEntry> entries)
 {
     /// <summary>Reads a file to its end.</summary>
     /// <exception cref="OperationCanceledException">The token ended the run.</exception>
@@ -31,7 +32,7 @@ internal sealed class FileReader(
             await entries.WriteAsync(new FileBegun(file.Source, stamp, hash, fingerprint, known is not null), token).ConfigureAwait(false);
             file.Bytes = stamp.Size;
             if (known is not { Complete: true })
-                await ReadSpectraAsync(item.File, file, known, token).ConfigureAwait(false);
+                await ReadSpectraAsync(item.File, file, row => shard.Owns(file.Source, stamp.Size, row) && known?.Done.Contains(row) != true, token).ConfigureAwait(false);
             if (FileStamp.Of(item.File.Path) != stamp)
                 file.Spoilt = Changed(item.File);
         }
@@ -39,7 +40,7 @@ internal sealed class FileReader(
         await file.LeaveAsync().ConfigureAwait(false);
     }
 
-    private async Task ReadSpectraAsync(InputFile input, OpenFile file, EarlierWork? known, CancellationToken token)
+    private async Task ReadSpectraAsync(InputFile input, OpenFile file, Func<int, bool> isWanted, CancellationToken token)
     {
         using var reading = new FileReading(file.Source, settings);
         if (Guarded<Reject?>(file.Source, null, () => reading.Open(input.Path), static fault => fault) is { } refused)
@@ -48,7 +49,7 @@ internal sealed class FileReader(
             return;
         }
 
-        var rows = Enumerable.Range(0, reading.Rows).Where(row => known?.Done.Contains(row) != true).ToList();
+        var rows = Enumerable.Range(0, reading.Rows).Where(isWanted).ToList();
         file.ShareAmong(rows.Count);
         foreach (var row in rows)
         {

@@ -1,4 +1,6 @@
 using System.Collections.Frozen;
+using System.IO.Hashing;
+using System.Text;
 using Redshift.Pipeline.Ledger;
 using Redshift.Pipeline.Settings;
 
@@ -34,6 +36,7 @@ public sealed class WorkPlan
     /// <param name="again">Whether everything is measured again, whatever the ledger knows.</param>
     /// <param name="verify">Whether the content of every file is compared, and not only its size and time.</param>
     /// <param name="isFinished">Whether a measured spectrum, by source and row, has all that this run wants beside the ledger; null for yes.</param>
+    /// <param name="shard">Which part of the files, or null for all.</param>
     /// <exception cref="LedgerException">The ledger cannot be written.</exception>
     public static WorkPlan Make(
         LedgerFile ledger,
@@ -41,20 +44,29 @@ public sealed class WorkPlan
         PipelineSettings settings,
         bool again = false,
         bool verify = false,
-        Func<string, int, bool>? isFinished = null)
+        Func<string, int, bool>? isFinished = null,
+        Shard? shard = null)
     {
+        var part = shard ?? Shard.Whole;
         var plan = new WorkPlan(Fingerprint.Of(settings)) { Again = again, Verify = verify, IsFinished = isFinished };
         using var listing = new LedgerListing(ledger);
+        var inputs = new XxHash128();
         foreach (var file in files)
-            plan.Add(file, listing);
-        ledger.Keep = settings.Load.Keep;
+        {
+            inputs.Append(Encoding.UTF8.GetBytes(file.Source + "\n"));
+            plan.Add(file, part, listing);
+        }
+
+        ledger.Setup = new(plan._fingerprint, settings.Load.Keep, part, Convert.ToHexStringLower(inputs.GetCurrentHash()));
         listing.Complete();
         return plan;
     }
 
-    private void Add(InputFile file, LedgerListing listing)
+    private void Add(InputFile file, Shard part, LedgerListing listing)
     {
         var stamp = file.Problem is null ? FileStamp.Of(file.Path) : FileStamp.None;
+        if (!part.Reads(file.Source, stamp.Size))
+            return;
         var known = listing.Add(file.Source, file.Path);
         var earlier = known is not null && !Again && known.Fingerprint == _fingerprint ? Earlier(known, listing) : null;
         if (earlier is { Complete: true } && !Verify && known!.Stamp == stamp && known.Path == file.Path)

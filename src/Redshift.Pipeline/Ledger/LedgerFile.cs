@@ -1,4 +1,3 @@
-using System.Text.Json;
 using Microsoft.Data.Sqlite;
 
 namespace Redshift.Pipeline.Ledger;
@@ -21,12 +20,17 @@ public sealed class LedgerFile : IDisposable
     /// <summary>Where the ledger is.</summary>
     public string Path => Database.Path;
 
-    /// <summary>The header cards that are the last columns of the catalogue.</summary>
-    public IReadOnlyList<string> Keep
+    /// <summary>What its run was told to do, or null before the first.</summary>
+    /// <exception cref="LedgerException">The ledger cannot be read or written.</exception>
+    public LedgerSetup? Setup
     {
-        get => Noted(SetupNames.Keep) is { } json ? JsonSerializer.Deserialize(json, LedgerJson.Default.StringArray)! : [];
-        internal set => Note(SetupNames.Keep, JsonSerializer.Serialize([.. value], LedgerJson.Default.StringArray));
+        get => LedgerSetup.Read(Database);
+        set => value!.Write(Database);
     }
+
+    /// <summary>The header cards that are the last columns of the catalogue.</summary>
+    /// <exception cref="LedgerException">The ledger cannot be read.</exception>
+    public IReadOnlyList<string> Keep => Setup?.Keep ?? [];
 
     internal LedgerDatabase Database { get; }
 
@@ -67,23 +71,6 @@ public sealed class LedgerFile : IDisposable
 
     /// <inheritdoc/>
     public void Dispose() => Database.Dispose();
-
-    /// <summary>What was noted under a name, or null.</summary>
-    internal string? Noted(string name) => Database.Guarded(() =>
-    {
-        using var command = Database.Command("SELECT value FROM setup WHERE name = @name");
-        command.Parameters.AddWithValue("@name", name);
-        return (string?)command.ExecuteScalar();
-    });
-
-    /// <summary>Notes something under a name.</summary>
-    internal void Note(string name, string value) => Database.Guarded(() =>
-    {
-        using var command = Database.Command("INSERT OR REPLACE INTO setup (name, value) VALUES (@name, @value)");
-        command.Parameters.AddWithValue("@name", name);
-        command.Parameters.AddWithValue("@value", value);
-        return command.ExecuteNonQuery();
-    });
 
     private static string In(string folder) => System.IO.Path.Combine(System.IO.Path.GetFullPath(folder), Name);
 

@@ -24,7 +24,7 @@ public sealed class FileReaderTests : IDisposable
     {
         File.WriteAllBytes(_folder.File("stack.fits"), Stack());
         _file = new(_folder.Path, "stack.fits");
-        _reader = new(new(), "fingerprint", _work.Writer, _entries.Writer);
+        _reader = new(new(), "fingerprint", Shard.Whole, _work.Writer, _entries.Writer);
     }
 
     public void Dispose() => _folder.Dispose();

@@ -19,13 +19,25 @@ internal static class FilledLedger
             : new SpectrumDone(((Reject)outcome).Source, StoredOutcome.Of((Reject)outcome), 1, 0, (Reject)outcome)).ToList();
         using (var listing = new LedgerListing(ledger))
         {
-            ledger.Keep = keep;
+            ledger.Setup = new("fingerprint", keep, Shard.Whole, "inputs");
             foreach (var entry in entries)
                 listing.Add(entry.Source, "/" + entry.Source);
             listing.Complete();
         }
 
         Write(ledger, [.. entries]);
+    }
+
+    /// <summary>Makes the finished ledger of one part of a run, or one that differs from it as told.</summary>
+    public static string Part(string folder, string shard, Func<LedgerSetup, LedgerSetup>? change, params object[] outcomes)
+    {
+        Directory.CreateDirectory(folder);
+        Assert.True(Shard.TryParse(shard, out var part));
+        using var ledger = LedgerFile.Open(folder);
+        Fill(ledger, [], outcomes);
+        var setup = ledger.Setup! with { Shard = part, Finished = true };
+        ledger.Setup = change?.Invoke(setup) ?? setup;
+        return folder;
     }
 
     /// <summary>Writes entries to the end.</summary>
