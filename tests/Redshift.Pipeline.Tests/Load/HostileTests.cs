@@ -1,3 +1,4 @@
+using System.IO.Compression;
 using System.Text;
 using CsCheck;
 using Redshift.Fits;
@@ -27,6 +28,18 @@ public sealed class HostileTests : IDisposable
     [Fact]
     public void Binary_that_is_not_FITS_is_refused() =>
         Assert.Equal("line 1", LoadBench.Refused(_bench.Bytes("fork.fits", [0, 5, 0x16, 7, 0, 2, 0, 0, .. "Mac OS X"u8])).Place);
+
+    [Theory]
+    [InlineData("", "a line of more than 1048576 bytes")]
+    [InlineData("\n", "more than 67108864 bytes")]
+    public void Compressed_text_that_expands_without_end_is_refused(string end, string found)
+    {
+        var piece = Encoding.ASCII.GetBytes("#" + new string('0', 1 << 16) + end);
+        using var target = new MemoryStream();
+        using (var gzip = new GZipStream(target, CompressionLevel.Fastest, leaveOpen: true))
+            for (var written = 0; written < 70 << 20; written += piece.Length) gzip.Write(piece);
+        Assert.Equal(found, LoadBench.Refused(_bench.Damaged(target.ToArray())).Found);
+    }
 
     [Fact]
     public void Header_without_data_is_refused_with_what_was_found()

@@ -116,6 +116,14 @@ public sealed class TextTests : IDisposable
     }
 
     [Fact]
+    public void Line_of_types_is_no_line_of_names_or_units()
+    {
+        var spectrum = LoadBench.One(_bench.Text("|wave|flux|error|\n|double|double|double|\n|nm|mJy|mJy|\n|null|null|null|\n" + Lines(" {0} {1} 0.5"))).Spectra[0];
+        Assert.Equal(50000, spectrum.Wavelength[0], 20.0);
+        Assert.Equal(("erg/s/cm2/Angstrom", true), (spectrum.FluxUnit, spectrum.HasErrors));
+    }
+
+    [Fact]
     public void Masked_pixels_of_a_named_column_are_left_out()
     {
         var spectrum = LoadBench.One(_bench.Text("# wl flux error bpmap\n" + string.Concat(Enumerable.Range(0, LoadBench.Pixels).Select(static i => $"{5000 + i} {10 + i % 7} 0.5 {(i == 3 ? 1 : 0)}\n")))).Spectra[0];

@@ -1,3 +1,4 @@
+using System.Collections.Frozen;
 using System.Globalization;
 
 namespace Redshift.Pipeline.Load.Text;
@@ -7,6 +8,10 @@ internal sealed class LineCollector
 {
     // Words above the numbers beyond which a file is prose.
     private const int MostWordLines = 200;
+
+    // Some dialects state the type of each column in a line of its own.
+    private static readonly FrozenSet<string> ColumnTypes = new[] { "double", "float", "real", "int", "integer", "long", "char", "string", "str", "date", "d", "r", "i", "c", "N", "S" }
+        .ToFrozenSet(StringComparer.Ordinal);
 
     private readonly List<string> _remarks = [];
     private readonly List<List<double>> _columns = [];
@@ -54,6 +59,7 @@ internal sealed class LineCollector
     {
         if (_columns.Count > 0 || IsBinary(line) || !HasWord(line) || ++_wordLines > MostWordLines) throw At(line, "columns of numbers");
         var words = NumberLine.Fields(line);
+        if (words.All(ColumnTypes.Contains)) return;
         if (_names is null) _names = words;
         else (_names, _units) = _units is null ? (_names, words) : (_units, words);
     }

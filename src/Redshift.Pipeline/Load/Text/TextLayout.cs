@@ -22,9 +22,12 @@ internal static class TextLayout
     /// <summary>The columns as arrays.</summary>
     public static IReadOnlyList<NumberArray> Arrays(TextTable table) => [.. table.Columns.Select((values, i) => new HeldArray(values)
     {
-        Place = $"column {(table.Names[i].Length > 0 ? table.Names[i] : (i + 1).ToString(CultureInfo.InvariantCulture))}",
+        Place = $"column {(IsName(table, i) ? table.Names[i] : (i + 1).ToString(CultureInfo.InvariantCulture))}",
         Label = new(table.Names[i], table.Units[i]),
     })];
+
+    private static bool IsName(TextTable table, int column) =>
+        table.Names[column].Length > 0 && table.Names.Count(name => name.Equals(table.Names[column], StringComparison.OrdinalIgnoreCase)) == 1;
 
     private static SpectrumSources? ByName(IReadOnlyList<NumberArray> arrays)
     {

@@ -6,13 +6,17 @@ namespace Redshift.Pipeline.Load.Text;
 /// <summary>Reads columns of numbers from a text file, plain or compressed with gzip.</summary>
 internal static class TextTableReader
 {
+    // A million pixels with some columns; compressed text could otherwise expand without end.
+    private const long MostBytes = 1 << 26;
+
     /// <summary>Reads a file.</summary>
     /// <exception cref="LoadException">A line is not numbers, and the message says which.</exception>
     public static TextTable Read(string path)
     {
         using var file = File.OpenRead(path);
         using var stream = IsGzip(file) ? new GZipStream(file, CompressionMode.Decompress) : (Stream)file;
-        using var reader = new StreamReader(stream, Encoding.UTF8);
+        using var bounded = new BoundedStream(stream, MostBytes);
+        using var reader = new StreamReader(bounded, Encoding.UTF8);
         var lines = new LineCollector();
         while (reader.ReadLine() is { } line) lines.Add(line);
         return lines.ToTable();
