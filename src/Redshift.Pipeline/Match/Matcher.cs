@@ -1,4 +1,5 @@
 using Redshift.Pipeline.Match.Fit;
+using Redshift.Pipeline.Match.Models;
 using Redshift.Pipeline.Match.Posterior;
 using Redshift.Pipeline.Match.Search;
 using Redshift.Pipeline.Normalize;
@@ -21,8 +22,16 @@ internal sealed class Matcher(MatchSettings settings)
     private const int AlwaysClimbed = 2;
     private const int FittedInFull = 6;
 
+    /// <summary>ln evidence of a galaxy behind gas from which the gas may belong to something in front of a quasar.</summary>
+    private const double PlainGas = 15;
+
     /// <summary>Peaks of each kind that are fitted in full whatever the first look says.</summary>
     private const int AlwaysFitted = 3;
+
+    /// <summary>Places of galaxies and of quasars at which all models of the kind are looked at, and those of them that are fitted in full.</summary>
+    private const int VariedPlaces = 4;
+    private const int VariantsInFull = 2;
+
 
     /// <summary>Cells of the exact fits at most.</summary>
     private const int MostFitCells = 12000;
@@ -36,10 +45,11 @@ internal sealed class Matcher(MatchSettings settings)
         var peaks = Search(observation, ModelError.Uniform);
         if (peaks.Count == 0) return null;
         var (error, leaders) = Learn(peaks, runs, cell);
-        if (error.Greatest > SearchAgain) leaders.AddRange(Search(observation, error));
+        if (error.Greatest > SearchAgain) leaders = Distinct(leaders.Concat(Search(observation, error)));
         var pixels = FitPixels.Build(runs, error, Cells.Step);
         var fit = new ModelFit(pixels);
         var refined = Climb(fit, leaders, cell);
+        refined.AddRange(BehindGas(fit, refined, cell));
         var best = refined.MaxBy(r => r.LnEvidence)!;
         fit.LnEvidence(best.Model, best.LnShift);
         var excess = ResidualExcess.Measure(pixels, fit.Curves().Model);
@@ -58,11 +68,11 @@ internal sealed class Matcher(MatchSettings settings)
     {
         var pixels = FitPixels.Build(runs, ModelError.Uniform, Cells.Step);
         var fit = new ModelFit(pixels);
-        var exact = FirstLook(fit, Settle(fit, peaks, cell)).ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) });
+        var exact = WithVariants(fit, InFull(fit, FirstLook(fit, Settle(fit, peaks, cell))));
         var best = exact.MaxBy(p => p.LnEvidence);
         var climbed = Refinement.Climb(fit, best.Model, best.LnShift, 0.5 * cell);
         fit.LnEvidence(climbed.Model, climbed.LnShift);
-        return (ModelError.Measure(pixels, runs, fit.Curves().Model), Leaders(exact));
+        return (ModelError.Measure(pixels, runs, fit, climbed.LnShift), Leaders(exact));
     }
 
     /// <summary>
@@ -71,8 +81,36 @@ internal sealed class Matcher(MatchSettings settings)
     /// </summary>
     private static List<Peak> FirstLook(ModelFit fit, List<Peak> peaks) =>
         [.. peaks.GroupBy(p => p.Model.Kind).SelectMany(g =>
-            g.OrderByDescending(p => fit.LnEvidence(p.Model, p.LnShift, mixed: false)).Take(FittedInFull)
-                .Union(g.OrderByDescending(p => p.LnEvidence).Take(AlwaysFitted)))];
+            Peak.OnePerPlace(g.Select(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift, mixed: false) }), PlaceKmS(g.Key)).Take(FittedInFull)
+                .Concat(g.OrderByDescending(p => p.LnEvidence).Take(AlwaysFitted)).DistinctBy(p => (p.Model, p.LnShift)))];
+
+    /// <summary>Redshifts so near, in km/s, are one place to the choice of a model; a star's place is known, its type is what is looked for.</summary>
+    private static double PlaceKmS(ObjectKind kind) => kind switch
+    {
+        ObjectKind.Star => 0,
+        ObjectKind.Quasar => 2000,
+        _ => 340,
+    };
+
+    private static List<Peak> InFull(ModelFit fit, IEnumerable<Peak> peaks) =>
+        [.. peaks.Select(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) })];
+
+    /// <summary>
+    /// Adds, at the leading places of galaxies and quasars, the kind's other models that a first look prefers: the search knows which place,
+    /// but only roughly which model.
+    /// </summary>
+    private static List<Peak> WithVariants(ModelFit fit, List<Peak> peaks)
+    {
+        var places = Leaders(peaks).Where(p => p.Model.Kind is ObjectKind.Galaxy or ObjectKind.Quasar).GroupBy(p => p.Model.Kind)
+            .SelectMany(g => Peak.OnePerPlace(g, PlaceKmS(g.Key)).Take(VariedPlaces));
+        var variants = places.SelectMany(place => ModelLibrary.Instance.OfKind(place.Model.Kind)
+            .Select(model => place with { Model = model, LnEvidence = fit.LnEvidence(model, place.LnShift, mixed: false) })
+            .OrderByDescending(p => p.LnEvidence).Take(VariantsInFull)).ToList();
+        return Distinct(peaks.Concat(InFull(fit, variants)));
+    }
+
+    /// <summary>The peaks, each model once at a place.</summary>
+    private static List<Peak> Distinct(IEnumerable<Peak> peaks) => [.. peaks.DistinctBy(p => (p.Model, Math.Round(p.LnShift / Cells.Step)))];
 
     private static List<Peak> Leaders(List<Peak> peaks)
     {
@@ -83,8 +121,18 @@ internal sealed class Matcher(MatchSettings settings)
     }
 
     private static List<Refined> Climb(ModelFit fit, List<Peak> peaks, double cell) =>
-        Leaders(FirstLook(fit, Settle(fit, peaks, cell)).ConvertAll(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift) }))
+        Leaders(WithVariants(fit, InFull(fit, FirstLook(fit, Settle(fit, peaks, cell)))))
             .ConvertAll(p => Refinement.Climb(fit, p.Model, p.LnShift, 0.5 * cell));
+
+    /// <summary>The quasars found, seen through the gas that passed for a galaxy of smaller redshift.</summary>
+    private static List<Refined> BehindGas(ModelFit fit, List<Refined> refined, double cell)
+    {
+        var gas = refined.Where(r => r.Model.BehindOwnGas && r.LnEvidence > PlainGas).MaxBy(r => r.LnEvidence);
+        if (gas is null) return [];
+        return refined.FindAll(r => r.Model.Kind == ObjectKind.Quasar && r.LnShift > gas.LnShift)
+            .OrderByDescending(r => r.LnEvidence).Take(AlwaysClimbed)
+            .Select(r => Refinement.Climb(fit, new InterveningGas(gas.LnShift).Before(r.Model), r.LnShift, 0.5 * cell)).ToList();
+    }
 
     /// <summary>Cells of the exact fits: those of the search, or half a resolution element where that is finer and the pixels stay few.</summary>
     private static double FitCell(NormalizedObservation observation)

@@ -19,6 +19,12 @@ internal sealed record FitModel
     /// <summary>Whether light shortward of Lyman alpha passes the intergalactic medium.</summary>
     public bool Forest { get; init; }
 
+    /// <summary>Gas of another galaxy in front, or null.</summary>
+    public InterveningGas? Gas { get; init; }
+
+    /// <summary>Whether the template itself has the lines of gas.</summary>
+    public bool BehindOwnGas { get; init; }
+
     public IReadOnlyList<EmissionGroup> Groups { get; init; } = [];
 
     /// <summary>Greatest ln(1+z) at which such an object can exist: a population is not older than the Universe.</summary>

@@ -10,6 +10,9 @@ namespace Redshift.Pipeline.Match.Fit;
 /// </summary>
 internal sealed class ForestPixels
 {
+    /// <summary>So far redward of Lyman alpha, in ln λ, the line itself (and N V) leaves no clear continuum.</summary>
+    private const double Beside = 0.025;
+
     private readonly FitPixels _pixels;
     private readonly float[] _alpha;
     private readonly float[] _beta;
@@ -107,14 +110,21 @@ internal sealed class ForestPixels
 
     private float Rounded(int p, double lnShift) => (float)Forest.Transmission(_pixels.LnWavelength[p], lnShift, _pixels.SigmaLn[p]);
 
+    /// <summary>The light that a line at or below Lyman alpha is judged against, that redward of it; null for lines beyond.</summary>
+    /// <param name="spectrum">Number of the spectrum.</param>
+    /// <param name="lnRest">ln of the line's rest wavelength in Å.</param>
+    /// <param name="lnShift">ln(1+z) of the object.</param>
+    public double? LevelBeside(int spectrum, double lnRest, double lnShift) =>
+        lnRest < Forest.LnLymanAlpha + Beside ? LevelRedward(spectrum, Forest.LnLymanAlpha + lnShift) : null;
+
     /// <summary>The continuum just redward of Lyman alpha: what the forest is seen against.</summary>
     private double LevelRedward(int spectrum, double edge)
     {
         double sum = 0;
         var count = 0;
-        for (var p = _pixels.Find(spectrum, edge + 0.025); p < _pixels.Starts[^1] && _pixels.LnWavelength[p] < edge + 0.09; p++)
+        for (var p = _pixels.Find(spectrum, edge + Beside); p < _pixels.Starts[^1] && _pixels.LnWavelength[p] < edge + 0.09; p++)
         {
-            if (_pixels.LnWavelength[p] < edge + 0.025) continue;
+            if (_pixels.LnWavelength[p] < edge + Beside) continue;
             sum += _pixels.Continuum[p];
             count++;
         }

@@ -22,8 +22,9 @@ internal sealed class GroupProfiles(FitPixels pixels)
     /// <param name="group">The group.</param>
     /// <param name="lnShift">ln(1+z).</param>
     /// <param name="widthKmS">σ of the group's lines.</param>
+    /// <param name="forest">The forest below Lyman alpha, null where there is none.</param>
     /// <param name="transmission">What the lines shine through, a value a pixel; null for nothing.</param>
-    public void AddColumn(FitColumns columns, EmissionGroup group, double lnShift, double widthKmS, float[]? transmission)
+    public void AddColumn(FitColumns columns, EmissionGroup group, double lnShift, double widthKmS, ForestPixels? forest, float[]? transmission)
     {
         double width = widthKmS / KmSPerLn, level = 0, share = 0;
         _drawn.Clear();
@@ -34,7 +35,7 @@ internal sealed class GroupProfiles(FitPixels pixels)
             {
                 if (!Draw(line, line.LnRest + lnShift, Math.Sqrt(width * width + own * own), s)) continue;
                 var (start, end) = _drawn[^1];
-                level += line.Share * pixels.Continuum[start + (end - start) / 2];
+                level += line.Share * (forest?.LevelBeside(s, line.LnRest, lnShift) ?? pixels.Continuum[start + (end - start) / 2]);
                 share += line.Share;
             }
         }

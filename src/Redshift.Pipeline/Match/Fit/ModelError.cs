@@ -1,3 +1,4 @@
+using Redshift.Pipeline.Match.Models;
 using Redshift.Pipeline.Normalize;
 using Redshift.Pipeline.Numerics;
 
@@ -45,9 +46,11 @@ internal sealed class ModelError
     /// <summary>Solves, block by block, for the share that makes the median squared residual what noise and model error together predict.</summary>
     /// <param name="pixels">The pixels as fitted, in cells of the search grid.</param>
     /// <param name="runs">The same pixels with their noise alone.</param>
-    /// <param name="model">The best model.</param>
-    public static ModelError Measure(FitPixels pixels, IReadOnlyList<PixelRun> runs, float[] model)
+    /// <param name="fit">The fit of the best model.</param>
+    /// <param name="lnShift">ln(1+z) of that fit.</param>
+    public static ModelError Measure(FitPixels pixels, IReadOnlyList<PixelRun> runs, ModelFit fit, double lnShift)
     {
+        var model = fit.Curves().Model;
         var start = runs.Min(r => r.LnWavelength[0]);
         var blocks = Math.Max(1, (int)Math.Ceiling((runs.Max(r => r.LnWavelength[^1]) - start) / Block));
         var excess = Enumerable.Range(0, blocks).Select(_ => new List<double>()).ToArray();
@@ -57,10 +60,12 @@ internal sealed class ModelError
             {
                 if (run.Weight[i] <= 0) continue;
                 var level = Math.Max(Math.Abs(run.Continuum[i]), run.Baseline[i]);
+                // Below the Lyman limit nobody knows what passes: there, all that is left over is model error.
+                var forest = run.LnWavelength[i] > lnShift + Forest.LnLymanLimit ? fit.ForestVariance(at) : 0;
                 var residual = pixels.Flux[at] - model[at];
-                // The median of χ²₁ is 0.455: what is above that share of the noise is model error.
+                // The median of χ²₁ is 0.455: what is above that share of the noise, and of the forest's own scatter, is model error.
                 if (TelluricError.Share(run.LnWavelength[i]) > Least) continue;
-                excess[Math.Min(blocks - 1, (int)((run.LnWavelength[i] - start) / Block))].Add((residual * residual - 0.455 / run.Weight[i]) / (0.455 * level * level));
+                excess[Math.Min(blocks - 1, (int)((run.LnWavelength[i] - start) / Block))].Add((residual * residual - 0.455 * (1 / run.Weight[i] + forest)) / (0.455 * level * level));
             }
 
         return new(start, Array.ConvertAll(excess, e => Math.Clamp(Math.Sqrt(Math.Max(0, Selection.Median([.. e]))), Least, Most)));

@@ -17,6 +17,9 @@ internal sealed class ModelFit
     /// <summary>Prior σ of a change of all lines' depth together: veiling, metallicity.</summary>
     private const double ContrastSpread = 0.3;
 
+    /// <summary>Prior σ of the strength of gas in front, in units of what star-forming galaxies show.</summary>
+    private const double GasSpread = 1;
+
     private readonly FitPixels _pixels;
     private readonly SplineFit _spline;
     private readonly FitColumns _columns;
@@ -65,10 +68,13 @@ internal sealed class ModelFit
         _columns.Clear();
         if (mixed) AddMixtures(model, lnShift);
         foreach (var group in model.Groups)
-            _profiles.AddColumn(_columns, group, lnShift, group.Broad ? model.BroadKmS : model.NarrowKmS, model.Forest && group.Broad ? _transmission : null);
+            _profiles.AddColumn(_columns, group, lnShift, group.Broad ? model.BroadKmS : model.NarrowKmS, model.Forest ? _pixels.Forest : null, model.Forest && group.Broad ? _transmission : null);
         _columns.Project();
         return evidence + _selection.Take() + model.LnPrior;
     }
+
+    /// <summary>Variance that the forest of the last fit adds at a pixel.</summary>
+    public double ForestVariance(int pixel) => _weight[pixel] < _pixels.Weight[pixel] ? 1 / _weight[pixel] - 1 / _pixels.Weight[pixel] : 0;
 
     /// <summary>The model of the last fit, and its smooth part, at the pixels.</summary>
     public (float[] Model, float[] Smooth) Curves()
@@ -97,19 +103,36 @@ internal sealed class ModelFit
         Kernels.Multiply(_template, _transmission, _template);
     }
 
-    /// <summary>Columns smooth × (partner − template), and smooth × (template − 1) for the contrast, with the smooth part just found.</summary>
+    /// <summary>Columns of what may be mixed in, with the smooth part just found.</summary>
     private void AddMixtures(FitModel model, double lnShift)
     {
-        if (model.Template is null) return;
+        if (model.Template is null && model.Gas is null) return;
         _spline.Smooth(_spline.Right, _work);
+        if (model.Template is not null) AddPartners(model, lnShift);
+        if (model.Gas is not null) AddGas(model.Gas);
+    }
+
+    /// <summary>Columns smooth × (partner − template), and smooth × (template − 1) for the contrast, all through the forest.</summary>
+    private void AddPartners(FitModel model, double lnShift)
+    {
         foreach (var partner in model.Partners)
         {
             var values = AddMixture(PartnerSpread);
             _renderer.Render(partner, lnShift, values);
+            if (model.Forest) Kernels.Multiply(values, _transmission, values);
             Kernels.MultiplyDifference(_work, values, _template, values);
         }
 
-        Kernels.MultiplyDifference(_work, _template, _ones, AddMixture(ContrastSpread));
+        Kernels.MultiplyDifference(_work, _template, model.Forest ? _transmission : _ones, AddMixture(ContrastSpread));
+    }
+
+    /// <summary>Column smooth × template × (what the gas lets pass − 1).</summary>
+    private void AddGas(InterveningGas gas)
+    {
+        var values = AddMixture(GasSpread);
+        _renderer.Render(InterveningGas.Transmission, gas.LnShift, values);
+        Kernels.MultiplyDifference(_work, values, _ones, values);
+        Kernels.Multiply(values, _template, values);
     }
 
     private Span<float> AddMixture(double spread)

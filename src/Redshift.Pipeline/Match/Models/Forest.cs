@@ -12,12 +12,17 @@ internal static class Forest
     /// <summary>ln of the wavelength of the Lyman limit in Å.</summary>
     public const double LnLymanLimit = 6.8153695;
 
+    /// <summary>ln 4.5, where the published power law is anchored, and ln(1+z) from which the forest thickens faster.</summary>
+    private const double LnPivot = 1.5040774;
+    private const double LnSteeper = 1.77;
+
     /// <summary>Scatter of a two-state forest, as a share; see <see cref="Scatter"/>.</summary>
     public const double ScatterShare = 0.45;
 
     /// <summary>
-    /// Transmission at an observed wavelength: τ = 0.00247 (1+z)^3.9 and more steeply beyond z = 5.5, z being that of the absorbing gas
-    /// (Lyα optical depths of Becker et al. 2013, MNRAS 430, 2067, and Bosman et al. 2018; rounded, from memory).
+    /// Transmission at an observed wavelength, exp(−τ): τ = 0.751 ((1+z)/4.5)^2.90 − 0.132 at the redshift z of the absorbing gas
+    /// (Becker et al. 2013, MNRAS 430, 2067, for z = 2.2 to 4.9), and more steeply beyond, so that τ = 3 at 5.5 and 4.8 at 6
+    /// (mean fluxes of Bosman et al. 2022, MNRAS 514, 55). All numbers from memory, the second pair rounded.
     /// Lyman beta adds a third of it; below the Lyman limit nearly nothing passes at z &gt; 3.
     /// </summary>
     /// <param name="lnObserved">ln of the observed vacuum wavelength in Å.</param>
@@ -64,6 +69,9 @@ internal static class Forest
     /// </summary>
     public static double Scatter(double transmission) => ScatterShare * Math.Sqrt(Math.Max(0, transmission * (1 - transmission)));
 
-    private static double OpticalDepth(double lnAbsorber) =>
-        lnAbsorber <= 0 ? 0 : 0.00247 * Math.Exp(3.9 * lnAbsorber) * (lnAbsorber > 1.87 ? Math.Exp(7 * (lnAbsorber - 1.87)) : 1);
+    private static double OpticalDepth(double lnAbsorber)
+    {
+        var published = Math.Max(0, 0.751 * Math.Exp(2.90 * (lnAbsorber - LnPivot)) - 0.132);
+        return lnAbsorber > LnSteeper ? published * Math.Exp(3.5 * (lnAbsorber - LnSteeper)) : published;
+    }
 }

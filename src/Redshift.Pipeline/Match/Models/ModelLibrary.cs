@@ -43,6 +43,16 @@ internal sealed class ModelLibrary
 
     public IReadOnlyList<FitModel> Nebulae { get; }
 
+    /// <summary>The models of one kind.</summary>
+    public IReadOnlyList<FitModel> OfKind(ObjectKind kind) => kind switch
+    {
+        ObjectKind.Star => Stars,
+        ObjectKind.Galaxy => Galaxies,
+        ObjectKind.Quasar => Quasars,
+        ObjectKind.Nebula => Nebulae,
+        _ => Comets,
+    };
+
     /// <summary>σ of broad lines, km/s.</summary>
     public static IReadOnlyList<double> Widths { get; } = [800, 1700, 3500];
 
@@ -85,7 +95,7 @@ internal sealed class ModelLibrary
         string[] plain = ["old", "1.5 Gyr", "0.03 Gyr"], gas = ["0.005 Gyr behind thin gas", "0.03 Gyr behind neutral gas", "0.6 Gyr behind gas"];
         return galaxies.ConvertAll(g => g with
         {
-            Partners = [.. galaxies.Where(p => (g.Name.Contains("gas", StringComparison.Ordinal) ? gas : plain).Contains(p.Name) && p != g).Select(p => p.Template!)],
+            Partners = [.. galaxies.Where(p => (g.BehindOwnGas ? gas : plain).Contains(p.Name) && p != g).Select(p => p.Template!)],
         });
     }
 
@@ -155,6 +165,7 @@ internal sealed class ModelLibrary
         Forest = true,
         Groups = GalaxyLines.All,
         GreatestLnShift = Math.Log(1 + greatestZ),
+        BehindOwnGas = template.Name.Contains("gas", StringComparison.Ordinal),
     };
 
     private static FitModel Quasar(Template? template, double broad, (string Name, IReadOnlyList<EmissionGroup> Groups) wind) => new()

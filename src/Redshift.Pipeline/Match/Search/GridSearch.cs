@@ -12,6 +12,9 @@ internal sealed class GridSearch
     /// <summary>Peaks nearer than this many cells are one.</summary>
     private const int Separation = 5;
 
+    /// <summary>Peaks of models with lines of different widths nearer than this, in km/s, are one.</summary>
+    private const double BroadSeparationKmS = 2000;
+
     private const double KmSPerLn = Velocity.SpeedOfLightKmS;
 
     /// <summary>Stars beyond this velocity are not bound to the Galaxy.</summary>
@@ -82,11 +85,11 @@ internal sealed class GridSearch
                 var total = new float[_shifts / stride];
                 for (var s = 0; s < total.Length; s++) total[s] = _populations.ForestStep(_firstShift + s * stride);
                 foreach (var group in model.Groups.Where(g => g.Broad)) broad.Add(group, _firstShift, total);
-                peaks.AddRange(Highest(total, _firstShift, stride, 8, _ => model));
+                peaks.AddRange(Highest(total, _firstShift, stride, 14, _ => model));
             }
         }
 
-        return [.. peaks.OrderByDescending(p => p.LnEvidence).Take(14)];
+        return [.. peaks.GroupBy(p => p.Model.Groups).SelectMany(wind => Peak.OnePerPlace(wind, BroadSeparationKmS).Take(12))];
     }
 
     private List<Peak> Nebulae()

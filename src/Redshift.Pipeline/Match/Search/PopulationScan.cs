@@ -8,9 +8,12 @@ namespace Redshift.Pipeline.Match.Search;
 /// </summary>
 internal sealed class PopulationScan
 {
+    /// <summary>Prior σ of the forest's strength: its depth differs between sightlines, and within a range of redshifts that shares one depth.</summary>
+    private const double ForestSpread = 0.15;
+
     private static readonly Lazy<IReadOnlyList<TemplateRange>> Ranges = new(() => TemplateRange.Split(
         [.. ModelLibrary.Instance.Galaxies.Select((m, i) => new SearchedTemplate(m.Template!, i, Strength.Spread, m.GreatestLnShift))],
-        new(ModelLibrary.Flat, -1, Strength.Spread, double.PositiveInfinity)));
+        new(ModelLibrary.Flat, -1, ForestSpread, double.PositiveInfinity)));
 
     private readonly int _first;
     private readonly float[] _best;
