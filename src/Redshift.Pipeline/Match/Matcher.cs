@@ -25,6 +25,9 @@ internal sealed class Matcher(MatchSettings settings)
     /// <summary>ln evidence of a galaxy behind gas from which the gas may belong to something in front of a quasar.</summary>
     private const double PlainGas = 15;
 
+    /// <summary>So much nearer in ln(1+z) than the quasar it must be: a galaxy's own gas is no gas in front of a quasar.</summary>
+    private const double WellInFront = 0.05;
+
     /// <summary>Peaks of each kind that are fitted in full whatever the first look says.</summary>
     private const int AlwaysFitted = 3;
 
@@ -54,7 +57,7 @@ internal sealed class Matcher(MatchSettings settings)
         fit.LnEvidence(best.Model, best.LnShift);
         var excess = ResidualExcess.Measure(pixels, fit.Curves().Model);
         var hypotheses = refined.Select(r => r.Soften(excess))
-            .Select(r => new Hypothesis(r, r.LnVolume + RedshiftPrior.LnDensity(r.Model.Kind, r.LnShift, observation.Resolution, settings)))
+            .Select(r => new Hypothesis(r, r.LnVolume + RedshiftPrior.LnDensity(r.Model.Kind, r.LnShift, observation.Resolution, observation.SnrPixel, settings)))
             .Where(h => double.IsFinite(h.LnWeight)).OrderByDescending(h => h.LnWeight).ToList();
         if (hypotheses.Count == 0) return null;
         return new(PosteriorSum.Decide(hypotheses, observation.Resolution), hypotheses, error, excess);
@@ -122,14 +125,22 @@ internal sealed class Matcher(MatchSettings settings)
 
     private static List<Refined> Climb(ModelFit fit, List<Peak> peaks, double cell) =>
         Leaders(WithVariants(fit, InFull(fit, FirstLook(fit, Settle(fit, peaks, cell)))))
-            .ConvertAll(p => Refinement.Climb(fit, p.Model, p.LnShift, 0.5 * cell));
+            .ConvertAll(p => Refinement.Climb(fit, p.Model, p.LnShift, 0.5 * cell))
+            .Aggregate(new List<Refined>(), WithNewTop);
+
+    /// <summary>Two climbs of one model to the same top are one.</summary>
+    private static List<Refined> WithNewTop(List<Refined> tops, Refined next)
+    {
+        if (!tops.Exists(t => t.Model == next.Model && Math.Abs(t.LnShift - next.LnShift) < t.Sigma)) tops.Add(next);
+        return tops;
+    }
 
     /// <summary>The quasars found, seen through the gas that passed for a galaxy of smaller redshift.</summary>
     private static List<Refined> BehindGas(ModelFit fit, List<Refined> refined, double cell)
     {
         var gas = refined.Where(r => r.Model.BehindOwnGas && r.LnEvidence > PlainGas).MaxBy(r => r.LnEvidence);
         if (gas is null) return [];
-        return refined.FindAll(r => r.Model.Kind == ObjectKind.Quasar && r.LnShift > gas.LnShift)
+        return refined.FindAll(r => r.Model.Kind == ObjectKind.Quasar && r.LnShift > gas.LnShift + WellInFront)
             .OrderByDescending(r => r.LnEvidence).Take(AlwaysClimbed)
             .Select(r => Refinement.Climb(fit, new InterveningGas(gas.LnShift).Before(r.Model), r.LnShift, 0.5 * cell)).ToList();
     }

@@ -13,7 +13,7 @@ internal sealed record UsablePixels(
     {
         var kept = new List<int>(spectrum.Count);
         for (var i = 0; i < spectrum.Count; i++)
-            if (spectrum.InverseVariance[i] > 0 && double.IsFinite(spectrum.Flux[i]) && spectrum.Wavelength[i] > 0) kept.Add(i);
+            if (spectrum.InverseVariance[i] > 0 && double.IsFinite(spectrum.Flux[i]) && spectrum.Wavelength[i] > 0 && !Filled(spectrum, i)) kept.Add(i);
         var index = kept.ToArray();
         return new(
             spectrum,
@@ -22,6 +22,13 @@ internal sealed record UsablePixels(
             Array.ConvertAll(index, i => spectrum.Flux[i]),
             Array.ConvertAll(index, i => spectrum.InverseVariance[i]),
             spectrum.FwhmKmS is { } fwhm ? Array.ConvertAll(index, i => fwhm[i]) : null);
+    }
+
+    /// <summary>Light plus noise is never exactly zero twice running: such pixels were filled in for missing ones.</summary>
+    private static bool Filled(Spectrum spectrum, int i)
+    {
+        bool Zero(int j) => j >= 0 && j < spectrum.Count && spectrum.Flux[j] == 0;
+        return Zero(i) && (Zero(i - 1) || Zero(i + 1));
     }
 
     /// <summary>Weighted means of groups of neighbouring pixels.</summary>

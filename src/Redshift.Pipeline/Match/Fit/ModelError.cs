@@ -17,21 +17,25 @@ internal sealed class ModelError
     private const double Most = 0.5;
     private const double Block = 0.1;
 
+    /// <summary>The atmosphere may leave so many times what is left after an ordinary correction: nothing was corrected.</summary>
+    private const double MostTelluric = 5;
+
     private readonly double _start;
     private readonly double[] _shares;
+    private readonly double _telluric;
 
-    private ModelError(double start, double[] shares) => (_start, _shares) = (start, shares);
+    private ModelError(double start, double[] shares, double telluric) => (_start, _shares, _telluric) = (start, shares, telluric);
 
     /// <summary>The stated least value everywhere.</summary>
-    public static ModelError Uniform { get; } = new(0, [Least]);
+    public static ModelError Uniform { get; } = new(0, [Least], 1);
 
-    /// <summary>The greatest share anywhere.</summary>
+    /// <summary>The greatest share anywhere, the atmosphere aside.</summary>
     public double Greatest => _shares.Max();
 
     /// <summary>Share of the continuum at a wavelength.</summary>
     public double Share(double lnWavelength)
     {
-        var telluric = TelluricError.Share(lnWavelength);
+        var telluric = _telluric * TelluricError.Share(lnWavelength);
         var own = Own(lnWavelength);
         return telluric > 0 ? Math.Sqrt(own * own + telluric * telluric) : own;
     }
@@ -54,20 +58,25 @@ internal sealed class ModelError
         var start = runs.Min(r => r.LnWavelength[0]);
         var blocks = Math.Max(1, (int)Math.Ceiling((runs.Max(r => r.LnWavelength[^1]) - start) / Block));
         var excess = Enumerable.Range(0, blocks).Select(_ => new List<double>()).ToArray();
+        var telluric = new List<double>();
         var at = 0;
         foreach (var run in runs)
             for (var i = 0; i < run.Flux.Length; i++, at++)
             {
                 if (run.Weight[i] <= 0) continue;
                 var level = Math.Max(Math.Abs(run.Continuum[i]), run.Baseline[i]);
-                // Below the Lyman limit nobody knows what passes: there, all that is left over is model error.
-                var forest = run.LnWavelength[i] > lnShift + Forest.LnLymanLimit ? fit.ForestVariance(at) : 0;
+                var forest = Forest.IsDark(run.LnWavelength[i], lnShift) ? fit.ForestVariance(at) : 0;
                 var residual = pixels.Flux[at] - model[at];
                 // The median of χ²₁ is 0.455: what is above that share of the noise, and of the forest's own scatter, is model error.
-                if (TelluricError.Share(run.LnWavelength[i]) > Least) continue;
-                excess[Math.Min(blocks - 1, (int)((run.LnWavelength[i] - start) / Block))].Add((residual * residual - 0.455 * (1 / run.Weight[i] + forest)) / (0.455 * level * level));
+                var square = (residual * residual - 0.455 * (1 / run.Weight[i] + forest)) / (0.455 * level * level);
+                var atmosphere = TelluricError.Share(run.LnWavelength[i]);
+                if (atmosphere > Least) telluric.Add(square / (atmosphere * atmosphere));
+                else excess[Math.Min(blocks - 1, (int)((run.LnWavelength[i] - start) / Block))].Add(square);
             }
 
-        return new(start, Array.ConvertAll(excess, e => Math.Clamp(Math.Sqrt(Math.Max(0, Selection.Median([.. e]))), Least, Most)));
+        return new(start, Array.ConvertAll(excess, e => Root(e, Least, Most)), Root(telluric, 1, MostTelluric));
     }
+
+    private static double Root(List<double> squares, double least, double most) =>
+        Math.Clamp(Math.Sqrt(Math.Max(0, Selection.Median([.. squares]))), least, most);
 }

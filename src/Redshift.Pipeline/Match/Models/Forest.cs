@@ -46,6 +46,15 @@ internal static class Forest
     /// <summary>What is left below the Lyman limit of an object.</summary>
     public static double LimitTransmission(double lnShift) => Math.Exp(-Math.Max(0, 3 * (Math.Exp(lnShift) - 1.8)));
 
+    /// <summary>
+    /// Whether the forest is so thick that only a forest can look like it: elsewhere, and below the Lyman limit where nobody knows what passes,
+    /// scatter may as well be the lines of a star taken for a quasar.
+    /// </summary>
+    /// <param name="lnObserved">ln of the observed vacuum wavelength in Å.</param>
+    /// <param name="lnShift">ln(1+z) of the object.</param>
+    public static bool IsDark(double lnObserved, double lnShift) =>
+        lnObserved - lnShift > LnLymanLimit && Transmission(lnObserved, lnShift) < 0.5;
+
     /// <summary>The same as an instrument sees it, the step at Lyman alpha rounded by the line spread.</summary>
     /// <param name="lnObserved">ln of the observed vacuum wavelength in Å.</param>
     /// <param name="lnShift">ln(1+z) of the object.</param>

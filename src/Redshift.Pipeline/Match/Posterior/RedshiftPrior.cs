@@ -19,12 +19,17 @@ internal static class RedshiftPrior
     private const double KmSPerLn = Velocity.SpeedOfLightKmS;
 
     /// <summary>ln of the prior density in ln(1+z) of a kind at a redshift, weight of the kind included.</summary>
-    public static double LnDensity(ObjectKind kind, double lnShift, double resolution, MatchSettings settings) => kind switch
+    /// <param name="kind">The kind.</param>
+    /// <param name="lnShift">ln(1+z).</param>
+    /// <param name="resolution">Resolving power λ/FWHM.</param>
+    /// <param name="snr">Signal to noise of a pixel.</param>
+    /// <param name="settings">Shares of the kinds, and what the user expects.</param>
+    public static double LnDensity(ObjectKind kind, double lnShift, double resolution, double snr, MatchSettings settings) => kind switch
     {
         ObjectKind.Star => Math.Log(settings.PriorStar) + Velocities(lnShift * KmSPerLn, 60, 200),
         ObjectKind.Nebula => Math.Log(settings.PriorNebula) + Velocities(lnShift * KmSPerLn, 40, 120),
-        ObjectKind.Galaxy => Math.Log(settings.PriorGalaxy) + Flat(lnShift, 1.2) + Distant(lnShift, settings) + Faint(resolution),
-        ObjectKind.Quasar => Math.Log(settings.PriorQuasar) + Flat(lnShift, 0.4) + Distant(lnShift, settings) + Faint(resolution),
+        ObjectKind.Galaxy => Math.Log(settings.PriorGalaxy) + Flat(lnShift, 1.2) + Distant(lnShift, settings) + Faint(resolution, snr),
+        ObjectKind.Quasar => Math.Log(settings.PriorQuasar) + Flat(lnShift, 0.4) + Distant(lnShift, settings) + Faint(resolution, snr),
         _ => Math.Log(CometShare) + Velocities(lnShift * KmSPerLn, 40, 120),
     };
 
@@ -44,10 +49,15 @@ internal static class RedshiftPrior
     }
 
     /// <summary>
-    /// High resolving power spreads the light thin and is spent on bright objects, which are stars: the share of others is taken
-    /// to fall with the square of it (common practice).
+    /// High resolving power spreads the light thin and is spent on bright objects, which are stars. The share of others falls faster the higher
+    /// it is, and the plainer the light is seen: a faint object may well be a galaxy on a large telescope (common practice; the numbers are rough,
+    /// and small against the evidence of a real galaxy's lines).
     /// </summary>
-    private static double Faint(double resolution) => Math.Min(0, 2 * Math.Log(OrdinaryResolution / resolution));
+    private static double Faint(double resolution, double snr)
+    {
+        var excess = Math.Max(0, Math.Log(resolution / OrdinaryResolution));
+        return -12 * excess * excess * Math.Min(1, snr / 10);
+    }
 
     private static double Normal(double x, double sigma) => Math.Exp(-0.5 * x * x / (sigma * sigma)) / (sigma * 2.5066282746310002);
 
