@@ -36,6 +36,7 @@ internal static class CommandLine
         var root = new RootCommand("From raw spectra in FITS to a catalogue of redshifts and velocities, with reasons.")
         {
             RunCommand.Build(),
+            WatchCommand.Build(),
             ExplainCommand.Build(),
             LinesCommand.Build(),
             ExportCommand.Build(),

@@ -20,8 +20,8 @@ internal sealed class RunCommand
         Required = true,
     };
 
-    private readonly Option<int?> _jobs = Count("--jobs", "Number of spectra measured at the same time; as many as there are processors unless given", 1);
-    private readonly Option<int?> _maxRejects = Count("--max-rejects", "End with status 4 where more than N spectra or files cannot be used", 0);
+    private readonly Option<int?> _jobs = JobsOption.Create();
+    private readonly Option<int?> _maxRejects = WholeNumber.Option("--max-rejects", "End with status 4 where more than N spectra or files cannot be used", 0);
     private readonly Option<bool> _plots = new("--plots") { Description = "Draw every spectrum with its answer into the folder plots" };
 
     private readonly Option<bool> _again = new("--again") { Description = "Measure everything again, also what an earlier run into the same folder did" };
@@ -65,7 +65,7 @@ internal sealed class RunCommand
         await Task.Yield();
         var settings = _shared.Settings(parsed);
         var files = InputFiles.Find(_paths.Read(parsed), parsed.GetRequiredValue(_out));
-        var jobs = parsed.GetValue(_jobs) ?? Workers.Available(Environment.GetEnvironmentVariable);
+        var jobs = JobsOption.Read(_jobs, parsed);
         using var session = new Session(parsed.GetRequiredValue(_out), settings, jobs, parsed.GetValue(_plots), parsed.GetValue(_shard));
         var measured = await session.MeasureAsync(files, parsed.GetValue(_again), parsed.GetValue(_verify), token).ConfigureAwait(false);
         var tally = Tally.Of(session.Ledger);
@@ -82,11 +82,4 @@ internal sealed class RunCommand
         result.AddError($"'{text}': expected a part and the number of parts, such as 3/7");
         return null;
     }
-
-    private static Option<int?> Count(string name, string description, int least) => new(name)
-    {
-        Description = description,
-        HelpName = "N",
-        CustomParser = result => WholeNumber.Parse(result, least),
-    };
 }

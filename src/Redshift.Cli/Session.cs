@@ -60,7 +60,7 @@ internal sealed class Session : IDisposable
         try
         {
             await new RecordedRun(_batch, Ledger, progress.Update).RunAsync(plan.Files, token).ConfigureAwait(false);
-            CatalogueFiles.Write(Ledger, _folder.Path, token);
+            WriteTables(token);
             Ledger.Setup = Ledger.Setup! with { Finished = true };
             return progress.Measured;
         }
@@ -70,6 +70,10 @@ internal sealed class Session : IDisposable
             throw;
         }
     }
+
+    /// <summary>Writes the tables from the ledger.</summary>
+    /// <exception cref="OperationCanceledException">The token ended the writing.</exception>
+    public void WriteTables(CancellationToken token) => CatalogueFiles.Write(Ledger, _folder.Path, token);
 
     /// <inheritdoc/>
     public void Dispose()

@@ -1,3 +1,4 @@
+using System.CommandLine;
 using System.CommandLine.Parsing;
 using System.Globalization;
 
@@ -6,6 +7,14 @@ namespace Redshift.Cli;
 /// <summary>Option values that count something.</summary>
 internal static class WholeNumber
 {
+    /// <summary>Makes an option.</summary>
+    public static Option<int?> Option(string name, string description, int least) => new(name)
+    {
+        Description = description,
+        HelpName = "N",
+        CustomParser = result => Parse(result, least),
+    };
+
     /// <summary>A whole number of at least <paramref name="least"/>; otherwise an error on the option.</summary>
     public static int? Parse(ArgumentResult result, int least)
     {

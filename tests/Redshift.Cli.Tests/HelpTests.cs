@@ -11,6 +11,7 @@ public sealed class HelpTests
     [InlineData("explain")]
     [InlineData("lines")]
     [InlineData("merge")]
+    [InlineData("watch")]
     [InlineData("export")]
     [InlineData("compare")]
     public void Help_is_as_approved(params string[] command)
