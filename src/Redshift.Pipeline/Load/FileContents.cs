@@ -39,14 +39,19 @@ internal static class FileContents
 
     private static ReadingNote Of(TableColumn column)
     {
-        var repeat = column.IsVariableLength ? "lists of " : column.Repeat == 1 ? "" : string.Create(CultureInfo.InvariantCulture, $"{column.Repeat} ");
-        return new(TableUnits.PlaceOf(column), $"{repeat}{column.Type.ToString().ToLowerInvariant()}", Meaning(TableUnits.LabelOf(column)));
+        var type = column.Type.ToString().ToLowerInvariant();
+        var cell = column.IsVariableLength ? $"lists of {type}"
+            : column.Repeat == 1 || column.IsText ? type
+            : string.Create(CultureInfo.InvariantCulture, $"{column.Repeat} of {type}");
+        return new(TableUnits.PlaceOf(column), cell, Meaning(TableUnits.LabelOf(column)));
     }
+
+    private static string WordOf(Role role) => role == Role.InverseVariance ? "inverse variance" : role.ToString().ToLowerInvariant();
 
     private static string Meaning(Label label)
     {
         var guess = RoleGuesser.Of(label);
-        var role = guess.Role == Role.Other ? "" : $"looks like {guess.Role.ToString().ToLowerInvariant()} by {guess.Why}";
+        var role = guess.Role == Role.Other ? "" : $"looks like {WordOf(guess.Role)} by {guess.Why}";
         return label.Unit.Length == 0 ? role : $"{role}, in {label.Unit}".TrimStart(',', ' ');
     }
 }

@@ -336,6 +336,19 @@ public sealed class TableTests : IDisposable
     }
 
     [Fact]
+    public void Arms_side_by_side_in_one_table_are_spectra_of_one_observation()
+    {
+        var observation = _bench.One(static writer => writer.WriteTable("", LoadBench.Pixels,
+        [
+            ColumnDefinition.Doubles("WAVE_B", Wavelengths), ColumnDefinition.Doubles("FLUX_B", LoadBench.Flux()), ColumnDefinition.Doubles("IVAR_B", LoadBench.Constant(4)),
+            ColumnDefinition.Doubles("WAVE_R", LoadBench.Linear(7000, 10)), ColumnDefinition.Doubles("FLUX_R", LoadBench.Flux(level: 20)), ColumnDefinition.Doubles("IVAR_R", LoadBench.Constant(9)),
+        ]));
+        Assert.Equal(["B", "R"], observation.Spectra.Select(static spectrum => spectrum.Label));
+        Assert.Equal((7000, 9), (observation.Spectra[1].Wavelength[0], observation.Spectra[1].InverseVariance[0]));
+        Assert.Equal(LoadBench.Flux(level: 20), observation.Spectra[1].Flux);
+    }
+
+    [Fact]
     public void Logical_column_masks()
     {
         var spectrum = _bench.One(static writer => writer.WriteTable("", LoadBench.Pixels,

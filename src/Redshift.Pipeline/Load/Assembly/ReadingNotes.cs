@@ -13,7 +13,7 @@ internal static class ReadingNotes
         var spectrum = layout.Spectra[0];
         yield return new("wavelength", spectrum.Wavelength.Place, spectrum.Wavelength.Why);
         if (spectrum.Wavelength.Unit is { } unit)
-            yield return new("wavelength_unit", unit, spectrum.Wavelength.IsUnitAssumed ? "assumed" : "stated");
+            yield return new("wavelength_unit", unit, spectrum.Wavelength.IsUnitAssumed ? "assumed" : "");
         yield return new("flux", spectrum.Flux.Place, Reason(spectrum.Flux));
         if (spectrum.Noise is { } noise) yield return new(NameOf(noise.Role), noise.Values.Place, Reason(noise.Values));
         else yield return new("error", "none", "nothing in the file is one");

@@ -22,11 +22,18 @@ internal sealed class RoleChoice
 
     /// <summary>The array of a role that is closest to its plain form, or null.</summary>
     /// <exception cref="LoadException">Two are equally close.</exception>
-    public NumberArray? Single(Role role)
+    public NumberArray? Single(Role role) => Closest(role) switch
     {
-        var ordered = _candidates.Where(candidate => candidate.Guess.Role == role).OrderBy(static candidate => candidate.Guess.Rank).ToList();
-        if (ordered.Count > 1 && ordered[0].Guess.Rank == ordered[1].Guess.Rank) throw Ambiguous(role, ordered);
-        return ordered.Count == 0 ? null : ordered[0].Array;
+        [] => null,
+        [var only] => only,
+        var several => throw Ambiguous(role, several),
+    };
+
+    /// <summary>The arrays of a role that are equally close to its plain form.</summary>
+    public IReadOnlyList<NumberArray> Closest(Role role)
+    {
+        var candidates = _candidates.Where(candidate => candidate.Guess.Role == role).ToList();
+        return [.. candidates.Where(candidate => candidate.Guess.Rank == candidates.Min(static other => other.Guess.Rank)).Select(static candidate => candidate.Array)];
     }
 
     /// <summary>The array of a role that belongs to another array: the one whose name differs least from it.</summary>
@@ -65,6 +72,16 @@ internal sealed class RoleChoice
     public MaskSource? MaskOf(NumberArray flux) =>
         Belonging(Role.Mask, flux) is { } mask && mask.Length == flux.Length ? new(mask) : null;
 
+    /// <summary>A flux with all that belongs to it.</summary>
+    public SpectrumSources SpectrumOf(NumberArray flux, WavelengthSource wavelength) => new()
+    {
+        Wavelength = wavelength,
+        Flux = flux,
+        Noise = NoiseOf(flux),
+        Mask = MaskOf(flux),
+        Width = WidthOf(flux),
+    };
+
     /// <summary>Names of the arrays that have a role but do not fill it.</summary>
     /// <param name="usedPlaces">Places of those that do.</param>
     public IEnumerable<string> Unused(IReadOnlyCollection<string> usedPlaces) => _candidates
@@ -91,10 +108,9 @@ internal sealed class RoleChoice
         return 2 * own.Count + otherFlux;
     }
 
-    private LoadException Ambiguous(Role role, List<(NumberArray Array, RoleGuess Guess)> ordered)
+    private LoadException Ambiguous(Role role, IReadOnlyList<NumberArray> equal)
     {
-        var equal = ordered.Where(candidate => candidate.Guess.Rank == ordered[0].Guess.Rank).Select(static candidate => candidate.Array.Label.Name);
-        var found = $"several candidates for the {role.ToString().ToLowerInvariant()}: {string.Join(", ", equal)}";
+        var found = $"several candidates for the {role.ToString().ToLowerInvariant()}: {string.Join(", ", equal.Select(static array => array.Label.Name))}";
         return new(_place, found, "one, or a [[load]] rule that names it");
     }
 }

@@ -47,7 +47,7 @@ internal static partial class MediumFinder
         if (shortest > InfraredBegins) return (WavelengthMedium.Vacuum, "assumed: it lies in the infrared");
         if (isLogarithmic) return (WavelengthMedium.Vacuum, "assumed: the axis is logarithmic");
         return listsWavelengths
-            ? (WavelengthMedium.Vacuum, "assumed: wavelengths are listed in a binary table")
+            ? (WavelengthMedium.Vacuum, "assumed: wavelengths are listed value by value")
             : (WavelengthMedium.Air, "assumed: a plain axis or text, as slit spectrographs on the ground give it");
     }
 

@@ -95,20 +95,23 @@ internal static class TableUnits
     {
         if (ColumnsByPlace.AreNameless(arrays)) return new([ColumnsByPlace.Read(arrays)], arrays[1].Rows) { ListsWavelengths = true };
         var roles = new RoleChoice(arrays, Name(table));
+        if (ColumnArms.Read(roles) is { } arms) return WithNotes(new(arms, arms[0].Flux.Rows) { Targets = TargetsOf(table, arms[0].Flux, file) }, roles);
         var flux = roles.Single(Role.Flux)!;
         var listed = roles.Has(Role.Wavelength) ? WavelengthOf(roles, flux) : null;
         WavelengthSource wavelength = listed is not null
             ? new ArrayWavelengths(listed)
             : (WavelengthSource?)Steps(table) ?? Axis(table, flux.Length, file)!;
-        var sources = new SpectrumSources
+        return WithNotes(Arrange(table, roles.SpectrumOf(flux, wavelength), listed, file), roles);
+    }
+
+    private static UnitContent WithNotes(UnitContent content, RoleChoice roles)
+    {
+        var unused = string.Join(", ", roles.Unused([.. content.Spectra.SelectMany(static spectrum => spectrum.Places)]));
+        return content with
         {
-            Wavelength = wavelength,
-            Flux = flux,
-            Noise = roles.NoiseOf(flux),
-            Mask = roles.MaskOf(flux),
-            Width = roles.WidthOf(flux),
+            ListsWavelengths = true,
+            Notes = unused.Length == 0 ? [] : [new("left aside", unused, "other forms of the same, or not needed")],
         };
-        return Arrange(table, sources, listed, file) with { ListsWavelengths = true, Notes = Notes(roles, sources) };
     }
 
     // Where several columns give wavelengths, the flux's own qualifiers decide before the plainest name does.
@@ -119,11 +122,14 @@ internal static class TableUnits
     {
         var rows = sources.Flux.Rows;
         if (rows > 1 && OrderColumn(table, rows) is { } order) return new(Orders(sources, order), 1);
-        var targets = sources.Flux is CellArray ? TargetTable.For(table, file, rows) : null;
+        var targets = TargetsOf(table, sources.Flux, file);
         return targets is null && rows > 1 && wavelengths is not null && OrderRanges.AreOrders(wavelengths)
             ? new(sources.Numbered(), 1)
             : new([sources], rows) { Targets = targets };
     }
+
+    private static TargetTable? TargetsOf(TableHdu table, NumberArray flux, FitsFile file) =>
+        flux is CellArray ? TargetTable.For(table, file, flux.Rows) : null;
 
     private static TableColumn? OrderColumn(TableHdu table, int rows)
     {
@@ -156,10 +162,4 @@ internal static class TableUnits
 
     private static AxisWavelengths? Axis(TableHdu table, int length, FitsFile file) =>
         AxisReader.Read(new HeaderScope([table.Header, file.Hdus[0].Header]), 1, length, file) is { } axis ? new(axis, table.Index) : null;
-
-    private static IReadOnlyList<ReadingNote> Notes(RoleChoice roles, SpectrumSources sources)
-    {
-        var unused = string.Join(", ", roles.Unused([.. sources.Places]));
-        return unused.Length == 0 ? [] : [new("left aside", unused, "other forms of the same, or not needed")];
-    }
 }

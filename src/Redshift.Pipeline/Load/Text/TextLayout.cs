@@ -33,15 +33,7 @@ internal static class TextLayout
     {
         var roles = new RoleChoice(arrays, "text");
         if (!roles.Has(Role.Wavelength) || !roles.Has(Role.Flux)) return null;
-        var flux = roles.Single(Role.Flux)!;
-        return new()
-        {
-            Wavelength = new ArrayWavelengths(roles.Single(Role.Wavelength)!),
-            Flux = flux,
-            Noise = roles.NoiseOf(flux),
-            Mask = roles.MaskOf(flux),
-            Width = roles.WidthOf(flux),
-        };
+        return roles.SpectrumOf(roles.Single(Role.Flux)!, new ArrayWavelengths(roles.Single(Role.Wavelength)!));
     }
 
     private static IReadOnlyList<ReadingNote> Notes(TextTable table) =>
