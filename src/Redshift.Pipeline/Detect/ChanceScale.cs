@@ -1,3 +1,5 @@
+using Redshift.Pipeline.Numerics;
+
 namespace Redshift.Pipeline.Detect;
 
 /// <summary>
@@ -46,7 +48,8 @@ internal sealed class ChanceScale
     private static (float Upward, float Downward) Scales(Span<float> sample)
     {
         if (sample.Length < FewestSamples) return (1, 1);
-        sample.Sort();
-        return (SigmaPerQuartile * sample[3 * (sample.Length - 1) / 4], -SigmaPerQuartile * sample[(sample.Length - 1) / 4]);
+        int low = (sample.Length - 1) / 4, high = 3 * (sample.Length - 1) / 4;
+        var upper = Selection.Take(sample, high);
+        return (SigmaPerQuartile * upper, -SigmaPerQuartile * Selection.Take(sample[..high], low));
     }
 }

@@ -1,3 +1,5 @@
+using System.Numerics;
+
 namespace Redshift.Pipeline.Numerics;
 
 /// <summary>Order statistics without sorting everything (C. A. R. Hoare 1961, Comm. ACM 4, 321).</summary>
@@ -16,7 +18,8 @@ internal static class Selection
     }
 
     /// <summary>The value that would stand at an index if they were sorted. Puts no greater ones before it, no smaller ones behind it.</summary>
-    public static double Take(Span<double> values, int index)
+    public static T Take<T>(Span<T> values, int index)
+        where T : struct, INumber<T>
     {
         int low = 0, high = values.Length - 1;
         while (low < high)
@@ -30,10 +33,11 @@ internal static class Selection
         return values[index];
     }
 
-    private static (int Left, int Right) Partition(Span<double> values, int low, int high)
+    private static (int Left, int Right) Partition<T>(Span<T> values, int low, int high)
+        where T : struct, INumber<T>
     {
-        double a = values[low], b = values[(low + high) / 2], c = values[high];
-        var pivot = Math.Max(Math.Min(a, b), Math.Min(Math.Max(a, b), c));
+        T a = values[low], b = values[(low + high) / 2], c = values[high];
+        var pivot = T.Max(T.Min(a, b), T.Min(T.Max(a, b), c));
         int i = low, j = high;
         while (i <= j)
         {
