@@ -54,7 +54,7 @@ internal sealed class Matcher(MatchSettings settings)
         var refined = Climb(fit, leaders, cell);
         refined.AddRange(BehindGas(fit, refined, cell));
         var best = refined.MaxBy(r => r.LnEvidence)!;
-        fit.LnEvidence(best.Model, best.LnShift);
+        fit.Fit(best.Model, best.LnShift);
         var excess = ResidualExcess.Measure(pixels, fit.Curves().Model);
         var hypotheses = refined.Select(r => r.Soften(excess))
             .Select(r => new Hypothesis(r, r.LnVolume + RedshiftPrior.LnDensity(r.Model.Kind, r.LnShift, observation.Resolution, observation.SnrPixel, settings)))
@@ -74,7 +74,7 @@ internal sealed class Matcher(MatchSettings settings)
         var exact = WithVariants(fit, InFull(fit, FirstLook(fit, Settle(fit, peaks, cell))));
         var best = exact.MaxBy(p => p.LnEvidence);
         var climbed = Refinement.Climb(fit, best.Model, best.LnShift, 0.5 * cell);
-        fit.LnEvidence(climbed.Model, climbed.LnShift);
+        fit.Fit(climbed.Model, climbed.LnShift);
         return (ModelError.Measure(pixels, runs, fit, climbed.LnShift), Leaders(exact));
     }
 

@@ -34,7 +34,7 @@ public class ModelFitTests
     {
         var pixels = Pixels(Ln, x => Star(x) * (1 + 0.1 * (x - 8.5)) + Emission(x, 60, 40), 1);
         var fit = new ModelFit(pixels);
-        var evidence = fit.LnEvidence(Model, LnShift);
+        var evidence = fit.Fit(Model, LnShift);
 
         var (stars, partner) = (Rendered(Stars, pixels), Rendered(Partner, pixels));
         var smooth = new DenseFit(pixels, stars).Smooth(pixels);
@@ -49,6 +49,16 @@ public class ModelFitTests
         Assert.Equal([Oxygen, Blend], fit.Amplitudes.Select(a => a.Group));
         Assert.Equal(dense.Amplitude(2), fit.Amplitudes[0].Amplitude, 0.02);
         Assert.Equal(dense.Amplitude(3), fit.Amplitudes[1].Amplitude, 0.02);
+    }
+
+    [Fact]
+    public void What_is_remembered_is_what_was_fitted()
+    {
+        var fit = new ModelFit(Pixels(Ln, x => Star(x) + Emission(x, 60, 40), 9));
+        double mixed = fit.LnEvidence(Model, LnShift), alone = fit.LnEvidence(Model, LnShift, mixed: false), aside = fit.LnEvidence(Model, LnShift + 1e-3);
+        Assert.Equal(3, new HashSet<double> { mixed, alone, aside }.Count);
+        Assert.Equal([mixed, alone, aside], [fit.LnEvidence(Model, LnShift), fit.LnEvidence(Model, LnShift, mixed: false), fit.LnEvidence(Model, LnShift + 1e-3)]);
+        Assert.Equal([mixed, alone, aside], [fit.Fit(Model, LnShift), fit.Fit(Model, LnShift, mixed: false), fit.Fit(Model, LnShift + 1e-3)]);
     }
 
     [Fact]
@@ -75,7 +85,7 @@ public class ModelFitTests
     {
         var fit = new ModelFit(Pixels(Ln, x => 1 - Emission(x, 8, 0), 3));
         var perhaps = LinesOnly with { Groups = [new EmissionGroup { Name = "perhaps", Lines = Oxygen.Lines, Mean = 0, Spread = 30, Absent = 0.5 }] };
-        Assert.InRange(fit.LnEvidence(perhaps, LnShift), Math.Log(0.5) - 1e-6, 0);
+        Assert.InRange(fit.Fit(perhaps, LnShift), Math.Log(0.5) - 1e-6, 0);
         Assert.Equal(0, Assert.Single(fit.Amplitudes).Amplitude);
     }
 
@@ -118,7 +128,7 @@ public class ModelFitTests
     {
         var wide = new EmissionGroup { Name = "wide", Lines = Oxygen.Lines, Mean = 0, Spread = 1000, Absent = 1e-3 };
         var fit = new ModelFit(pixels);
-        fit.LnEvidence(LinesOnly with { Groups = [wide] }, LnShift);
+        fit.Fit(LinesOnly with { Groups = [wide] }, LnShift);
         return fit.Amplitudes[0].Amplitude;
     }
 

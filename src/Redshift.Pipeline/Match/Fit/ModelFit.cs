@@ -32,6 +32,7 @@ internal sealed class ModelFit
     private readonly float[] _weight;
     private readonly float[] _work;
     private readonly double _null;
+    private readonly Dictionary<(FitModel Model, double LnShift, bool Mixed), double> _known = [];
 
     public ModelFit(FitPixels pixels)
     {
@@ -54,11 +55,22 @@ internal sealed class ModelFit
     public IReadOnlyList<(EmissionGroup Group, double Amplitude)> Amplitudes =>
         [.. Enumerable.Range(0, _columns.Count).Where(c => _columns[c].Group is not null).Select(c => (_columns[c].Group!, _columns[c].Amplitude))];
 
-    /// <summary>ln evidence of the model at a redshift over that of the smooth continuum alone.</summary>
+    /// <summary>ln evidence of the model at a redshift, as <see cref="Fit"/> finds it; what was asked before is remembered.</summary>
     /// <param name="model">The model.</param>
     /// <param name="lnShift">ln(1+z).</param>
     /// <param name="mixed">Whether partners may be mixed in; a first look does without.</param>
     public double LnEvidence(FitModel model, double lnShift, bool mixed = true)
+    {
+        if (_known.TryGetValue((model, lnShift, mixed), out var known)) return known;
+        return _known[(model, lnShift, mixed)] = Fit(model, lnShift, mixed);
+    }
+
+    /// <summary>Fits the model at a redshift.</summary>
+    /// <param name="model">The model.</param>
+    /// <param name="lnShift">ln(1+z).</param>
+    /// <param name="mixed">Whether partners may be mixed in; a first look does without.</param>
+    /// <returns>ln evidence over that of the smooth continuum alone.</returns>
+    public double Fit(FitModel model, double lnShift, bool mixed = true)
     {
         if (lnShift > model.GreatestLnShift) return double.NegativeInfinity;
         _pixels.Weight.CopyTo(_weight, 0);

@@ -23,7 +23,7 @@ internal sealed class NativeModel
         var pixels = FitPixels.Build([.. observation.Spectra.Select(PixelRun.Native)], error, Cells.Step);
         var fit = new ModelFit(pixels);
         var smooth = fit.Curves().Model;
-        fit.LnEvidence(answer.Model, answer.LnShift);
+        fit.Fit(answer.Model, answer.LnShift);
         return new(pixels, smooth, fit.Curves().Model);
     }
 
