@@ -113,6 +113,23 @@ public sealed class SpectralAxisTests : IDisposable
     }
 
     [Fact]
+    public void Table_of_coordinates_is_read_through_its_axis_and_not_beside_it()
+    {
+        const int N = LoadBench.Pixels;
+        var observation = _bench.One(static writer =>
+        {
+            writer.WriteImage("", LoadBench.Flux(), [N],
+            [
+                Card.Of("CTYPE1", "AWAV-TAB"), Card.Of("CRVAL1", 1L), Card.Of("CRPIX1", 1L), Card.Of("CDELT1", 1.0), Card.Of("CUNIT1", "nm"),
+                Card.Of("PS1_0", "COORDS"), Card.Of("PS1_1", "WAVE"),
+            ]);
+            writer.WriteTable("COORDS", 1, [ColumnDefinition.Doubles("WAVE", LoadBench.Linear(500, 0.1), N) with { Unit = "nm" }]);
+        });
+        Assert.Equal((WavelengthMedium.Air, false), (observation.Medium, observation.MediumAssumed));
+        Assert.Equal(5001.394851, Sorted(observation)[0], 1e-6);
+    }
+
+    [Fact]
     public void Air_axis_of_the_standard_comes_out_in_vacuum()
     {
         var observation = _bench.One(writer => writer.WriteImage("", LoadBench.Flux(), [LoadBench.Pixels], LoadBench.Axis(500, 0.1, Card.Of("CTYPE1", "AWAV"), Card.Of("CUNIT1", "nm"))));

@@ -2,6 +2,7 @@ using Redshift.Fits;
 using Redshift.Pipeline.Load.Layouts;
 using Redshift.Pipeline.Load.Metadata;
 using Redshift.Pipeline.Load.Roles;
+using Redshift.Pipeline.Load.SpectralAxis;
 using Redshift.Pipeline.Load.Tables;
 
 namespace Redshift.Pipeline.Load.Images;
@@ -73,11 +74,12 @@ internal sealed class ImageFamily
     public NumberArray? Array(Role role, int length, int rows) =>
         Sibling(role, length) is { } hdu ? ArrayOf(hdu, length, rows) : null;
 
-    /// <summary>The wavelengths in a sibling, or in the only table that has as many, and where they are.</summary>
+    /// <summary>The wavelengths in a sibling or, where the header tells none, in the only table that has as many; and where they are.</summary>
     public (NumberArray? Array, Hdu? Hdu) Wavelengths(int length, int rows)
     {
         if (Sibling(Role.Wavelength, length) is { } hdu && ArrayOf(hdu, length, rows) is { } array) return (array, hdu);
-        return TableUnits.Wavelengths(File, length) is [var (column, table)] ? (column, table) : (null, null);
+        var isUncalibrated = AxisReader.IsUncalibrated(Header, SpectralShape.Of(Flux)!.Value.Axis);
+        return isUncalibrated && TableUnits.Wavelengths(File, length) is [var (column, table)] ? (column, table) : (null, null);
     }
 
     /// <summary>An image as the companion of spectra: shared by all, or with one or more values a pixel for each.</summary>

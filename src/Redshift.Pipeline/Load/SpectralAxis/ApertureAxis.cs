@@ -9,7 +9,7 @@ namespace Redshift.Pipeline.Load.SpectralAxis;
 /// One aperture of the "multispec" coordinate system: linear, logarithmic or a sum of dispersion functions, all from a string in the
 /// WAT2 cards.
 /// </summary>
-/// <remarks>F. Valdes, "The IRAF/NOAO spectral world coordinate systems", 1993: aperture, beam, type, w1, dw, nw, z, limits, functions.</remarks>
+/// <remarks>Valdes 1993, ASP Conference Series 52, 467: aperture, beam, type, w1, dw, nw, z, limits, functions.</remarks>
 internal sealed partial class ApertureAxis : PixelAxis
 {
     private readonly AxisScale _scale;

@@ -19,7 +19,7 @@ internal static class AxisReader
     public static PixelAxis? Read(HeaderScope header, int axis, int length, FitsFile? file)
     {
         var type = TypeOf(header, axis);
-        if (type is null && IsUncalibrated(header, axis) && AlternateOf(header, axis) is { } alternate) return Read(alternate, axis, length, file);
+        if (IsUncalibrated(header, axis) && AlternateOf(header, axis) is { } alternate) return Read(alternate, axis, length, file);
         if (type is { } known && IsTable(known.Code)) return TableAxisReader.Read(header, axis, known.Variable, file);
         if (LinearPart(header, axis) is not { } pixels) return LogarithmCards(header);
         return type is { } standard
@@ -27,8 +27,9 @@ internal static class AxisReader
             : LegacyAxis.Read(header, axis, pixels, length);
     }
 
-    private static bool IsUncalibrated(HeaderScope header, int axis) =>
-        LinearPart(header, axis) is { } pixels ? LegacyAxis.CountsPixels(pixels) : LogarithmCards(header) is null;
+    /// <summary>Whether the first description of an axis tells no wavelengths: there is none, or it counts pixels.</summary>
+    public static bool IsUncalibrated(HeaderScope header, int axis) => TypeOf(header, axis) is null
+        && (LinearPart(header, axis) is { } pixels ? LegacyAxis.CountsPixels(pixels) : LogarithmCards(header) is null);
 
     // Where the first description counts pixels, another may tell wavelengths.
     private static HeaderScope? AlternateOf(HeaderScope header, int axis)
