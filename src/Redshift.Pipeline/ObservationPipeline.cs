@@ -48,7 +48,7 @@ public sealed class ObservationPipeline(PipelineSettings settings)
     {
         var decision = match.Decision;
         var fit = decision.Answer.Fit;
-        var error = RedshiftError.Of(fit, normalized.Resolution);
+        var error = RedshiftError.Of(fit, normalized.Resolution, result.ResolutionFrom != ResolutionSource.Estimate);
         var tolerance = PosteriorSum.ToleranceKmS(fit.Model.Kind, normalized.Resolution);
         var confidence = Calibration.Confidence(match, error * Velocity.SpeedOfLightKmS, tolerance);
         var verdict = Calibration.Verdict(confidence, decision.LnOddsFeatures, normalized.HasContinuum);
@@ -65,7 +65,7 @@ public sealed class ObservationPipeline(PipelineSettings settings)
             ZErr = error * (1 + z),
             SpectralType = fit.Model.Template?.SpectralType ?? "",
             Next = decision.Next,
-            NextConfidence = decision.Next is { } next ? (1 - confidence) * next.Probability / Math.Max(1e-12, decision.Candidates.Sum(c => c.Probability) - decision.Candidates[0].Probability) : null,
+            NextConfidence = decision.Next is null ? null : (1 - confidence) * decision.NextShare,
             Curves = Curves(normalized, native),
             Cautions = [.. result.Cautions, .. AnswerCautions(confidence, decision)],
         });

@@ -15,6 +15,9 @@ internal sealed record Decision
     /// <summary>Best candidate outside the window of the answer, or null.</summary>
     public required Candidate? Next { get; init; }
 
+    /// <summary>Share of that candidate among all candidates outside the window; 0 where there is none.</summary>
+    public required double NextShare { get; init; }
+
     /// <summary>ln odds of the answer's window against all else.</summary>
     public required double LnOdds { get; init; }
 
@@ -51,11 +54,13 @@ internal static class PosteriorSum
         var outside = LnSum(hypotheses.Where(h => !Inside(h)).Select(h => h.LnWeight).Append(NothingLnWeight));
         var kindInside = LnSum(hypotheses.Where(h => Inside(h) && h.Fit.Model.Kind == kind));
         var candidates = Candidates(hypotheses, resolution, total);
+        var rivals = candidates.FindAll(c => Math.Abs(Math.Log(1 + c.Z) - top.Fit.LnShift) >= tolerance);
         return new()
         {
             Answer = top,
             Candidates = candidates,
-            Next = candidates.FirstOrDefault(c => Math.Abs(Math.Log(1 + c.Z) - top.Fit.LnShift) >= tolerance),
+            Next = rivals.Count > 0 ? rivals[0] : null,
+            NextShare = rivals.Count > 0 ? rivals[0].Probability / Math.Max(double.Epsilon, rivals.Sum(c => c.Probability)) : 0,
             LnOdds = inside - outside,
             LnOddsFeatures = inside,
             KindShare = Math.Exp(kindInside - inside),

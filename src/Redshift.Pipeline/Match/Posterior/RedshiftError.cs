@@ -9,15 +9,21 @@ internal static class RedshiftError
 {
     private const double KmSPerLn = Velocity.SpeedOfLightKmS;
 
-    /// <summary>Wavelength calibration and the shape of the line spread are rarely known better than to this share of its FWHM.</summary>
-    private const double ShareOfResolution = 0.06;
+    /// <summary>
+    /// Wavelength calibration and the shape of the line spread are rarely known better than to this share of its FWHM: where the file states the
+    /// resolution, a pipeline measured lamps with care; where it does not, nobody may have (common practice; agrees with the scatter of
+    /// simulated instruments).
+    /// </summary>
+    private const double ShareWhereStated = 0.025;
+    private const double ShareWhereEstimated = 0.07;
 
     /// <summary>σ of ln(1+z).</summary>
     /// <param name="fit">The answer.</param>
     /// <param name="resolution">Resolving power λ/FWHM.</param>
-    public static double Of(Refined fit, double resolution)
+    /// <param name="stated">Whether the resolution is stated, not estimated.</param>
+    public static double Of(Refined fit, double resolution, bool stated)
     {
-        double floor = Floor(fit) / KmSPerLn, calibration = ShareOfResolution / resolution;
+        double floor = Floor(fit) / KmSPerLn, calibration = (stated ? ShareWhereStated : ShareWhereEstimated) / resolution;
         return Math.Sqrt(fit.Sigma * fit.Sigma + floor * floor + calibration * calibration);
     }
 
@@ -34,13 +40,15 @@ internal static class RedshiftError
     };
 
     /// <summary>
-    /// Lines as wide as those of white dwarfs, and band heads as crude as those of M stars, are computed no better than to this velocity:
-    /// the scatter found on simulated stars whose lines and bands have other shapes than the engine's.
+    /// Lines as wide as those of white dwarfs, and band heads as crude as those of the coolest stars, are computed no better than to this velocity:
+    /// the scatter found on simulated stars whose lines and bands have other shapes than the engine's, and about what surveys find between
+    /// the velocities of cool stars' bands and of their lines (common practice).
     /// </summary>
     private static double StarFloor(string spectralType) => spectralType.Length == 0 ? 2 : spectralType[0] switch
     {
         'D' => 110,
-        'M' => 35,
+        'M' => 45,
+        'K' when spectralType.Length > 1 && spectralType[1] >= '6' => 40,
         'O' or 'B' => 20,
         _ => 2,
     };
