@@ -104,6 +104,6 @@ public sealed record LoadRule : SpectrumRule
 /// <summary>One of several spectra of an object: an arm, an order, an exposure.</summary>
 public sealed record ArmRule : SpectrumRule
 {
-    /// <summary>Its name.</summary>
-    public required string Name { get; init; }
+    /// <summary>Its name; empty for the one that has none.</summary>
+    public string Name { get; init; } = "";
 }

@@ -36,7 +36,7 @@ internal static class LoadRuleReader
 
     private static ArmRule ReadArm(SectionReader section)
     {
-        var arm = (ArmRule)WithRoles(section, new ArmRule { Name = section.Text("name") ?? throw section.Without("name") });
+        var arm = (ArmRule)WithRoles(section, new ArmRule { Name = section.Text("name") ?? "" });
         section.RejectOthers();
         return arm;
     }

@@ -97,9 +97,6 @@ internal sealed class SectionReader(TomlNode table)
             throw (Keys.GetValueOrDefault(first) ?? Keys[second]).Unlike($"both {first} and {second}", "only one of them");
     }
 
-    /// <summary>The error that a key is missing.</summary>
-    public SettingsException Without(string key) => table.Unlike($"a table with the key {key}", "none");
-
     /// <summary>Refuses every key that nobody has asked for.</summary>
     /// <exception cref="SettingsException">There is one; the nearest known key is named.</exception>
     public void RejectOthers()

@@ -371,6 +371,17 @@ public sealed class TableTests : IDisposable
         ])).Spectra[0].Flux);
 
     [Fact]
+    public void Arm_without_a_name_beside_one_with_a_name_is_an_arm_too()
+    {
+        var observation = _bench.One(static writer =>
+        {
+            writer.WriteTable("", LoadBench.Pixels, Columns(LoadBench.Flux()));
+            writer.WriteTable("RED", LoadBench.Pixels, Columns(LoadBench.Flux(level: 20)));
+        });
+        Assert.Equal(["", "RED"], observation.Spectra.Select(static spectrum => spectrum.Label));
+    }
+
+    [Fact]
     public void Versions_of_one_name_are_observations_of_their_own()
     {
         var outcomes = _bench.Fits(static writer =>

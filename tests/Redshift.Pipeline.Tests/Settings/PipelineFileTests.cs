@@ -86,7 +86,6 @@ public sealed class PipelineFileTests
     [InlineData("[[load]]\nerror = \"A\"\nvariance = \"B\"", 3, 12, "both", "only one of error and variance")]
     [InlineData("[[load]]\nmask = \"A\"\ngood = \"B\"", 3, 8, "both", "only one of mask and good")]
     [InlineData("[[load]]\nra = \"A\"", 2, 6, "only one of them", "both ra and dec")]
-    [InlineData("[[load]]\n[[load.arm]]\nresolution = 500", 2, 1, "none", "a table with the key name")]
     [InlineData("[[load]]\nresolution = 5", 2, 14, "the number 5", "a number from 10 to 1000000")]
     [InlineData("[match]\nz_range = [1.5, 0.2]", 2, 11, "[1.5, 0.2]", "the lower number first")]
     [InlineData("[match]\nz_range = [0, 20]", 2, 15, "the number 20", "a number from -0.01 to 7.5")]

@@ -80,12 +80,14 @@ internal sealed class RuleText
 
     private static string? PlaceOf(TableColumn? column) => column is null ? null : TableUnits.PlaceOf(column);
 
+    private static string NameOf(SpectrumSources arm) => arm.Orders is null ? arm.Label : arm.Arm;
+
     private void Arms(IReadOnlyList<SpectrumSources> arms)
     {
         foreach (var arm in arms)
         {
             _text.Append("\n[[load.arm]]\n");
-            Value("name", arm.Orders is null ? arm.Label : arm.Arm);
+            Value("name", NameOf(arm) is { Length: > 0 } name ? name : null);
             Roles(arm);
         }
     }
