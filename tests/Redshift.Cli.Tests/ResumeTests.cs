@@ -1,3 +1,5 @@
+using System.Diagnostics;
+using System.Globalization;
 using System.Text.Json;
 using Redshift.Pipeline.Ledger;
 using Xunit;
@@ -21,13 +23,26 @@ public sealed class ResumeTests : IDisposable
         _folder.WriteFits("f.fits");
         Zladder.Run("run", _folder.Spectra, "--out", _folder.Out("whole"));
         // The moments are chosen by what is done, so that some of them fall into the work whatever the machine.
-        foreach (var enough in new[] { 1, 4, 9, 15 })
-            KillAfter(enough);
+        foreach (var enough in new[] { 1, 4, 15 })
+            EndAfter(enough, "-KILL");
         var last = Zladder.Run("run", _folder.Spectra, "--out", _folder.Out("killed"), "--json");
 
         Assert.Equal(0, last.Status);
         Assert.InRange(Measured(last), 0, 23 - 14);
         Assert.All(Tables, table => Assert.Equal(Bytes("whole", table), Bytes("killed", table)));
+    }
+
+    [Fact]
+    public void An_interrupt_finishes_what_is_in_flight_and_says_how_to_go_on()
+    {
+        for (var i = 0; i < 40; i++)
+            _folder.WriteText($"many/{i}.txt", seed: i + 3);
+        var outcome = EndAfter(3, "-INT");
+
+        Assert.Equal(130, outcome.Status);
+        Assert.Matches(@"(^|\n)\d+ spectra are measured and recorded; the same command goes on from there\nzladder: interrupted\n$", outcome.Errors);
+        Assert.InRange(Outcomes(), 3, 42);
+        Assert.Equal(["ledger.db"], Directory.GetFiles(_folder.Out("killed")).Select(Path.GetFileName));
     }
 
     [Fact]
@@ -62,13 +77,14 @@ public sealed class ResumeTests : IDisposable
     }
 
     // Lets a run work until the ledger holds that many outcomes.
-    private void KillAfter(int enough)
+    private Zladder.Outcome EndAfter(int enough, string signal)
     {
         using var process = Zladder.Start("run", _folder.Spectra, "--out", _folder.Out("killed"));
         while (!process.HasExited && Outcomes() < enough)
             Thread.Sleep(20);
-        process.Kill();
-        Zladder.Finish(process);
+        using (var kill = Process.Start("kill", [signal, process.Id.ToString(CultureInfo.InvariantCulture)]))
+            kill.WaitForExit();
+        return Zladder.Finish(process);
     }
 
     private int Outcomes()
