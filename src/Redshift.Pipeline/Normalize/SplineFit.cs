@@ -36,7 +36,8 @@ internal sealed class SplineFit(SplineBasis basis, float[] flux)
 
     /// <summary>Projects a column: L⁻¹ of its products with the spline.</summary>
     /// <param name="sums">Σ weight·column·template·basis of each coefficient; overwritten.</param>
-    public void Project(Span<double> sums) => _cholesky.Forward(sums);
+    /// <param name="first">First coefficient that is not zero.</param>
+    public void Project(Span<double> sums, int first) => _cholesky.Forward(sums, first);
 
     /// <summary>Adds weight·column·template·basis of a stretch of pixels to the coefficients, and writes weight·column.</summary>
     /// <param name="start">First pixel.</param>

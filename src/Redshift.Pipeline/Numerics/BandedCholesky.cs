@@ -9,6 +9,7 @@ internal sealed class BandedCholesky
     public const int Band = 3;
 
     private double[] _lower = [];
+    private double[] _inverse = [];
 
     public int Size { get; private set; }
 
@@ -19,25 +20,30 @@ internal sealed class BandedCholesky
     public void Factor(ReadOnlySpan<double> matrix, int size)
     {
         Size = size;
-        if (_lower.Length < size * (Band + 1)) _lower = new double[size * (Band + 1)];
+        if (_inverse.Length < size) (_lower, _inverse) = (new double[size * (Band + 1)], new double[size]);
         var half = 0.0;
         for (var i = 0; i < size; i++)
         {
             for (var j = Math.Max(0, i - Band); j <= i; j++) FactorElement(matrix, i, j);
             half += Math.Log(_lower[i * (Band + 1)]);
+            _inverse[i] = 1 / _lower[i * (Band + 1)];
         }
 
         HalfLogDeterminant = half;
     }
 
     /// <summary>Solves L y = x in place.</summary>
-    public void Forward(Span<double> x)
+    /// <param name="x">The right-hand side; receives the solution.</param>
+    /// <param name="first">Elements before this one are zero, and stay so.</param>
+    public void Forward(Span<double> x, int first = 0)
     {
-        for (var i = 0; i < Size; i++)
+        double one = 0, two = 0, three = 0;
+        for (var i = first; i < Size; i++)
         {
-            var sum = x[i];
-            for (var d = Math.Min(Band, i); d >= 1; d--) sum -= _lower[i * (Band + 1) + d] * x[i - d];
-            x[i] = sum / _lower[i * (Band + 1)];
+            var row = _lower.AsSpan(i * (Band + 1), Band + 1);
+            var value = (x[i] - row[3] * three - row[2] * two - row[1] * one) * _inverse[i];
+            (three, two, one) = (two, one, value);
+            x[i] = value;
         }
     }
 
@@ -48,7 +54,7 @@ internal sealed class BandedCholesky
         {
             var sum = y[i];
             for (var d = 1; d <= Band && i + d < Size; d++) sum -= _lower[(i + d) * (Band + 1) + d] * y[i + d];
-            y[i] = sum / _lower[i * (Band + 1)];
+            y[i] = sum * _inverse[i];
         }
     }
 

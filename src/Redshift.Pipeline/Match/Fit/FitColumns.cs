@@ -31,6 +31,9 @@ internal struct Column
 
     /// <summary>Its stretches of pixels.</summary>
     public int FirstSegment, EndSegment;
+
+    /// <summary>First coefficient of the spline that it touches.</summary>
+    public int FirstCoefficient;
 }
 
 /// <summary>
@@ -101,7 +104,7 @@ internal sealed class FitColumns(FitPixels pixels, SplineFit spline)
         for (var c = 0; c < Count; c++) Project(c);
         for (var g = 0; g < Count; g++)
             for (var h = 0; h <= g; h++)
-                _products[g * Count + h] = _products[h * Count + g] = Overlap(g, h) - Kernels.Dot(Projected(g), Projected(h));
+                _products[g * Count + h] = _products[h * Count + g] = Overlap(g, h) - Explained(g, h);
     }
 
     /// <summary>Adds amplitude times column to the pixels.</summary>
@@ -120,12 +123,22 @@ internal sealed class FitColumns(FitPixels pixels, SplineFit spline)
         projected.Clear();
         double gradient = 0;
         foreach (var (start, end, offset) in Segments(column)) gradient += spline.AddProducts(start, end, _values.AsSpan(offset), _weighted.AsSpan(offset), projected);
-        spline.Project(projected);
-        _columns[column].Gradient = gradient - Kernels.Dot(projected, spline.Right);
+        ref var own = ref _columns[column];
+        own.FirstCoefficient = pixels.Basis.First[_segments[own.FirstSegment].Start];
+        spline.Project(projected, own.FirstCoefficient);
+        own.Gradient = gradient - Kernels.Dot(projected, spline.Right);
+    }
+
+    /// <summary>The part of two columns' product that the spline takes out.</summary>
+    private double Explained(int a, int b)
+    {
+        var first = Math.Max(_columns[a].FirstCoefficient, _columns[b].FirstCoefficient);
+        return Kernels.Dot(Projected(a)[first..], Projected(b)[first..]);
     }
 
     private double Overlap(int a, int b)
     {
+        if (First(a) >= Last(b) || First(b) >= Last(a)) return 0;
         double sum = 0;
         foreach (var (start, end, offset) in Segments(a))
             foreach (var other in Segments(b))
@@ -136,6 +149,10 @@ internal sealed class FitColumns(FitPixels pixels, SplineFit spline)
 
         return sum;
     }
+
+    private int First(int column) => _segments[_columns[column].FirstSegment].Start;
+
+    private int Last(int column) => _segments[_columns[column].EndSegment - 1].End;
 
     private readonly record struct Segment(int Start, int End, int Offset);
 }
