@@ -45,7 +45,7 @@ internal static class PosteriorSum
     public static Decision Decide(IReadOnlyList<Hypothesis> hypotheses, double resolution)
     {
         // A star whose lines are not seen says no more than that the spectrum is smooth.
-        var top = hypotheses.FirstOrDefault(h => h.Fit.LnEvidence > SeenLnEvidence) ?? hypotheses[0];
+        var top = hypotheses.FirstOrDefault(h => h.Fit.LnEvidence > SeenLnEvidence && h.LnWeight > hypotheses[0].LnWeight - Negligible) ?? hypotheses[0];
         var kind = top.Fit.Model.Kind;
         var tolerance = ToleranceKmS(kind, resolution) / KmSPerLn;
         bool Inside(Hypothesis h) => Math.Abs(h.Fit.LnShift - top.Fit.LnShift) < tolerance;
@@ -69,6 +69,9 @@ internal static class PosteriorSum
 
     /// <summary>ln evidence from which a model's features count as seen.</summary>
     private const double SeenLnEvidence = 3;
+
+    /// <summary>So far below the best in ln weight, seen features do not count.</summary>
+    private const double Negligible = 10;
 
     /// <summary>ln weight of a spectrum with neither lines nor breaks: the smooth model has ln evidence 0 by definition and one unit of prior.</summary>
     private const double NothingLnWeight = 0;

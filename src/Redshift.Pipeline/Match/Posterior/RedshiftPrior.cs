@@ -10,8 +10,8 @@ internal static class RedshiftPrior
     /// <summary>Resolving power of the surveys of faint objects, at most.</summary>
     private const double OrdinaryResolution = 4000;
 
-    /// <summary>Prior weight of reflected sunlight with cometary bands.</summary>
-    private const double CometShare = 0.02;
+    /// <summary>Prior weight of reflected sunlight with cometary bands: few of the bodies that look like the Sun are comets.</summary>
+    private const double CometShare = 0.002;
 
     /// <summary>ln prior of a galaxy or quasar at the velocities of stars.</summary>
     private const double NearestPenalty = -5000;
