@@ -1,6 +1,6 @@
+using Redshift.Physics.Statistics;
 using Redshift.Pipeline.Results;
 using Redshift.Simulation;
-using Redshift.Simulation.Scoring;
 
 namespace Redshift.Evaluation;
 

@@ -1,5 +1,5 @@
+using Redshift.Physics.Statistics;
 using Redshift.Simulation;
-using Redshift.Simulation.Scoring;
 
 namespace Redshift.Evaluation;
 

@@ -1,4 +1,4 @@
-using Redshift.Simulation.Scoring;
+using Redshift.Physics.Statistics;
 
 namespace Redshift.Evaluation;
 

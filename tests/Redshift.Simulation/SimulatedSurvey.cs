@@ -1,6 +1,6 @@
+using Redshift.Physics.Statistics;
 using Redshift.Simulation.Instruments;
 using Redshift.Simulation.Light;
-using Redshift.Simulation.Random;
 using Redshift.Simulation.Sources;
 
 namespace Redshift.Simulation;

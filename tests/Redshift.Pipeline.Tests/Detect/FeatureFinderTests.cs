@@ -1,7 +1,6 @@
 using Redshift.Physics.Statistics;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Detect;
-using Redshift.Simulation.Random;
 using Xunit;
 
 namespace Redshift.Pipeline.Tests.Detect;

@@ -1,7 +1,7 @@
+using Redshift.Physics.Statistics;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Normalize;
 using Redshift.Pipeline.Observations;
-using Redshift.Simulation.Random;
 
 namespace Redshift.Pipeline.Tests.Detect;
 

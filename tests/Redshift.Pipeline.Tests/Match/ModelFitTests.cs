@@ -1,8 +1,8 @@
+using Redshift.Physics.Statistics;
 using Redshift.Pipeline.Match.Fit;
 using Redshift.Pipeline.Match.Models;
 using Redshift.Pipeline.Match.Search;
 using Redshift.Pipeline.Results;
-using Redshift.Simulation.Random;
 using Xunit;
 using static Redshift.Pipeline.Tests.Normalize.SyntheticSpectrum;
 

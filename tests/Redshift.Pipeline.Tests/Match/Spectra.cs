@@ -1,10 +1,10 @@
+using Redshift.Physics.Statistics;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Match.Fit;
 using Redshift.Pipeline.Normalize;
 using Redshift.Pipeline.Observations;
 using Redshift.Pipeline.Tests.Normalize;
 using Redshift.Simulation;
-using Redshift.Simulation.Random;
 
 namespace Redshift.Pipeline.Tests.Match;
 

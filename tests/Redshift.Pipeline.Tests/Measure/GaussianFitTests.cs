@@ -1,8 +1,8 @@
 using Redshift.Physics.Profiles;
+using Redshift.Physics.Statistics;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Match.Measure;
 using Redshift.Pipeline.Tests.Detect;
-using Redshift.Simulation.Random;
 using Xunit;
 
 namespace Redshift.Pipeline.Tests.Measure;

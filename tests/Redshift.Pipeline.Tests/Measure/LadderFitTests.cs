@@ -1,7 +1,7 @@
 using Redshift.Physics.Hydrogen;
+using Redshift.Physics.Statistics;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Match.Measure;
-using Redshift.Simulation.Random;
 using Xunit;
 
 namespace Redshift.Pipeline.Tests.Measure;

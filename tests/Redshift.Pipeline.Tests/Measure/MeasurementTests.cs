@@ -1,9 +1,9 @@
 using Redshift.Physics.Lines;
+using Redshift.Physics.Statistics;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Observations;
 using Redshift.Pipeline.Results;
 using Redshift.Pipeline.Settings;
-using Redshift.Simulation.Random;
 using Xunit;
 
 namespace Redshift.Pipeline.Tests.Measure;

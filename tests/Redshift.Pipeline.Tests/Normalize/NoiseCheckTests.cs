@@ -1,5 +1,5 @@
+using Redshift.Physics.Statistics;
 using Redshift.Pipeline.Normalize;
-using Redshift.Simulation.Random;
 using Xunit;
 
 namespace Redshift.Pipeline.Tests.Normalize;

@@ -1,6 +1,6 @@
+using Redshift.Physics.Statistics;
 using Redshift.Pipeline.Normalize;
 using Redshift.Pipeline.Observations;
-using Redshift.Simulation.Random;
 using Xunit;
 using static Redshift.Pipeline.Tests.Normalize.SyntheticSpectrum;
 

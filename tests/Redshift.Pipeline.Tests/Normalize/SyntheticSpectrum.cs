@@ -1,6 +1,6 @@
+using Redshift.Physics.Statistics;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Observations;
-using Redshift.Simulation.Random;
 
 namespace Redshift.Pipeline.Tests.Normalize;
 

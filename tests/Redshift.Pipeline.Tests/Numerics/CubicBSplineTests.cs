@@ -1,6 +1,6 @@
 using CsCheck;
+using Redshift.Physics.Statistics;
 using Redshift.Pipeline.Numerics;
-using Redshift.Simulation.Random;
 using Xunit;
 
 namespace Redshift.Pipeline.Tests.Numerics;

@@ -1,8 +1,8 @@
 using System.Numerics;
 using System.Runtime.Intrinsics;
 using MathNet.Numerics.IntegralTransforms;
+using Redshift.Physics.Statistics;
 using Redshift.Pipeline.Numerics;
-using Redshift.Simulation.Random;
 using Xunit;
 
 namespace Redshift.Pipeline.Tests.Numerics;

@@ -1,4 +1,4 @@
-using Redshift.Simulation.Scoring;
+using Redshift.Physics.Statistics;
 using Xunit;
 
 namespace Redshift.Pipeline.Tests.Simulation;

@@ -1,4 +1,4 @@
-using Redshift.Simulation.Random;
+using Redshift.Physics.Statistics;
 
 namespace Redshift.Simulation.Instruments;
 

@@ -1,5 +1,5 @@
+using Redshift.Physics.Statistics;
 using Redshift.Simulation.Light;
-using Redshift.Simulation.Random;
 
 namespace Redshift.Simulation.Sources.Quasars;
 

@@ -1,5 +1,5 @@
+using Redshift.Physics.Statistics;
 using Redshift.Simulation.Light;
-using Redshift.Simulation.Random;
 using Redshift.Simulation.Sources.Galaxies;
 
 namespace Redshift.Simulation.Sources.Quasars;

@@ -1,6 +1,6 @@
+using Redshift.Physics.Statistics;
 using Redshift.Simulation.Atoms;
 using Redshift.Simulation.Light;
-using Redshift.Simulation.Random;
 
 namespace Redshift.Simulation.Sources.Stars;
 

@@ -1,4 +1,4 @@
-namespace Redshift.Simulation.Random;
+namespace Redshift.Physics.Statistics;
 
 /// <summary>The generator xoshiro256** of Blackman and Vigna (2018, arXiv:1805.01407), seeded by SplitMix64 as its authors advise.</summary>
 /// <remarks>Written here so that a seed gives the same numbers on every runtime and machine.</remarks>

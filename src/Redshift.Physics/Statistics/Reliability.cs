@@ -1,4 +1,4 @@
-namespace Redshift.Simulation.Scoring;
+namespace Redshift.Physics.Statistics;
 
 /// <summary>Stated against found frequency in one range of probability.</summary>
 /// <param name="From">Lower edge.</param>

@@ -1,4 +1,4 @@
-namespace Redshift.Simulation.Scoring;
+namespace Redshift.Physics.Statistics;
 
 /// <summary>Figures of merit of stated probabilities and errors.</summary>
 public static class Measures

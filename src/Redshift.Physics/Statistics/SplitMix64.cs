@@ -1,4 +1,4 @@
-namespace Redshift.Simulation.Random;
+namespace Redshift.Physics.Statistics;
 
 /// <summary>The generator of Steele, Lea and Flood (OOPSLA 2014) with Vigna's constants: turns any seed into well-mixed words.</summary>
 public static class SplitMix64
