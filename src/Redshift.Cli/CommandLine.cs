@@ -42,6 +42,7 @@ internal static class CommandLine
             ExportCommand.Build(),
             MergeCommand.Build(),
             CompareCommand.Build(),
+            InjectCommand.Build(),
         };
         root.SetAction((Action<ParseResult>)(_ => throw new UsageException("no command given; see zladder --help")));
         return root;

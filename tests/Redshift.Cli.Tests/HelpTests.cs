@@ -14,6 +14,7 @@ public sealed class HelpTests
     [InlineData("watch")]
     [InlineData("export")]
     [InlineData("compare")]
+    [InlineData("inject")]
     public void Help_is_as_approved(params string[] command)
     {
         var outcome = Zladder.Run([.. command, "--help"]);

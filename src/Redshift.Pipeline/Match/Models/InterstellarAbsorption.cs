@@ -12,7 +12,8 @@ internal static class InterstellarAbsorption
     private const double OutflowKmS = -150;
     private const double KmSPerLn = Velocity.SpeedOfLightKmS;
 
-    private static readonly (double RestA, double EquivalentWidthA)[] Lines =
+    /// <summary>Rest wavelengths in vacuum, and rest equivalent widths, both in Å.</summary>
+    public static IReadOnlyList<(double RestA, double EquivalentWidthA)> Lines { get; } =
     [
         (1025.722, 2.0), (1031.926, 1.0), (1036.337, 1.5), (1190.416, 0.9), (1193.290, 1.0), (1206.500, 1.5),
         (1260.422, 1.6), (1302.169, 1.3), (1304.370, 1.2), (1334.532, 1.7), (1393.760, 1.2), (1402.773, 0.8),

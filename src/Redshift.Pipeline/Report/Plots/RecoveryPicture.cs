@@ -1,0 +1,121 @@
+using System.Globalization;
+using Redshift.Pipeline.Inject;
+using SkiaSharp;
+
+namespace Redshift.Pipeline.Report.Plots;
+
+/// <summary>What was recovered on one page: shares against signal to noise and redshift, and found against stated confidence.</summary>
+public static class RecoveryPicture
+{
+    private const int Width = 1500;
+    private const int Height = 520;
+    private const float PanelWidth = 400;
+    private const float Top = 100;
+    private const float Bottom = 420;
+
+    /// <summary>Draws the recovery and saves it as PNG, making the folders on the way.</summary>
+    /// <exception cref="IOException">The file cannot be written.</exception>
+    public static void Save(Recovery recovery, string path)
+    {
+        using var image = Draw(recovery);
+        using var data = image.Encode(SKEncodedImageFormat.Png, 100);
+        if (Path.GetDirectoryName(path) is { Length: > 0 } folder)
+            Directory.CreateDirectory(folder);
+        using var file = File.Create(path);
+        data.SaveTo(file);
+    }
+
+    private static SKImage Draw(Recovery recovery)
+    {
+        using var surface = SKSurface.Create(new SKImageInfo(Width, Height));
+        var canvas = surface.Canvas;
+        canvas.Clear(Ink.Paper);
+        var all = recovery.All;
+        Write(canvas, string.Create(CultureInfo.InvariantCulture, $"{all.Members.Count} computed objects put into the spectra: {100 * all.GoodShare:F0} % right"), 70, 36, 20, Ink.Dark);
+        DrawShares(canvas, 70, "share, by signal to noise a pixel", recovery.BySnr, "S/N ");
+        DrawShares(canvas, 560, "share, by redshift (galaxies and quasars)", recovery.ByRedshift, "z ");
+        DrawReliability(canvas, 1050, recovery);
+        DrawKey(canvas);
+        return surface.Snapshot();
+    }
+
+    private static void DrawShares(SKCanvas canvas, float left, string title, IReadOnlyList<RecoveryGroup> groups, string prefix)
+    {
+        DrawFrame(canvas, left, title);
+        SKPoint At(int i, double share) => new(left + PanelWidth * (i + 0.5f) / groups.Count, Y(share));
+        for (var i = 0; i < groups.Count; i++)
+        {
+            var name = groups[i].Name;
+            var label = name.StartsWith(prefix, StringComparison.Ordinal) ? name[prefix.Length..] : name;
+            Write(canvas, label.Replace(" to ", "–", StringComparison.Ordinal), At(i, 0).X, Bottom + 18, 11, Ink.Soft, SKTextAlign.Center);
+            Write(canvas, "n " + groups[i].Members.Count.ToString(CultureInfo.InvariantCulture), At(i, 0).X, Bottom + 34, 10, Ink.Soft, SKTextAlign.Center);
+        }
+
+        DrawTrace(canvas, Ink.Continuum, Filling.Open, [.. groups.Select((g, i) => (SKPoint?)At(i, g.GoodShare))]);
+        DrawTrace(canvas, Ink.Model, Filling.Half, [.. groups.Select((g, i) => (SKPoint?)At(i, g.Completeness))]);
+        DrawTrace(canvas, Ink.Dark, Filling.Full, [.. groups.Select((g, i) => g.Purity is { } purity ? At(i, purity) : (SKPoint?)null)]);
+    }
+
+    private static void DrawReliability(SKCanvas canvas, float left, Recovery recovery)
+    {
+        DrawFrame(canvas, left, "right answers, by stated confidence");
+        using var pen = Ink.Pen(Ink.Soft);
+        using var band = Ink.Pen(Ink.Noise, 5);
+        float X(double share) => left + PanelWidth * (float)share;
+        canvas.DrawLine(X(0), Y(0), X(1), Y(1), pen);
+        foreach (var edge in new[] { 0, 0.5, 1 })
+            Write(canvas, edge.ToString("0.0", CultureInfo.InvariantCulture), X(edge), Bottom + 18, 11, Ink.Soft, SKTextAlign.Center);
+        foreach (var bin in recovery.Reliability)
+        {
+            canvas.DrawLine(X(bin.Stated), Y(bin.Low), X(bin.Stated), Y(bin.High), band);
+            Mark.Draw(canvas, X(bin.Stated), Y(bin.Found), 4, bin.Off ? Filling.Open : Filling.Full);
+        }
+    }
+
+    private static void DrawFrame(SKCanvas canvas, float left, string title)
+    {
+        using var pen = Ink.Pen(Ink.Faint);
+        Write(canvas, title, left, Top - 18, 13, Ink.Dark);
+        foreach (var share in new[] { 0, 0.25, 0.5, 0.75, 1 })
+        {
+            canvas.DrawLine(left, Y(share), left + PanelWidth, Y(share), pen);
+            Write(canvas, share.ToString("0.00", CultureInfo.InvariantCulture), left - 8, Y(share) + 4, 11, Ink.Soft, SKTextAlign.Right);
+        }
+    }
+
+    private static void DrawTrace(SKCanvas canvas, SKColor color, Filling filling, IReadOnlyList<SKPoint?> points)
+    {
+        using var pen = Ink.Pen(color, 2);
+        for (var i = 1; i < points.Count; i++)
+            if (points[i - 1] is { } from && points[i] is { } to) canvas.DrawLine(from, to, pen);
+        foreach (var point in points.OfType<SKPoint>()) Mark.Draw(canvas, point.X, point.Y, 4, filling);
+    }
+
+    private static void DrawKey(SKCanvas canvas)
+    {
+        float x = 70;
+        foreach (var (color, filling, meaning) in new[]
+        {
+            (Ink.Continuum, Filling.Open, "right redshift"), (Ink.Model, Filling.Half, "right and likely or firm"),
+            (Ink.Dark, Filling.Full, "right among the likely and firm"),
+        })
+        {
+            using var pen = Ink.Pen(color, 2);
+            canvas.DrawLine(x, Height - 28, x + 26, Height - 28, pen);
+            Mark.Draw(canvas, x + 13, Height - 28, 4, filling);
+            x += 62 + Write(canvas, meaning, x + 34, Height - 24, 12, Ink.Soft);
+        }
+
+        Write(canvas, "bar: 95 % band if confidences are true; open: outside", 1050, Height - 24, 12, Ink.Soft);
+    }
+
+    private static float Y(double share) => Bottom - (Bottom - Top) * (float)share;
+
+    private static float Write(SKCanvas canvas, string text, float x, float y, float size, SKColor color, SKTextAlign align = SKTextAlign.Left)
+    {
+        using var font = PlotFont.Sized(size);
+        using var fill = Ink.Fill(color);
+        canvas.DrawText(text, x, y, align, font, fill);
+        return font.MeasureText(text);
+    }
+}
