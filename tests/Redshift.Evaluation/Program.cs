@@ -41,9 +41,13 @@ dump.SetAction(parse =>
         SpectrumDump.Write(observation, parse.GetValue(output)!);
 });
 
+var answers = new Argument<string[]>("files") { Description = "CSV files that simulate wrote with --features" };
+var calibrate = new Command("calibrate", "Fits the map from evidence to confidence anew") { answers };
+calibrate.SetAction(parse => CalibrationFit.Print([.. parse.GetValue(answers)!.SelectMany(CalibrationCase.Read)], Console.Out));
+
 var samples = new Command("samples", "Writes the sample spectra anew") { folder };
 samples.SetAction(parse => SampleNight.WriteTo(parse.GetValue(folder)!));
 
-return new RootCommand("Measures the pipeline against known truth") { simulate, judge, dump, samples }.Parse(args).Invoke();
+return new RootCommand("Measures the pipeline against known truth") { simulate, judge, dump, calibrate, samples }.Parse(args).Invoke();
 
 SurveyMix Mix(ParseResult parse) => SurveyMix.Default.Only(parse.GetValue(setups) ?? [], parse.GetValue(kinds) ?? []);
