@@ -25,6 +25,8 @@ internal sealed class ModelLibrary
                 .Select(m => m with { Kind = ObjectKind.Unknown, Name = "sunlight with cometary bands", Groups = CometBands.All, LnPrior = 0 }),
         ];
         Nebulae = WithEqualShares([new FitModel { Kind = ObjectKind.Nebula, Name = "ionised gas", Groups = NebulaLines.All, NarrowKmS = 15 }]);
+        // Some 40 MB that nothing asks for again.
+        _stars.Clear();
     }
 
     /// <summary>Reflected sunlight with cometary bands.</summary>
