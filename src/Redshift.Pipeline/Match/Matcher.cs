@@ -104,7 +104,7 @@ internal sealed class Matcher(MatchSettings settings)
     /// </summary>
     private static List<Peak> WithVariants(ModelFit fit, List<Peak> peaks)
     {
-        var places = Leaders(peaks).Where(p => p.Model.Kind is ObjectKind.Galaxy or ObjectKind.Quasar).GroupBy(p => p.Model.Kind)
+        var places = Promising(peaks).Where(p => p.Model.Kind is ObjectKind.Galaxy or ObjectKind.Quasar).GroupBy(p => p.Model.Kind)
             .SelectMany(g => Peak.OnePerPlace(g, PlaceKmS(g.Key)).Take(VariedPlaces));
         var variants = places.SelectMany(place => ModelLibrary.Instance.OfKind(place.Model.Kind)
             .Select(model => place with { Model = model, LnEvidence = fit.LnEvidence(model, place.LnShift, mixed: false) })
@@ -115,12 +115,13 @@ internal sealed class Matcher(MatchSettings settings)
     /// <summary>The peaks, each model once at a place.</summary>
     private static List<Peak> Distinct(IEnumerable<Peak> peaks) => [.. peaks.DistinctBy(p => (p.Model, Math.Round(p.LnShift / Cells.Step)))];
 
-    private static List<Peak> Leaders(List<Peak> peaks)
+    private static List<Peak> Leaders(List<Peak> peaks) =>
+        [.. Promising(peaks).Union(peaks.GroupBy(p => p.Model.Kind).SelectMany(g => g.OrderByDescending(p => p.LnEvidence).Take(AlwaysClimbed)))];
+
+    private static List<Peak> Promising(List<Peak> peaks)
     {
         var best = peaks.Max(p => p.LnEvidence);
-        var floor = best - Hopeless - HopelessShare * Math.Abs(best);
-        var always = peaks.GroupBy(p => p.Model.Kind).SelectMany(g => g.OrderByDescending(p => p.LnEvidence).Take(AlwaysClimbed)).ToHashSet();
-        return peaks.FindAll(p => p.LnEvidence > floor || always.Contains(p));
+        return peaks.FindAll(p => p.LnEvidence > best - Hopeless - HopelessShare * Math.Abs(best));
     }
 
     private static List<Refined> Climb(ModelFit fit, List<Peak> peaks, double cell) =>
