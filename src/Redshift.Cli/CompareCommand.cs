@@ -1,6 +1,5 @@
 using System.CommandLine;
 using System.CommandLine.Parsing;
-using System.Globalization;
 using Redshift.Pipeline.Compare;
 using Redshift.Pipeline.Report;
 
@@ -93,12 +92,7 @@ internal sealed class CompareCommand
         return pairing;
     }
 
-    private static double ParseRadius(ArgumentResult result)
-    {
-        var text = result.Tokens[0].Value;
-        if (double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out var radius) && radius is > 0 and <= LargestRadius)
-            return radius;
-        result.AddError(FormattableString.Invariant($"'{text}': expected a radius in arcseconds, above 0 and up to {LargestRadius}"));
-        return UsualRadius;
-    }
+    private static double ParseRadius(ArgumentResult result) => DecimalNumber.Parse(
+        result, radius => radius is > 0 and <= LargestRadius,
+        FormattableString.Invariant($"a radius in arcseconds, above 0 and up to {LargestRadius}"));
 }

@@ -16,14 +16,9 @@ internal sealed class MergeCommand
         Arity = ArgumentArity.OneOrMore,
     };
 
-    private readonly Option<string> _out = new("--out")
-    {
-        Description = "Folder for the catalogue; made where it does not exist",
-        HelpName = "DIR",
-        Required = true,
-    };
+    private readonly Option<string> _out = OutputOptions.Out();
 
-    private readonly Option<bool> _json = new("--json") { Description = "Print the summary as JSON" };
+    private readonly Option<bool> _json = OutputOptions.Json();
 
     private MergeCommand()
     {

@@ -13,16 +13,11 @@ internal sealed class RunCommand
     private readonly PathArguments _paths;
     private readonly SharedOptions _shared;
 
-    private readonly Option<string> _out = new("--out")
-    {
-        Description = "Folder for the catalogue; made where it does not exist",
-        HelpName = "DIR",
-        Required = true,
-    };
+    private readonly Option<string> _out = OutputOptions.Out();
 
     private readonly Option<int?> _jobs = JobsOption.Create();
     private readonly Option<int?> _maxRejects = WholeNumber.Option("--max-rejects", "End with status 4 where more than N spectra or files cannot be used", 0);
-    private readonly Option<bool> _plots = new("--plots") { Description = "Draw every spectrum with its answer into the folder plots" };
+    private readonly Option<bool> _plots = OutputOptions.Plots();
 
     private readonly Option<bool> _again = new("--again") { Description = "Measure everything again, also what an earlier run into the same folder did" };
 
@@ -38,7 +33,7 @@ internal sealed class RunCommand
         CustomParser = ParseShard,
     };
 
-    private readonly Option<bool> _json = new("--json") { Description = "Print the summary as JSON" };
+    private readonly Option<bool> _json = OutputOptions.Json();
 
     private RunCommand()
     {

@@ -1,7 +1,6 @@
 using System.CommandLine;
 using System.CommandLine.Parsing;
 using System.Diagnostics;
-using System.Globalization;
 using Redshift.Pipeline.Batch;
 using Redshift.Pipeline.Report;
 
@@ -16,12 +15,7 @@ internal sealed class WatchCommand
     private readonly Command _command = new("watch", "Measure the files of a folder as they arrive, and keep the catalogue current, until interrupted.");
     private readonly Argument<string> _watched = new("DIR") { Description = "Folder to watch, with all folders below it" };
 
-    private readonly Option<string> _out = new("--out")
-    {
-        Description = "Folder for the catalogue; made where it does not exist",
-        HelpName = "OUT",
-        Required = true,
-    };
+    private readonly Option<string> _out = OutputOptions.Out("OUT");
 
     private readonly SharedOptions _shared;
 
@@ -33,7 +27,7 @@ internal sealed class WatchCommand
         CustomParser = ParseInterval,
     };
 
-    private readonly Option<bool> _plots = new("--plots") { Description = "Draw every spectrum with its answer into the folder plots" };
+    private readonly Option<bool> _plots = OutputOptions.Plots();
     private readonly Option<int?> _jobs = JobsOption.Create();
 
     private WatchCommand()
@@ -93,12 +87,7 @@ internal sealed class WatchCommand
         Console.Error.WriteLine($"{measured} measured now, {tally.Results} in the catalogue, {tally.Rejects} rejects; waiting for more");
     }
 
-    private static double ParseInterval(ArgumentResult result)
-    {
-        var text = result.Tokens[0].Value;
-        if (double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out var seconds) && seconds is >= ShortestInterval and <= LongestInterval)
-            return seconds;
-        result.AddError(FormattableString.Invariant($"'{text}': expected a number of seconds from {ShortestInterval} to {LongestInterval}"));
-        return 0;
-    }
+    private static double ParseInterval(ArgumentResult result) => DecimalNumber.Parse(
+        result, seconds => seconds is >= ShortestInterval and <= LongestInterval,
+        FormattableString.Invariant($"a number of seconds from {ShortestInterval} to {LongestInterval}"));
 }
