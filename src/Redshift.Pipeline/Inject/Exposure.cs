@@ -1,5 +1,7 @@
+using Redshift.Physics.Profiles;
 using Redshift.Physics.Stars;
 using Redshift.Physics.Units;
+using Redshift.Pipeline.Normalize;
 using Redshift.Pipeline.Observations;
 
 namespace Redshift.Pipeline.Inject;
@@ -7,11 +9,7 @@ namespace Redshift.Pipeline.Inject;
 /// <summary>Light as a spectrograph shows it: shifted, smeared by the line spread of each pixel, integrated over the pixel.</summary>
 internal static class Exposure
 {
-    private const double FwhmToSigma = 1 / 2.3548200450309493;
-
-    /// <summary>Where a file states no resolution, 2.5 pixels are taken, as in measuring.</summary>
-    private const double UsualPixels = 2.5;
-
+    private const double FwhmToSigma = 1 / LineWidth.FwhmPerSigma;
     private const double CoarsestKmS = 20;
     private const double FinestKmS = 2;
     private const double ShortestA = 880;
@@ -56,7 +54,7 @@ internal static class Exposure
     {
         var near = Math.Clamp(pixel, 1, spectrum.Count - 1);
         var width = Math.Log(spectrum.Wavelength[near] / spectrum.Wavelength[near - 1]);
-        var fwhm = spectrum.FwhmKmS is { } stated ? stated[pixel] / Velocity.SpeedOfLightKmS : UsualPixels * width;
+        var fwhm = spectrum.FwhmKmS is { } stated ? stated[pixel] / Velocity.SpeedOfLightKmS : Normalizer.UnstatedFwhm * width;
         return Math.Sqrt(fwhm * fwhm * FwhmToSigma * FwhmToSigma + width * width / 12);
     }
 }

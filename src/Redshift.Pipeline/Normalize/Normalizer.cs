@@ -1,3 +1,4 @@
+using Redshift.Physics.Profiles;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Numerics;
 using Redshift.Pipeline.Observations;
@@ -16,7 +17,10 @@ internal static class Normalizer
     /// <summary>Scatter of a line-blanketed spectrum about its smooth part, as a share.</summary>
     private const double Blanketing = 0.08;
 
-    private const double FwhmToSigma = 1 / 2.3548200450309493;
+    /// <summary>FWHM in pixels that is taken where a file states no resolution.</summary>
+    public const double UnstatedFwhm = 2.5;
+
+    private const double FwhmToSigma = 1 / LineWidth.FwhmPerSigma;
 
     /// <summary>Prepares an observation.</summary>
     public static NormalizedObservation Normalize(Observation observation)
@@ -115,13 +119,13 @@ internal static class Normalizer
         return widths;
     }
 
-    /// <summary>Instrument and pixel in quadrature: a box of width w has the variance w²/12. Unknown resolution is taken as 2.5 pixels.</summary>
+    /// <summary>Instrument and pixel in quadrature: a box of width w has the variance w²/12. An unknown resolution is taken as <see cref="UnstatedFwhm"/>.</summary>
     private static float[] LineSpread(UsablePixels pixels, float[] width)
     {
         var sigma = new float[pixels.Count];
         for (var i = 0; i < sigma.Length; i++)
         {
-            var instrument = pixels.FwhmKmS is { } fwhm ? fwhm[i] / Velocity.SpeedOfLightKmS : 2.5 * width[i];
+            var instrument = pixels.FwhmKmS is { } fwhm ? fwhm[i] / Velocity.SpeedOfLightKmS : UnstatedFwhm * width[i];
             sigma[i] = (float)Math.Sqrt(instrument * instrument * FwhmToSigma * FwhmToSigma + width[i] * width[i] / 12);
         }
 

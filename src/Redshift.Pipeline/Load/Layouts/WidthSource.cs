@@ -1,3 +1,4 @@
+using Redshift.Physics.Profiles;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Load.Roles;
 using Redshift.Pipeline.Load.SpectralAxis;
@@ -10,8 +11,6 @@ namespace Redshift.Pipeline.Load.Layouts;
 /// <param name="statedUnit">The unit that the pipeline file states; null for that of the label.</param>
 internal sealed class WidthSource(NumberArray values, Role role, string? statedUnit = null)
 {
-    private static readonly double FwhmPerSigma = Math.Sqrt(8 * Math.Log(2));
-
     // Narrower than a third of a pixel or wider than a third of the wavelength is not a resolution.
     private const double SmallestPart = 1.0 / 3;
 
@@ -71,7 +70,7 @@ internal sealed class WidthSource(NumberArray values, Role role, string? statedU
 
     private double InAngstrom(double value, double angstrom, double step)
     {
-        var perSigma = role == Role.Sigma ? FwhmPerSigma : 1;
+        var perSigma = role == Role.Sigma ? LineWidth.FwhmPerSigma : 1;
         if (_unit is { } unit)
         {
             return unit.Quantity switch

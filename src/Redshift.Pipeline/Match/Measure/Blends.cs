@@ -1,4 +1,5 @@
 using Redshift.Physics.Lines;
+using Redshift.Physics.Profiles;
 
 namespace Redshift.Pipeline.Match.Measure;
 
@@ -13,8 +14,6 @@ internal static class Blends
     /// <summary>Lines closer than this share of their full width at half maximum are one.</summary>
     private const double Closest = 0.7;
 
-    private const double FwhmPerSigma = 2.3548200450309493;
-
     /// <summary>Groups lines.</summary>
     /// <param name="targets">Lines by rising centre.</param>
     /// <param name="instrument">σ of the line spread at a place, null out of range; such lines are left out.</param>
@@ -26,7 +25,7 @@ internal static class Blends
         foreach (var target in targets)
         {
             if (instrument(target.Centre) is not { } sigma) continue;
-            if (group.Count > 0 && target.Centre - group[^1].Centre > Closest * FwhmPerSigma * Width(group[^1], target, sigma)) Close(group, blends, rank);
+            if (group.Count > 0 && target.Centre - group[^1].Centre > Closest * LineWidth.FwhmPerSigma * Width(group[^1], target, sigma)) Close(group, blends, rank);
             group.Add(target);
         }
 

@@ -1,3 +1,4 @@
+using Redshift.Physics.Profiles;
 using Redshift.Pipeline.Normalize;
 
 namespace Redshift.Pipeline.Match.Measure;
@@ -25,8 +26,6 @@ internal sealed class LineMeasurer(NormalizedObservation observation, NativeMode
 
     /// <summary>Signal to noise of a line that is clearly there.</summary>
     private const double Clear = 4;
-
-    private const double FwhmPerSigma = 2.3548200450309493;
 
     /// <summary>Measures all lines that fall into a spectrum.</summary>
     /// <param name="targets">Lines by rising centre, none of them blended with another.</param>
@@ -96,7 +95,7 @@ internal sealed class LineMeasurer(NormalizedObservation observation, NativeMode
     }
 
     private static bool IsTied(LineShape a, LineShape b) =>
-        Math.Abs(a.Centre - b.Centre) < TiedFwhm * FwhmPerSigma * Math.Min(a.Sigma, b.Sigma) && Math.Max(a.Sigma, b.Sigma) < 1.3 * Math.Min(a.Sigma, b.Sigma);
+        Math.Abs(a.Centre - b.Centre) < TiedFwhm * LineWidth.FwhmPerSigma * Math.Min(a.Sigma, b.Sigma) && Math.Max(a.Sigma, b.Sigma) < 1.3 * Math.Min(a.Sigma, b.Sigma);
 
     /// <summary>A quick look at the model, at several widths where the line has any.</summary>
     private Prediction? Predict(LineTarget target, IReadOnlyList<LineTarget> targets)

@@ -1,4 +1,5 @@
 using Redshift.Physics.Lines;
+using Redshift.Physics.Profiles;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Detect;
 using Redshift.Pipeline.Results;
@@ -8,8 +9,6 @@ namespace Redshift.Pipeline.Match.Measure;
 /// <summary>Puts fitted lines into the units of the file and of the observer.</summary>
 internal sealed class LineReport(double fluxScale, double lnShift, Func<int, string> fluxUnit)
 {
-    private const double FwhmPerSigma = 2.3548200450309493;
-
     /// <summary>σ that an upper limit stands for.</summary>
     private const double LimitSigma = 3;
 
@@ -69,8 +68,8 @@ internal sealed class LineReport(double fluxScale, double lnShift, Func<int, str
             FluxErr = line.FluxErr * fluxScale,
             EquivalentWidthRestA = hasContinuum ? line.EquivalentWidth / Math.Exp(lnShift) : null,
             EquivalentWidthErrA = hasContinuum ? line.EquivalentWidthErr / Math.Exp(lnShift) : null,
-            FwhmObservedKmS = Velocity.SpeedOfLightKmS * FwhmPerSigma * line.Sigma,
-            FwhmIntrinsicKmS = Intrinsic(line, instrument) is { } own ? Velocity.SpeedOfLightKmS * FwhmPerSigma * own : null,
+            FwhmObservedKmS = Velocity.SpeedOfLightKmS * LineWidth.FwhmPerSigma * line.Sigma,
+            FwhmIntrinsicKmS = Intrinsic(line, instrument) is { } own ? Velocity.SpeedOfLightKmS * LineWidth.FwhmPerSigma * own : null,
         };
     }
 
