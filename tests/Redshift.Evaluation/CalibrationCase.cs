@@ -1,5 +1,7 @@
 using System.Globalization;
-using MathNet.Numerics.Distributions;
+using Redshift.Physics.Units;
+using Redshift.Pipeline.Match.Posterior;
+using Redshift.Pipeline.Results;
 
 namespace Redshift.Evaluation;
 
@@ -11,20 +13,17 @@ namespace Redshift.Evaluation;
 /// <param name="Right">Whether the redshift was right.</param>
 internal sealed record CalibrationCase(string Kind, double LnOdds, double Misfit, double Within, bool Right)
 {
-    private const double C = 299792.458;
-
     /// <summary>Reads the answers of files that were written with the option for features.</summary>
     public static IEnumerable<CalibrationCase> Read(string path) =>
         CsvTable.Read(path).Where(row => row["z"] is not null && row["ln_odds"] is not null).Select(From);
 
     private static CalibrationCase From(CsvRow row)
     {
-        var kind = row["kind"]!;
-        var tolerance = kind switch { "quasar" => 3000, "star" => Math.Max(100, 0.5 * C / Number(row, "resolution")), _ => 1000 };
-        var sigma = C * Number(row, "z_err") / (1 + Number(row, "z"));
+        var kind = Enum.Parse<ObjectKind>(row["kind"]!, ignoreCase: true);
+        var sigma = Velocity.SpeedOfLightKmS * Number(row, "z_err") / (1 + Number(row, "z"));
         return new(
-            kind is "galaxy" or "quasar" ? kind : "other", Number(row, "ln_odds"), Number(row, "misfit"),
-            2 * Normal.CDF(0, 1, tolerance / Math.Max(sigma, 1)) - 1, row["right"] == "1");
+            kind is ObjectKind.Galaxy or ObjectKind.Quasar ? row["kind"]! : "other", Number(row, "ln_odds"), Number(row, "misfit"),
+            Calibration.Within(sigma, PosteriorSum.ToleranceKmS(kind, Number(row, "resolution"))), row["right"] == "1");
     }
 
     private static double Number(CsvRow row, string column) => double.Parse(row[column]!, CultureInfo.InvariantCulture);

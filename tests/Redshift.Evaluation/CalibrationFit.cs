@@ -1,18 +1,15 @@
 using MathNet.Numerics;
 using MathNet.Numerics.LinearAlgebra;
+using Redshift.Pipeline.Match.Posterior;
 
 namespace Redshift.Evaluation;
 
 /// <summary>
-/// Fits the map from evidence to confidence anew, kind by kind, by maximum likelihood: the numbers for the pipeline's calibration. The form of
-/// the map is that of the pipeline.
+/// Fits the map from evidence to confidence anew, kind by kind, by maximum likelihood: the numbers for the pipeline's calibration.
 /// </summary>
 internal static class CalibrationFit
 {
     private const int Folds = 5;
-    private const double Turn = 6;
-    private const double Reach = 3000;
-    private const double Greatest = 0.999;
 
     /// <summary>Prints the coefficients of each kind, with the score that they reach and that of answers left out of the fit.</summary>
     public static void Print(IReadOnlyList<CalibrationCase> cases, TextWriter writer)
@@ -30,7 +27,7 @@ internal static class CalibrationFit
     /// <summary>Mean of −ln of the probability that was given to what happened.</summary>
     private static double Score(IEnumerable<CalibrationCase> cases, Vector<double> b) => cases.Average(c =>
     {
-        var stated = Math.Clamp(Confidence(c, b), 1e-4, Greatest);
+        var stated = Math.Clamp(Confidence(c, b), 1e-4, Calibration.Greatest);
         return -Math.Log(c.Right ? stated : 1 - stated);
     });
 
@@ -44,9 +41,5 @@ internal static class CalibrationFit
     private static Vector<double> Fit(IReadOnlyList<CalibrationCase> cases) =>
         FindMinimum.OfFunction(b => Score(cases, b) + 1e-4 * b.DotProduct(b), Vector<double>.Build.Dense([0, 0.1, 1, 0.1]), 1e-9, 20000);
 
-    private static double Confidence(CalibrationCase c, Vector<double> b)
-    {
-        var logit = b[0] + b[1] * Math.Clamp(c.LnOdds, -3, Turn) + b[2] * Math.Log(1 + Math.Clamp(c.LnOdds - Turn, 0, Reach)) - b[3] * c.Misfit;
-        return c.Within / (1 + Math.Exp(-logit));
-    }
+    private static double Confidence(CalibrationCase c, Vector<double> b) => c.Within * new Calibration.Map(b[0], b[1], b[2], b[3]).Probability(c.LnOdds, c.Misfit);
 }

@@ -35,7 +35,6 @@ internal sealed class Matcher(MatchSettings settings)
     private const int VariedPlaces = 4;
     private const int VariantsInFull = 2;
 
-
     /// <summary>Cells of the exact fits at most.</summary>
     private const int MostFitCells = 12000;
 

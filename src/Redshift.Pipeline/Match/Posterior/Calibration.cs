@@ -35,12 +35,12 @@ internal static class Calibration
     /// <param name="toleranceKmS">How far off the answer may be and still be right.</param>
     public static double Confidence(MatchResult match, double errorKmS, double toleranceKmS)
     {
-        var odds = match.Decision.LnOdds;
         var map = Of(match.Decision.Answer.Fit.Model.Kind);
-        var logit = map.Offset + map.Near * Math.Clamp(odds, -3, Turn) + map.Far * Math.Log(1 + Math.Clamp(odds - Turn, 0, Reach)) - map.Misfit * match.Misfit;
-        var within = 2 * Math.Exp(HalfNormalEvidence.LnTail(toleranceKmS / errorKmS)) - 1;
-        return Math.Min(Greatest, within / (1 + Math.Exp(-logit)));
+        return Math.Min(Greatest, map.Probability(match.Decision.LnOdds, match.Misfit) * Within(errorKmS, toleranceKmS));
     }
+
+    /// <summary>Chance that a normal error keeps within a tolerance.</summary>
+    public static double Within(double errorKmS, double toleranceKmS) => 2 * Math.Exp(HalfNormalEvidence.LnTail(toleranceKmS / errorKmS)) - 1;
 
     private static Map Of(ObjectKind kind) => kind switch
     {
@@ -62,5 +62,15 @@ internal static class Calibration
     /// <param name="Near">Slope with the ln odds below the turn.</param>
     /// <param name="Far">Slope with their logarithm beyond.</param>
     /// <param name="Misfit">What a misfit costs.</param>
-    private readonly record struct Map(double Offset, double Near, double Far, double Misfit);
+    internal readonly record struct Map(double Offset, double Near, double Far, double Misfit)
+    {
+        /// <summary>Probability that the redshift is right, its error aside.</summary>
+        /// <param name="lnOdds">ln odds against rivals.</param>
+        /// <param name="misfit">How badly the best model fits.</param>
+        public double Probability(double lnOdds, double misfit)
+        {
+            var logit = Offset + Near * Math.Clamp(lnOdds, -3, Turn) + Far * Math.Log(1 + Math.Clamp(lnOdds - Turn, 0, Reach)) - Misfit * misfit;
+            return 1 / (1 + Math.Exp(-logit));
+        }
+    }
 }
