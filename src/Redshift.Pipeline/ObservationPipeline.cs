@@ -89,11 +89,10 @@ public sealed class ObservationPipeline(PipelineSettings settings)
         var count = spectrum.Original.Count;
         double[] continuum = new double[count], full = new double[count], sigma = new double[count];
         Array.Fill(sigma, double.PositiveInfinity);
-        var ln = spectrum.LnWavelength;
-        for (int i = 0, near = 0; i < count; i++)
+        var nearest = spectrum.NearestToOriginal();
+        for (var i = 0; i < count; i++)
         {
-            var x = Math.Log(spectrum.Original.Wavelength[i]);
-            while (near + 1 < ln.Length && Math.Abs(ln[near + 1] - x) <= Math.Abs(ln[near] - x)) near++;
+            var near = nearest[i];
             continuum[i] = spectrum.Continuum[near] * scale;
             full[i] = model[near] * scale;
             if (spectrum.Original.InverseVariance[i] > 0 && spectrum.Weight[near] > 0) sigma[i] = scale / Math.Sqrt(spectrum.Weight[near]);

@@ -1,3 +1,5 @@
+using MathNet.Numerics.Statistics;
+
 namespace Redshift.Physics.Statistics;
 
 /// <summary>Figures of merit of stated probabilities and errors.</summary>
@@ -24,19 +26,10 @@ public static class Measures
             .Sum(bin => Math.Abs(bin.Average(Outcome) - bin.Average(f => f.Probability)) * bin.Count() / forecasts.Count);
 
     /// <summary>Median; NaN of nothing.</summary>
-    public static double Median(IEnumerable<double> values)
-    {
-        double[] sorted = [.. values.Order()];
-        var middle = sorted.Length / 2;
-        return sorted.Length == 0 ? double.NaN : sorted.Length % 2 == 1 ? sorted[middle] : 0.5 * (sorted[middle - 1] + sorted[middle]);
-    }
+    public static double Median(IEnumerable<double> values) => ArrayStatistics.MedianInplace(values.ToArray());
 
     /// <summary>Robust width: median absolute deviation from the median, scaled to σ of a normal law by 1/Φ⁻¹(3/4).</summary>
-    public static double RobustWidth(IReadOnlyCollection<double> values)
-    {
-        var median = Median(values);
-        return 1.4826022185056018 * Median(values.Select(value => Math.Abs(value - median)));
-    }
+    public static double RobustWidth(IReadOnlyCollection<double> values) => RobustNoise.SigmaFromMad(values.ToArray());
 
     /// <summary>Share of the values inside ±limit.</summary>
     public static double ShareWithin(IReadOnlyCollection<double> values, double limit) =>

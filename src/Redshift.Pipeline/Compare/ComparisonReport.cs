@@ -45,11 +45,11 @@ public sealed class ComparisonReport(Comparison comparison, string oldPath, stri
         output.WriteLine(FormattableString.Invariant($"{comparison.Pairs} rows paired by {Word(pairing)}"));
         if (comparison.OldDoubled > 0)
             output.WriteLine(FormattableString.Invariant($"{comparison.OldDoubled} old rows left aside, because an earlier one has the same {Word(pairing)}"));
-        WriteTable(output, "Redshifts, new against old", TextOf(GroupColumns, Groups()));
-        WriteTable(output, "Changes", [.. Changes.Where(change => comparison.Count(change.Word) > 0).Select(ChangeRow)]);
-        WriteTable(output, "Kinds, old to new", [.. comparison.KindChanges.Select(TransitionRow)]);
-        WriteTable(output, "Verdicts, old to new", [.. comparison.VerdictChanges.Select(TransitionRow)]);
-        WriteTable(output, "Outliers, the farthest out", TextOf(DifferenceColumns.All, comparison.WorstOutliers));
+        TextTable.Write(output, "Redshifts, new against old", GroupColumns, Groups());
+        TextTable.Write(output, "Changes", Changes.Where(change => comparison.Count(change.Word) > 0).Select(ChangeRow));
+        TextTable.Write(output, "Kinds, old to new", comparison.KindChanges.Select(TransitionRow));
+        TextTable.Write(output, "Verdicts, old to new", comparison.VerdictChanges.Select(TransitionRow));
+        TextTable.Write(output, "Outliers, the farthest out", DifferenceColumns.All, comparison.WorstOutliers);
     }
 
     /// <summary>Builds the JSON.</summary>
@@ -84,24 +84,6 @@ public sealed class ComparisonReport(Comparison comparison, string oldPath, stri
 
     private static Cell[] TransitionRow(KeyValuePair<(string Old, string New), int> change) =>
         [Cell.Of(change.Value), Cell.Of($"{change.Key.Old} to {change.Key.New}")];
-
-    private static List<Cell[]> TextOf<TRow>(IReadOnlyList<Column<TRow>> columns, IEnumerable<TRow> rows)
-    {
-        Cell[][] cells = [.. rows.Select(row => columns.Select(column => column.Value(row)).ToArray())];
-        return cells.Length == 0 ? [] : [[.. columns.Select(column => new Cell(column.Name, false))], .. cells];
-    }
-
-    private static void WriteTable(TextWriter output, string title, List<Cell[]> rows)
-    {
-        if (rows.Count == 0)
-            return;
-        output.WriteLine();
-        output.WriteLine(title);
-        var table = new TextTable();
-        foreach (var row in rows)
-            table.Add(row);
-        table.Write(output, "  ");
-    }
 
     private static void WriteTransitions(Utf8JsonWriter writer, string name, IReadOnlyDictionary<(string Old, string New), int> changes)
     {

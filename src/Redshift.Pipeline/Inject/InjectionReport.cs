@@ -53,8 +53,8 @@ public sealed class InjectionReport(Recovery recovery, int givers, ulong seed)
     {
         output.WriteLine(FormattableString.Invariant(
             $"{recovery.All.Members.Count} computed objects put into {givers} {(givers == 1 ? "spectrum" : "spectra")}, seed {seed}"));
-        foreach (var (title, _, groups) in Tables) WriteTable(output, title, GroupColumns, groups);
-        WriteTable(output, "Confidence, stated and found (band: 95 % if confidences are true)", ReliabilityColumns, recovery.Reliability);
+        foreach (var (title, _, groups) in Tables) TextTable.Write(output, title, GroupColumns, groups);
+        TextTable.Write(output, "Confidence, stated and found (band: 95 % if confidences are true)", ReliabilityColumns, recovery.Reliability);
         output.WriteLine();
         foreach (var line in Limits) output.WriteLine(line);
     }
@@ -78,16 +78,4 @@ public sealed class InjectionReport(Recovery recovery, int givers, ulong seed)
         CellsJson.WriteRows(writer, InjectionColumns.All, recovery.All.Members);
         writer.WriteEndObject();
     });
-
-    private static void WriteTable<TRow>(TextWriter output, string title, Column<TRow>[] columns, IEnumerable<TRow> rows)
-    {
-        Cell[][] cells = [.. rows.Select(row => Array.ConvertAll(columns, column => column.Value(row)))];
-        if (cells.Length == 0) return;
-        output.WriteLine();
-        output.WriteLine(title);
-        var table = new TextTable();
-        table.AddWords(Array.ConvertAll(columns, column => column.Name));
-        foreach (var row in cells) table.Add(row);
-        table.Write(output, "  ");
-    }
 }

@@ -14,11 +14,10 @@ internal sealed record NativePixels(double[] Continuum, double[] Sigma)
         var pixels = new NativePixels(new double[original.Count], new double[original.Count]);
         Array.Fill(pixels.Sigma, double.PositiveInfinity);
         var binned = Math.Sqrt(Math.Max(1, original.InverseVariance.Count(w => w > 0) / spectrum.Count));
-        var ln = spectrum.LnWavelength;
-        for (int i = 0, near = 0; i < original.Count; i++)
+        var nearest = spectrum.NearestToOriginal();
+        for (var i = 0; i < original.Count; i++)
         {
-            var x = Math.Log(original.Wavelength[i]);
-            while (near + 1 < ln.Length && Math.Abs(ln[near + 1] - x) <= Math.Abs(ln[near] - x)) near++;
+            var near = nearest[i];
             pixels.Continuum[i] = spectrum.Continuum[near] * fluxScale;
             if (original.InverseVariance[i] > 0 && spectrum.Weight[near] > 0) pixels.Sigma[i] = binned * fluxScale / Math.Sqrt(spectrum.Weight[near]);
         }

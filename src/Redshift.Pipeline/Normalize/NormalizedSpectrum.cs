@@ -37,4 +37,18 @@ internal sealed class NormalizedSpectrum
 
     /// <summary>Number of pixels.</summary>
     public int Count => Flux.Length;
+
+    /// <summary>The pixel nearest in ln λ to each pixel of <see cref="Original"/>.</summary>
+    public int[] NearestToOriginal()
+    {
+        var nearest = new int[Original.Count];
+        for (int i = 0, near = 0; i < nearest.Length; i++)
+        {
+            var x = Math.Log(Original.Wavelength[i]);
+            while (near + 1 < Count && Math.Abs(LnWavelength[near + 1] - x) <= Math.Abs(LnWavelength[near] - x)) near++;
+            nearest[i] = near;
+        }
+
+        return nearest;
+    }
 }

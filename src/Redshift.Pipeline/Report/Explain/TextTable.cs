@@ -13,6 +13,28 @@ public sealed class TextTable
     /// <summary>Adds a row of words.</summary>
     public void AddWords(params string[] row) => _rows.Add([.. row.Select(word => new Cell(word, false))]);
 
+    /// <summary>Writes a table with a title and a heading after an empty line; nothing where there are no rows.</summary>
+    public static void Write<TRow>(TextWriter output, string title, IReadOnlyList<Column<TRow>> columns, IEnumerable<TRow> rows)
+    {
+        Cell[][] cells = [.. rows.Select(row => columns.Select(column => column.Value(row)).ToArray())];
+        if (cells.Length == 0)
+            return;
+        Write(output, title, cells.Prepend([.. columns.Select(column => new Cell(column.Name, false))]));
+    }
+
+    /// <summary>Writes rows under a title after an empty line; nothing where there are none.</summary>
+    public static void Write(TextWriter output, string title, IEnumerable<Cell[]> rows)
+    {
+        var table = new TextTable();
+        foreach (var row in rows)
+            table.Add(row);
+        if (table._rows.Count == 0)
+            return;
+        output.WriteLine();
+        output.WriteLine(title);
+        table.Write(output, "  ");
+    }
+
     /// <summary>Writes the rows, each after <paramref name="indent"/>.</summary>
     public void Write(TextWriter output, string indent)
     {

@@ -18,11 +18,7 @@ public static class RecoveryPicture
     public static void Save(Recovery recovery, string path)
     {
         using var image = Draw(recovery);
-        using var data = image.Encode(SKEncodedImageFormat.Png, 100);
-        if (Path.GetDirectoryName(path) is { Length: > 0 } folder)
-            Directory.CreateDirectory(folder);
-        using var file = File.Create(path);
-        data.SaveTo(file);
+        PictureFile.Save(image, path);
     }
 
     private static SKImage Draw(Recovery recovery)

@@ -20,11 +20,7 @@ public static class SpectrumPicture
     public static void Save(ObservationResult result, string path)
     {
         using var image = Draw(result);
-        using var data = image.Encode(SKEncodedImageFormat.Png, 100);
-        if (Path.GetDirectoryName(path) is { Length: > 0 } folder)
-            Directory.CreateDirectory(folder);
-        using var file = File.Create(path);
-        data.SaveTo(file);
+        PictureFile.Save(image, path);
     }
 
     private static SKImage Draw(ObservationResult result)
