@@ -44,13 +44,14 @@ public sealed class ObservationPipeline(PipelineSettings settings)
         if (normalized.Spectra.Any(s => s.Original.FwhmKmS is null)) yield return "resolution-estimated";
     }
 
-    private static ObservationResult Answer(ObservationResult result, NormalizedObservation normalized, MatchResult match)
+    private ObservationResult Answer(ObservationResult result, NormalizedObservation normalized, MatchResult match)
     {
         var decision = match.Decision;
         var fit = decision.Answer.Fit;
         var error = RedshiftError.Of(fit, normalized.Resolution, result.ResolutionFrom != ResolutionSource.Estimate);
         var tolerance = PosteriorSum.ToleranceKmS(fit.Model.Kind, normalized.Resolution);
-        var confidence = Calibration.Confidence(match, error * Velocity.SpeedOfLightKmS, tolerance);
+        var within = Calibration.Within(error * Velocity.SpeedOfLightKmS, tolerance);
+        var confidence = settings.Match.Confidence.Of(fit.Model.Kind).Confidence(decision.LnOdds, match.Misfit, within);
         var verdict = Calibration.Verdict(confidence, decision.LnOddsFeatures, normalized.HasContinuum);
         result = result with { Verdict = verdict, Confidence = confidence, LnOdds = decision.LnOdds, LnOddsFeatures = decision.LnOddsFeatures, Misfit = match.Misfit, Candidates = decision.Candidates };
         if (verdict == Verdict.Nothing) return result;

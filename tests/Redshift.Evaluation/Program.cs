@@ -43,7 +43,7 @@ dump.SetAction(parse =>
 
 var answers = new Argument<string[]>("files") { Description = "CSV files that simulate wrote with --features" };
 var calibrate = new Command("calibrate", "Fits the map from evidence to confidence anew") { answers };
-calibrate.SetAction(parse => CalibrationFit.Print([.. parse.GetValue(answers)!.SelectMany(CalibrationCase.Read)], Console.Out));
+calibrate.SetAction(parse => CalibrationTable.Print([.. parse.GetValue(answers)!.SelectMany(CalibrationTable.Read)], Console.Out));
 
 var samples = new Command("samples", "Writes the sample spectra anew") { folder };
 samples.SetAction(parse => SampleNight.WriteTo(parse.GetValue(folder)!));

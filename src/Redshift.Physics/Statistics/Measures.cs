@@ -18,7 +18,11 @@ public static class Measures
 
     /// <summary>Logarithmic score: mean of −ln of the probability given to what happened, which is held above <paramref name="least"/>.</summary>
     public static double LogLoss(IReadOnlyList<Forecast> forecasts, double least = 1e-4) =>
-        -forecasts.Average(f => Math.Log(Math.Max(least, f.Right ? f.Probability : 1 - f.Probability)));
+        forecasts.Average(f => LogLoss(f, least));
+
+    /// <summary>The same of one forecast.</summary>
+    public static double LogLoss(Forecast forecast, double least = 1e-4) =>
+        -Math.Log(Math.Max(least, forecast.Right ? forecast.Probability : 1 - forecast.Probability));
 
     /// <summary>Expected calibration error (Naeini et al. 2015): mean |frequency − probability| over equal bins, weighted by their counts.</summary>
     public static double CalibrationError(IReadOnlyList<Forecast> forecasts, int bins = 10) =>

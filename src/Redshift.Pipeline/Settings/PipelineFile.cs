@@ -3,7 +3,7 @@ using Redshift.Pipeline.Report;
 
 namespace Redshift.Pipeline.Settings;
 
-/// <summary>Reads a pipeline file: TOML with the tables <c>[read]</c>, <c>[[load]]</c> and <c>[match]</c>.</summary>
+/// <summary>Reads a pipeline file: TOML with the tables <c>[read]</c>, <c>[[load]]</c>, <c>[match]</c> and <c>[calibration]</c>.</summary>
 public static class PipelineFile
 {
     // Limits beyond which a value is a slip of the pen: prisms have R = 30, the finest spectrographs 200,000.
@@ -38,11 +38,12 @@ public static class PipelineFile
         var read = root.Section("read");
         var rules = root.Sections("load").Select(LoadRuleReader.Read).ToList();
         var match = root.Section("match");
+        var calibration = root.Section("calibration");
         root.RejectOthers();
         return new()
         {
             Load = (read is null ? new LoadSettings() : ReadDefaults(read)) with { Rules = rules },
-            Match = match is null ? new MatchSettings() : ReadMatch(match),
+            Match = (match is null ? new MatchSettings() : ReadMatch(match)) with { Confidence = calibration is null ? new() : CalibrationReader.Read(calibration) },
         };
     }
 

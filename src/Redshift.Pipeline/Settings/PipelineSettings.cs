@@ -1,4 +1,5 @@
 using Redshift.Physics.Units;
+using Redshift.Pipeline.Match.Posterior;
 using Redshift.Pipeline.Results;
 
 namespace Redshift.Pipeline.Settings;
@@ -58,4 +59,7 @@ public sealed record MatchSettings
 
     /// <summary>Prior weight of nebulae.</summary>
     public double PriorNebula { get; init; } = 0.05;
+
+    /// <summary>How evidence maps to confidence.</summary>
+    public ConfidenceMaps Confidence { get; init; } = new();
 }

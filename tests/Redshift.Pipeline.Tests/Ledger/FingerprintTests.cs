@@ -1,6 +1,7 @@
 using System.Reflection;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Ledger;
+using Redshift.Pipeline.Match.Posterior;
 using Redshift.Pipeline.Settings;
 using Xunit;
 
@@ -22,11 +23,16 @@ public sealed class FingerprintTests
             prints.Add(Fingerprint.Of(new() { Load = new() { Rules = [rule] } }));
         foreach (var match in Variants(() => new MatchSettings()))
             prints.Add(Fingerprint.Of(new() { Match = match }));
-
+        foreach (var maps in Variants(() => new ConfidenceMaps()))
+            prints.Add(Fingerprint.Of(new() { Match = new() { Confidence = maps } }));
+        foreach (var map in Variants(() => new ConfidenceMaps().Quasar with { }))
+            prints.Add(Fingerprint.Of(new() { Match = new() { Confidence = new() { Quasar = map } } }));
         foreach (var arm in Variants(() => new ArmRule { Name = "red" }))
             prints.Add(Fingerprint.Of(new() { Load = new() { Rules = [new() { Arms = [arm] }] } }));
 
-        Assert.Equal(1 + Count<LoadSettings>() + Count<LoadRule>() + Count<ArmRule>() + Count<MatchSettings>(), prints.Count);
+        Assert.Equal(
+            1 + Count<LoadSettings>() + Count<LoadRule>() + Count<ArmRule>() + Count<MatchSettings>() + Count<ConfidenceMaps>() + Count<ConfidenceMap>(),
+            prints.Count);
         Assert.Distinct(prints);
     }
 
@@ -55,6 +61,8 @@ public sealed class FingerprintTests
         _ when type == typeof(double) || type == typeof(double?) => 3.25,
         _ when Nullable.GetUnderlyingType(type) is { IsEnum: true } choice => Enum.GetValues(choice).GetValue(1)!,
         _ when type == typeof(bool) => true,
+        _ when type == typeof(ConfidenceMap) => new ConfidenceMap(-3, 0.1, 1, 0),
+        _ when type == typeof(ConfidenceMaps) => new ConfidenceMaps { Galaxy = new(-4, 0.1, 1, 0) },
         _ when type == typeof(int) || type == typeof(int?) => 7,
         _ when type == typeof(IReadOnlyList<string>) => new[] { "AIRMASS" },
         _ when type == typeof(IReadOnlyList<LoadRule>) => new[] { new LoadRule { Flux = "FLUX" } },

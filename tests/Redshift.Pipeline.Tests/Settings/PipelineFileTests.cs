@@ -1,4 +1,5 @@
 using Redshift.Physics.Units;
+using Redshift.Pipeline.Match.Posterior;
 using Redshift.Pipeline.Results;
 using Redshift.Pipeline.Settings;
 using Xunit;
@@ -50,6 +51,15 @@ public sealed class PipelineFileTests
             expect = "nebula"
             z_range = [0, 1.5]
             priors.quasar = 3
+
+            [calibration.quasar]
+            offset = -1.5
+            near = 0.1
+            far = 0.8
+            misfit = 0.3
+            greatest = 0.95
+            [calibration.other]
+            far = 1
             """;
         var settings = PipelineFile.Parse(text, "all.toml");
 
@@ -65,6 +75,8 @@ public sealed class PipelineFileTests
         Assert.Equal([("blue", null, "HDU 4"), ("red", 900, null)], rule.Arms.Select(static arm => (arm.Name, arm.Resolution, arm.ResolutionPlace)));
         Assert.Equal(("IVAR", AngleUnit.Radian), (settings.Load.Rules[1].InverseVariance, settings.Load.Rules[1].AngleUnit));
         Assert.Equal((ObjectKind.Nebula, 0.0, 1.5, 3.0), (settings.Match.Expect, settings.Match.ZMin, settings.Match.ZMax, settings.Match.PriorQuasar));
+        var usual = new ConfidenceMaps();
+        Assert.Equal(usual with { Quasar = new(-1.5, 0.1, 0.8, 0.3, 0.95), Other = usual.Other with { Far = 1 } }, settings.Match.Confidence);
     }
 
     [Theory]
@@ -92,6 +104,12 @@ public sealed class PipelineFileTests
     [InlineData("[match]\nz_range = 0.5", 2, 11, "the number 0.5", "two numbers")]
     [InlineData("[match]\nexpect = \"comet\"", 2, 10, "the text \"comet\"", "one of star, galaxy, quasar, nebula")]
     [InlineData("[match.priors]\nstar = -1", 2, 8, "the number -1", "a number from 0 to 1000000")]
+    [InlineData("[calibration.star]\noffset = 1", 1, 1, "the unknown key \"star\"", "one of galaxy, quasar, other")]
+    [InlineData("[calibration.galaxy]\nofset = 1", 2, 9, "the unknown key \"ofset\"", "did you mean offset?")]
+    [InlineData("[calibration.galaxy]\nnear = -0.1", 2, 8, "the number -0.1", "a number from 0 to 5")]
+    [InlineData("[calibration.galaxy]\noffset = 21", 2, 10, "the number 21", "a number from -20 to 20")]
+    [InlineData("[calibration.quasar]\ngreatest = 1.0", 2, 12, "the number 1", "a number from 0.5 to 0.999")]
+    [InlineData("[calibration]\nquasar = 0.5", 2, 10, "the number 0.5", "a table")]
     [InlineData("[match]\nexpect = 1979-05-27", 2, 10, "a date", "one of star")]
     public void Parse_refuses_what_it_cannot_use_and_says_where(string text, int line, int column, string found, string expected)
     {

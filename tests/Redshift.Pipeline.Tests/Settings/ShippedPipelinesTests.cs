@@ -1,4 +1,5 @@
 using Redshift.Physics.Units;
+using Redshift.Pipeline.Match.Posterior;
 using Redshift.Pipeline.Results;
 using Redshift.Pipeline.Settings;
 using Redshift.Testing;
@@ -17,7 +18,7 @@ public sealed class ShippedPipelinesTests
     {
         // Its examples are commented out; taking the comment marks away must leave a file that loads, bar alternatives.
         var lines = File.ReadLines(Repository.PathOf("pipelines", "general.toml"))
-            .Select(line => line.StartsWith("# ", StringComparison.Ordinal) && (line.Contains('=') || line.Contains("[[")) ? line[2..] : line)
+            .Select(line => line.StartsWith("# ", StringComparison.Ordinal) && (line.Contains('=') || line.StartsWith("# [", StringComparison.Ordinal)) ? line[2..] : line)
             .Where(line => !line.StartsWith("fwhm_a", StringComparison.Ordinal));
         var settings = PipelineFile.Parse(string.Join('\n', lines), "general.toml");
 
@@ -26,6 +27,7 @@ public sealed class ShippedPipelinesTests
         var rule = Assert.Single(settings.Load.Rules);
         Assert.Equal(("SIGMA", "blue"), (rule.Error, Assert.Single(rule.Arms).Name));
         Assert.Equal(ObjectKind.Galaxy, settings.Match.Expect);
+        Assert.Equal(new ConfidenceMaps(), settings.Match.Confidence);
     }
 
     [Fact]
