@@ -65,6 +65,7 @@ public sealed class ObservationPipeline(PipelineSettings settings)
             ZFile = z,
             ZErr = error * (1 + z),
             SpectralType = fit.Model.Template?.SpectralType ?? "",
+            SpectralTypeErr = SpectralTypeError.Of(match, normalized.Spectra, tolerance),
             Next = decision.Next,
             NextConfidence = decision.Next is null ? null : (1 - confidence) * decision.NextShare,
             Curves = Curves(normalized, native),

@@ -2,8 +2,8 @@ using System.Globalization;
 
 namespace Redshift.Physics.Stars;
 
-/// <summary>Spectral types from temperature and gravity.</summary>
-internal static class SpectralTypes
+/// <summary>Spectral types from temperature and gravity, and where they stand in their sequence.</summary>
+public static class SpectralTypes
 {
     private const string Letters = "OBAFGKM";
 
@@ -23,7 +23,23 @@ internal static class SpectralTypes
         (55, 3980), (60, 3850), (62, 3700), (63, 3600), (64, 3500), (65, 3380), (66, 3250), (68, 2950),
     ];
 
-    public static string Name(StellarParameters p) => p.Variant switch
+    /// <summary>
+    /// Place of a type in its sequence, in subclasses: from O0 on for O to M (G2 is 42), for white dwarfs the number after their letters.
+    /// Null for types outside both sequences, such as carbon stars.
+    /// </summary>
+    public static double? Subclass(string type)
+    {
+        if (type.Length > 2 && IsWhiteDwarf(type))
+            return double.TryParse(type.AsSpan(2), NumberStyles.Float, CultureInfo.InvariantCulture, out var number) ? number : null;
+        return type.Length > 1 && char.IsAsciiDigit(type[1]) && Letters.IndexOf(type[0], StringComparison.Ordinal) is >= 0 and var letter
+            ? (10 * letter) + (type[1] - '0')
+            : null;
+    }
+
+    /// <summary>Whether a type is that of a white dwarf.</summary>
+    public static bool IsWhiteDwarf(string type) => type.StartsWith('D');
+
+    internal static string Name(StellarParameters p) => p.Variant switch
     {
         StellarVariant.WhiteDwarfDA => "DA" + WhiteDwarfSubtype(p.TemperatureK),
         StellarVariant.WhiteDwarfDB => "DB" + WhiteDwarfSubtype(p.TemperatureK),

@@ -40,7 +40,7 @@ public static class CatalogueColumns
         new("kind", "", "src.class", "star, galaxy, quasar, nebula or unknown", CellType.Text, r => Cell.Of(Words.Of(r.Kind))),
         new("kind_confidence", "", Probability + ";src.class", "Probability of the kind", CellType.Real, r => Cell.Fixed(r.KindConfidence, 4)),
         new("spectral_type", "", "src.spType", "Spectral type of the best computed star", CellType.Text, r => Cell.Of(r.SpectralType)),
-        new("spectral_type_err", "", Error + "src.spType", "1 sigma of the spectral type in subclasses", CellType.Real, r => Cell.Fixed(r.SpectralTypeErr, 1)),
+        new("spectral_type_err", "", Error + "src.spType", "1 sigma of the spectral type in subclasses, of which ten make a class; empty for other kinds", CellType.Real, r => Cell.Fixed(r.SpectralTypeErr, 1)),
     ];
 
     private static readonly Column<ObservationResult>[] Quality =

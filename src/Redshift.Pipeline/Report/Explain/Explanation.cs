@@ -86,7 +86,8 @@ public static class Explanation
         : "A " + Words.Of(kind);
 
     private static string Type(ObservationResult result) =>
-        result.SpectralType.Length > 0 ? $", most like type {HarmlessText.Printable(result.SpectralType)}" : "";
+        result.SpectralType.Length == 0 ? "" : $", most like type {HarmlessText.Printable(result.SpectralType)}"
+            + (result.SpectralTypeErr is { } error ? $" ± {Number(error, 1)} subclasses" : "");
 
     private static string Frame(ObservationResult result)
     {
