@@ -10,20 +10,32 @@ internal static class GaussianFilter
     /// <param name="sigma">Standard deviation in grid steps; below 0.3 the input is copied.</param>
     public static float[] Convolve(ReadOnlySpan<float> input, double sigma)
     {
-        if (sigma < 0.3) return input.ToArray();
-        return sigma > 12 ? ConvolveByBoxes(input, sigma) : ConvolveDirectly(input, sigma);
+        var output = new float[input.Length];
+        Convolve(input, sigma, output);
+        return output;
     }
 
-    private static float[] ConvolveDirectly(ReadOnlySpan<float> input, double sigma)
+    /// <summary>Convolves into a given place.</summary>
+    /// <param name="input">Values on an even grid.</param>
+    /// <param name="sigma">Standard deviation in grid steps; below 0.3 the input is copied.</param>
+    /// <param name="output">As many values.</param>
+    public static void Convolve(ReadOnlySpan<float> input, double sigma, Span<float> output)
+    {
+        if (sigma < 0.3) input.CopyTo(output);
+        else if (sigma > 12) ConvolveByBoxes(input, sigma, output);
+        else ConvolveDirectly(input, sigma, output);
+    }
+
+    private static void ConvolveDirectly(ReadOnlySpan<float> input, double sigma, Span<float> output)
     {
         var reach = (int)Math.Ceiling(4 * sigma);
         var kernel = Kernel(sigma, reach);
-        var padded = Pad(input, reach + Kernels.Lanes);
-        var output = new float[input.Length];
+        using var lent = new LentArray<float>(input.Length + 2 * (reach + Kernels.Lanes));
+        var padded = lent.Span;
+        Pad(input, padded, reach + Kernels.Lanes);
         var i = 0;
-        for (; i <= output.Length - Kernels.Lanes; i += Kernels.Lanes) Sum(kernel, padded.AsSpan(i + Kernels.Lanes)).CopyTo(output, i);
-        for (; i < output.Length; i++) output[i] = Sum(kernel, padded.AsSpan(i + Kernels.Lanes))[0];
-        return output;
+        for (; i <= output.Length - Kernels.Lanes; i += Kernels.Lanes) Sum(kernel, padded[(i + Kernels.Lanes)..]).CopyTo(output[i..]);
+        for (; i < output.Length; i++) output[i] = Sum(kernel, padded[(i + Kernels.Lanes)..])[0];
     }
 
     private static Vector256<float> Sum(ReadOnlySpan<float> kernel, ReadOnlySpan<float> values)
@@ -34,29 +46,34 @@ internal static class GaussianFilter
     }
 
     /// <summary>Four running means in a row come within a percent of a Gaussian of the same variance (central limit theorem).</summary>
-    private static float[] ConvolveByBoxes(ReadOnlySpan<float> input, double sigma)
+    private static void ConvolveByBoxes(ReadOnlySpan<float> input, double sigma, Span<float> output)
     {
         const int Passes = 4;
         var half = (int)Math.Round((Math.Sqrt(12 * sigma * sigma / Passes + 1) - 1) / 2);
         var reach = Passes * half;
-        var values = Pad(input, reach);
+        using var lent = new LentArray<float>(input.Length + 2 * reach);
+        var values = lent.Span;
+        Pad(input, values, reach);
         for (var pass = 0; pass < Passes; pass++) values = RunningMean(values, half);
-        return values;
+        values.CopyTo(output);
     }
 
-    private static float[] RunningMean(float[] values, int half)
+    /// <summary>Puts the means over 2·<paramref name="half"/> + 1 values in their place; there are as many fewer as it takes beside the middle.</summary>
+    private static Span<float> RunningMean(Span<float> values, int half)
     {
-        var output = new float[values.Length - 2 * half];
+        var means = values[..^(2 * half)];
         double sum = 0, share = 1.0 / (2 * half + 1);
         for (var i = 0; i <= 2 * half; i++) sum += values[i];
-        output[0] = (float)(sum * share);
-        for (var i = 1; i < output.Length; i++)
+        var leaving = values[0];
+        means[0] = (float)(sum * share);
+        for (var i = 1; i < means.Length; i++)
         {
-            sum += (double)values[i + 2 * half] - values[i - 1];
-            output[i] = (float)(sum * share);
+            sum += (double)values[i + 2 * half] - leaving;
+            leaving = values[i];
+            means[i] = (float)(sum * share);
         }
 
-        return output;
+        return means;
     }
 
     private static float[] Kernel(double sigma, int reach)
@@ -68,12 +85,10 @@ internal static class GaussianFilter
         return kernel;
     }
 
-    private static float[] Pad(ReadOnlySpan<float> input, int reach)
+    private static void Pad(ReadOnlySpan<float> input, Span<float> padded, int reach)
     {
-        var padded = new float[input.Length + 2 * reach];
-        input.CopyTo(padded.AsSpan(reach));
-        padded.AsSpan(0, reach).Fill(input[0]);
-        padded.AsSpan(reach + input.Length).Fill(input[^1]);
-        return padded;
+        input.CopyTo(padded[reach..]);
+        padded[..reach].Fill(input[0]);
+        padded[(reach + input.Length)..].Fill(input[^1]);
     }
 }

@@ -21,6 +21,11 @@ internal sealed class BenchmarkInputs
     private const double LnStep = 69 / 299792.458;
     private const double FirstWavelength = 3600;
 
+    // A number that shares no divisor with the step of seven, so that all come before one comes again.
+    private const int Powers = 40;
+    private const double GreatestPower = 12000;
+    private const double LeastPower = 60;
+
     private readonly SimulatedObservation[] _drawn;
 
     /// <summary>Draws the spectra.</summary>
@@ -45,16 +50,25 @@ internal sealed class BenchmarkInputs
 
     /// <summary>Writes one table file a spectrum into a folder.</summary>
     /// <returns>Their paths.</returns>
-    public List<string> WriteTables(string folder, int spectra)
+    public List<string> WriteTables(string folder, int spectra) => WriteTables(folder, spectra, static _ => []);
+
+    /// <summary>
+    /// Writes one table file a spectrum into a folder, as if each came from another spectrograph: resolving powers from that of an echelle
+    /// to that of a prism, in an order that mixes them. The spectra are the same all the same; only the cost of a mixture is asked for.
+    /// </summary>
+    public void WriteMixedTables(string folder, int spectra) =>
+        WriteTables(folder, spectra, static i => [Card.Of("SPEC_RES", Math.Round(GreatestPower * Math.Pow(LeastPower / GreatestPower, 7 * i % Powers / (Powers - 1.0))))]);
+
+    private List<string> WriteTables(string folder, int spectra, Func<int, Card[]> more)
     {
         Directory.CreateDirectory(folder);
-        return [.. Enumerable.Range(0, spectra).Select(i => WriteTable(Path.Combine(folder, FormattableString.Invariant($"object-{i:00000}.fits")), i))];
+        return [.. Enumerable.Range(0, spectra).Select(i => WriteTable(Path.Combine(folder, FormattableString.Invariant($"object-{i:00000}.fits")), i, more(i)))];
     }
 
-    private string WriteTable(string path, int number)
+    private string WriteTable(string path, int number, Card[] more)
     {
         using var stream = File.Create(path);
-        TableLayouts.PixelARow(stream, Spectrum(number), Observatory.Cards("object", "LATTICE", 150, 2, "2031-03-02T01:00:00", 3600));
+        TableLayouts.PixelARow(stream, Spectrum(number), [.. Observatory.Cards("object", "LATTICE", 150, 2, "2031-03-02T01:00:00", 3600), .. more]);
         return path;
     }
 

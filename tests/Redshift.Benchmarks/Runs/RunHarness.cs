@@ -30,6 +30,7 @@ internal sealed class RunHarness(string program, int jobs)
         var inputs = new BenchmarkInputs(Math.Max(spectra, files));
         var stacks = inputs.WriteStacks(folder.File("stacks"), spectra);
         var tables = inputs.WriteTables(folder.File("tables"), files);
+        inputs.WriteMixedTables(folder.File("mixed"), files);
         var one = inputs.WriteTables(folder.File("one"), 1);
         output.WriteLine(Machine.Describe());
         output.WriteLine(FormattableString.Invariant($"{DateTime.UtcNow:yyyy-MM-dd}, {BenchmarkInputs.Pixels} pixels, survey spectra of mixed kinds, {jobs} worker(s)"));
@@ -40,6 +41,7 @@ internal sealed class RunHarness(string program, int jobs)
         Print(output, "zladder, one file (start-up)", 1, start, start);
         Print(output, "zladder, stacks", spectra, Zladder(folder.File("out-stacks"), folder.File("stacks")), start);
         Print(output, "zladder, single tables", files, Zladder(folder.File("out-tables"), folder.File("tables")), start);
+        Print(output, "zladder, single tables of forty resolutions", files, Zladder(folder.File("out-mixed"), folder.File("mixed")), start);
         MeasureAstropy(output, spectra, stacks, files, tables, one);
         output.WriteLine();
         PrintCorrelation(output);

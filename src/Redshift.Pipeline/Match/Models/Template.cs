@@ -1,4 +1,3 @@
-using System.Collections.Concurrent;
 using Redshift.Physics.Units;
 using Redshift.Pipeline.Numerics;
 using Redshift.Pipeline.Results;
@@ -7,15 +6,18 @@ namespace Redshift.Pipeline.Match.Models;
 
 /// <summary>
 /// A computed spectrum at rest on <see cref="TemplateGrid"/>, its colour taken out: what is left are lines, bands, breaks and jumps.
-/// Broadened copies are made once, on first use, and shared by all workers.
+/// Broadened copies are made on first use and shared by all workers.
 /// </summary>
 internal sealed class Template
 {
     /// <summary>Structure wider than this σ in ln λ is colour, which dust and flux calibration change at will.</summary>
     private const double ColourScale = 0.10;
 
+    // All templates at one level take 40 MB.
+    private static readonly RecentlyUsed<(Template Template, int Level), float[]> Copies =
+        new(48 << 20, static key => key.Template.Broaden(key.Level), static copy => copy.Length * sizeof(float));
+
     private readonly float[] _flattened;
-    private readonly ConcurrentDictionary<int, float[]> _broadened = new();
 
     /// <summary>Takes a computed spectrum.</summary>
     /// <param name="name">What the model is.</param>
@@ -48,8 +50,19 @@ internal sealed class Template
     public Template Spun(double sigmaKmS) => new(this, sigmaKmS);
 
     /// <summary>The flattened flux convolved to a level of <see cref="LineSpreadLevels"/>.</summary>
-    public float[] Broadened(int level) =>
-        _broadened.GetOrAdd(level, l => GaussianFilter.Convolve(_flattened, LineSpreadLevels.Sigma(l) / TemplateGrid.Step));
+    public float[] Broadened(int level) => Copies[(this, level)];
+
+    /// <summary>The same, not kept, for who makes something else of it.</summary>
+    /// <param name="level">The level.</param>
+    /// <param name="into">Receives the values, <see cref="TemplateGrid.Count"/> of them.</param>
+    public void Broaden(int level, Span<float> into) => GaussianFilter.Convolve(_flattened, LineSpreadLevels.Sigma(level) / TemplateGrid.Step, into);
+
+    private float[] Broaden(int level)
+    {
+        var broadened = new float[_flattened.Length];
+        Broaden(level, broadened);
+        return broadened;
+    }
 
     private static float[] Flatten(float[] flux)
     {

@@ -22,14 +22,16 @@ internal static class CellTemplate
     /// <param name="forestShift">ln(1+z) for the depth of the forest, 0 for none.</param>
     public static float[] Relative(Template template, int level, double forestShift = 0)
     {
-        var relative = Sample(template.Broadened(level));
+        using var broadened = new LentArray<float>(TemplateGrid.Count);
+        template.Broaden(level, broadened.Span);
+        var relative = Sample(broadened.Span);
         if (forestShift > 0) Absorb(relative, forestShift);
         var smooth = Smooth(relative);
         for (var j = 0; j < relative.Length; j++) relative[j] = Math.Clamp(relative[j] / Math.Max(smooth[j], 1e-6f) - 1, -1, Tallest);
         return relative;
     }
 
-    private static float[] Sample(float[] fine)
+    private static float[] Sample(ReadOnlySpan<float> fine)
     {
         var cells = new float[Length];
         for (var j = 0; j < Length; j++)

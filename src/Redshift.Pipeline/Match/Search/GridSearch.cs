@@ -55,7 +55,7 @@ internal sealed class GridSearch
         var reach = (int)Math.Ceiling(FastestStarKmS / KmSPerLn / Cells.Step);
         int from = Math.Max(-reach, _firstShift), to = Math.Min(reach, _firstShift + _shifts - 1);
         var peaks = new List<Peak>();
-        var evidence = StarScan.Of(_library.StarTemplates, _cells.SigmaLn).LnEvidence(_cells, from, Math.Max(0, to - from + 1));
+        var evidence = StarScan.Of(_library.StarTemplates, _cells).LnEvidence(_cells, from, Math.Max(0, to - from + 1));
         for (var t = 0; t < evidence.Length; t++)
         {
             var model = _library.Stars[t];

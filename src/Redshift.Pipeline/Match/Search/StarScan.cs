@@ -1,4 +1,3 @@
-using System.Collections.Concurrent;
 using System.Runtime.Intrinsics;
 using Redshift.Pipeline.Match.Models;
 
@@ -10,14 +9,21 @@ internal sealed class StarScan
     /// <summary>Shifts that are summed together: each template is read once for all of them.</summary>
     private const int Together = 4;
 
-    private static readonly ConcurrentDictionary<(IReadOnlyList<Template>, int), StarScan> Prepared = new();
+    /// <summary>The range of cells is rounded outwards to so many, so that observations alike share the templates.</summary>
+    private const int Rounding = 1024;
 
+    // Some 3 MB for optical spectra of one resolution.
+    private static readonly RecentlyUsed<(IReadOnlyList<Template> Templates, int Level, int From, int To), StarScan> Prepared =
+        new(40 << 20, static key => new(key.Templates, key.Level, key.From, key.To), static scan => scan._octets.Sum(static octet => (long)octet.Length * Vector256<byte>.Count));
+
+    private readonly int _start;
     private readonly Vector256<float>[][] _octets;
 
-    private StarScan(IReadOnlyList<Template> templates, int level)
+    private StarScan(IReadOnlyList<Template> templates, int level, int from, int to)
     {
         Count = templates.Count;
-        _octets = [.. templates.Chunk(Vector256<float>.Count).Select(octet => Octet.Interleave([.. octet.Select(t => CellTemplate.Relative(t, level))]))];
+        _start = from;
+        _octets = [.. templates.Chunk(Vector256<float>.Count).Select(octet => Octet.Interleave([.. octet.Select(t => CellTemplate.Relative(t, level)[from..to])]))];
     }
 
     /// <summary>Number of templates.</summary>
@@ -25,9 +31,13 @@ internal sealed class StarScan
 
     /// <summary>The templates at the resolution of data; kept for all observations alike.</summary>
     /// <param name="templates">The templates; the same list for all calls.</param>
-    /// <param name="sigmaLn">σ of the line spread in ln λ.</param>
-    public static StarScan Of(IReadOnlyList<Template> templates, double sigmaLn) =>
-        Prepared.GetOrAdd((templates, LineSpreadLevels.Nearest(sigmaLn)), key => new(key.Item1, key.Item2));
+    /// <param name="cells">The data.</param>
+    public static StarScan Of(IReadOnlyList<Template> templates, Cells cells)
+    {
+        var from = Math.Clamp(cells.First / Rounding * Rounding, 0, CellTemplate.Length);
+        var to = Math.Clamp((cells.First + cells.Count + Rounding - 1) / Rounding * Rounding, from, CellTemplate.Length);
+        return Prepared[(templates, LineSpreadLevels.Nearest(cells.SigmaLn), from, to)];
+    }
 
     /// <summary>ln evidence of each template, one row each, at shifts from a first one on.</summary>
     /// <param name="cells">The data.</param>
@@ -45,17 +55,17 @@ internal sealed class StarScan
     private void Take(Cells cells, int octet, int firstShift, int s, float[][] rows)
     {
         Span<Vector256<float>> found = stackalloc Vector256<float>[Together];
-        Sum(cells, _octets[octet], firstShift + s, found);
+        Sum(cells, _octets[octet], _start, firstShift + s, found);
         for (var k = 0; k < Together && s + k < rows[0].Length; k++)
             for (var lane = 0; lane < Vector256<float>.Count && octet * Vector256<float>.Count + lane < Count; lane++)
                 rows[octet * Vector256<float>.Count + lane][s + k] = found[k][lane];
     }
 
-    private static void Sum(Cells cells, Vector256<float>[] templates, int shift, Span<Vector256<float>> found)
+    private static void Sum(Cells cells, Vector256<float>[] templates, int start, int shift, Span<Vector256<float>> found)
     {
         // At the ends of the range some of the shifts meet the empty margin of the data.
-        int from = Math.Max(0, cells.First + Cells.Margin - shift - Together), to = Math.Min(templates.Length, cells.First + cells.Count - Cells.Margin - shift);
-        var offset = shift - cells.First;
+        int from = Math.Max(0, cells.First + Cells.Margin - shift - Together - start), to = Math.Min(templates.Length, cells.First + cells.Count - Cells.Margin - shift - start);
+        var offset = start + shift - cells.First;
         Vector256<float> n0 = default, n1 = default, n2 = default, n3 = default, d0 = default, d1 = default, d2 = default, d3 = default;
         for (var t = from; t < to; t++)
         {

@@ -1,4 +1,3 @@
-using System.Collections.Concurrent;
 using System.Runtime.Intrinsics;
 using Redshift.Pipeline.Match.Models;
 using Redshift.Pipeline.Numerics;
@@ -7,21 +6,24 @@ namespace Redshift.Pipeline.Match.Search;
 
 /// <summary>
 /// Fourier transforms of up to eight templates and of their squares, cut to a stretch of double cells. Both are of real sequences: the
-/// frequencies up to the middle say all. Kept for observations alike, up to a number of them, as archives may hold any mixture.
+/// frequencies up to the middle say all. Kept for observations alike.
 /// </summary>
 internal sealed class TemplateTransforms
 {
-    /// <summary>Sets that are kept, half a megabyte each.</summary>
-    private const int MostKept = 96;
+    // A quarter of a megabyte each, some ten for each resolution.
+    private static readonly RecentlyUsed<(TemplateRange Range, int Octet, int Level), Vector256<float>[]> Templates =
+        new(32 << 20, static key => Pairs(key.Range, key.Octet, key.Level), static pairs => (long)pairs.Length * Vector256<byte>.Count);
 
-    private static readonly ConcurrentDictionary<(TemplateRange Range, int Octet, int Level), Vector256<float>[]> Templates = new();
-    private static readonly Lock Gate = new();
-    private static readonly Dictionary<(TemplateRange Range, int Octet, int Level, int Start, int Length), TemplateTransforms> Kept = [];
+    // Half a megabyte each.
+    private static readonly RecentlyUsed<(TemplateRange Range, int Octet, int Level, int Start, int Length), TemplateTransforms> Kept =
+        new(32 << 20, static key => new(key.Range, key.Octet, key.Level, key.Start, key.Length), static kept => 4L * kept.Re.Length * Vector256<byte>.Count);
 
     private TemplateTransforms(TemplateRange range, int octet, int level, int start, int length)
     {
-        var cells = Cut(Templates.GetOrAdd((range, octet, level), key => Pairs(key.Range, key.Octet, key.Level)), start, length);
-        var squares = Array.ConvertAll(cells, c => c * c);
+        using LentArray<Vector256<float>> lentCells = new(length), lentSquares = new(length);
+        Span<Vector256<float>> cells = lentCells.Span, squares = lentSquares.Span;
+        Cut(Templates[(range, octet, level)], start, cells);
+        for (var c = 0; c < length; c++) squares[c] = cells[c] * cells[c];
         FourierTransform.OfLength(length).Forward(cells, squares);
         var half = length / 2 + 1;
         (Re, Im, SquareRe, SquareIm) = (new Vector256<float>[half], new Vector256<float>[half], new Vector256<float>[half], new Vector256<float>[half]);
@@ -48,23 +50,7 @@ internal sealed class TemplateTransforms
     /// <param name="level">One of <see cref="LineSpreadLevels"/>.</param>
     /// <param name="start">First double cell.</param>
     /// <param name="length">Number of double cells, a power of two.</param>
-    public static TemplateTransforms Of(TemplateRange range, int octet, int level, int start, int length)
-    {
-        var key = (range, octet, level, start, length);
-        lock (Gate)
-        {
-            if (Kept.TryGetValue(key, out var kept)) return kept;
-        }
-
-        var made = new TemplateTransforms(range, octet, level, start, length);
-        lock (Gate)
-        {
-            if (Kept.Count >= MostKept) Kept.Clear();
-            Kept[key] = made;
-        }
-
-        return made;
-    }
+    public static TemplateTransforms Of(TemplateRange range, int octet, int level, int start, int length) => Kept[(range, octet, level, start, length)];
 
     /// <summary>The templates on all double cells.</summary>
     private static Vector256<float>[] Pairs(TemplateRange range, int octet, int level)
@@ -76,11 +62,10 @@ internal sealed class TemplateTransforms
         return pairs;
     }
 
-    private static Vector256<float>[] Cut(Vector256<float>[] templates, int start, int length)
+    private static void Cut(Vector256<float>[] templates, int start, Span<Vector256<float>> into)
     {
-        var cut = new Vector256<float>[length];
-        int from = Math.Max(0, start), to = Math.Min(templates.Length, start + length);
-        if (from < to) templates.AsSpan(from..to).CopyTo(cut.AsSpan(from - start));
-        return cut;
+        into.Clear();
+        int from = Math.Max(0, start), to = Math.Min(templates.Length, start + into.Length);
+        if (from < to) templates.AsSpan(from..to).CopyTo(into[(from - start)..]);
     }
 }
