@@ -6,19 +6,26 @@ namespace Redshift.Pipeline.Ledger;
 /// <summary>The one writer of a ledger: takes down what the workers report, in commits of a quarter of a second.</summary>
 public sealed class LedgerWriter : IDisposable
 {
-    // A killed run loses no more than this, and what was being measured. A commit waits for the disk, so there must not be many.
-    private static readonly TimeSpan CommitInterval = TimeSpan.FromSeconds(0.25);
+    /// <summary>
+    /// Nothing that was written waits longer for its commit. A killed run loses no more than this, what came while a commit waited for the
+    /// disk, and what was being measured. There must not be many commits, as each waits for the disk.
+    /// </summary>
+    public static readonly TimeSpan CommitInterval = TimeSpan.FromSeconds(0.25);
 
     private readonly LedgerDatabase _database;
+    private readonly TimeProvider _clock;
     private readonly SqliteCommand _begin;
     private readonly SqliteCommand _forget;
     private readonly SqliteCommand _add;
     private readonly SqliteCommand _end;
 
     /// <summary>Makes the writer of a ledger.</summary>
-    public LedgerWriter(LedgerFile ledger)
+    /// <param name="ledger">The ledger.</param>
+    /// <param name="clock">Tells the time between commits; the system's unless given.</param>
+    public LedgerWriter(LedgerFile ledger, TimeProvider? clock = null)
     {
         _database = ledger.Database;
+        _clock = clock ?? TimeProvider.System;
         _begin = Command(
             "UPDATE file SET size = @size, modified = @modified, hash = @hash, fingerprint = @fingerprint, complete = 0 WHERE source = @source",
             "@source", "@size", "@modified", "@hash", "@fingerprint");
@@ -40,10 +47,12 @@ public sealed class LedgerWriter : IDisposable
         while (await more.ConfigureAwait(false))
         {
             _database.Execute("BEGIN IMMEDIATE");
-            var interval = Task.Delay(CommitInterval);
-            while (!interval.IsCompleted && more.IsCompletedSuccessfully && more.Result)
+            var begun = _clock.GetTimestamp();
+            var interval = Task.Delay(CommitInterval, _clock);
+            while (!IsDue(begun) && more.IsCompletedSuccessfully && more.Result)
             {
-                while (entries.TryRead(out var entry))
+                // The clock is looked at before each entry: a stream that never pauses must not put off the commit.
+                while (!IsDue(begun) && entries.TryRead(out var entry))
                 {
                     Write(entry);
                     written(entry);
@@ -66,6 +75,8 @@ public sealed class LedgerWriter : IDisposable
         _end.Dispose();
         _database.RollBack();
     }
+
+    private bool IsDue(long begun) => _clock.GetElapsedTime(begun) >= CommitInterval;
 
     private void Write(LedgerEntry entry)
     {
