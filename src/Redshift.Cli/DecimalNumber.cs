@@ -15,7 +15,7 @@ internal static class DecimalNumber
         var text = result.Tokens[0].Value;
         if (double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out var value) && isAllowed(value))
             return value;
-        result.AddError($"'{text}': expected {expected}");
+        OptionValue.Refuse(result, expected);
         return 0;
     }
 }

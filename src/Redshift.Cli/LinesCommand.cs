@@ -1,4 +1,5 @@
 using System.CommandLine;
+using System.CommandLine.Parsing;
 using System.Globalization;
 using Redshift.Physics.Air;
 using Redshift.Physics.Lines;
@@ -103,12 +104,6 @@ internal sealed class LinesCommand
 
     private static string Lower(string word) => word.ToLowerInvariant();
 
-    private static double ParseRedshift(System.CommandLine.Parsing.ArgumentResult result)
-    {
-        var text = result.Tokens[0].Value;
-        if (double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out var z) && z > -1 && double.IsFinite(z))
-            return z;
-        result.AddError($"'{text}': expected a redshift greater than -1, such as 0.158");
-        return 0;
-    }
+    private static double ParseRedshift(ArgumentResult result) =>
+        DecimalNumber.Parse(result, static z => z > -1 && double.IsFinite(z), "a redshift greater than -1, such as 0.158");
 }

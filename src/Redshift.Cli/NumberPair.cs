@@ -14,8 +14,8 @@ internal static class NumberPair
         if (parts.Length == 2 && TryNumber(parts[0], out var low) && TryNumber(parts[1], out var high)
             && low >= lowest && low < high && high <= highest)
             return (low, high);
-        result.AddError(FormattableString.Invariant(
-            $"'{text}': expected two numbers from {lowest} to {highest}, the lower first, with a comma between, such as 0,1.5"));
+        OptionValue.Refuse(result, FormattableString.Invariant(
+            $"two numbers from {lowest} to {highest}, the lower first, with a comma between, such as 0,1.5"));
         return null;
     }
 

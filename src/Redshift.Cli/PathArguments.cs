@@ -44,7 +44,7 @@ internal sealed class PathArguments
         }
         catch (Exception problem) when (problem is IOException or UnauthorizedAccessException)
         {
-            throw new UsageException($"the list {list} cannot be read: {problem.Message}");
+            throw new UsageException($"--from: found no list that can be opened at {list}; expected a file with one path a line, or - for standard input");
         }
     }
 }

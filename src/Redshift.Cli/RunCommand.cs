@@ -74,7 +74,7 @@ internal sealed class RunCommand
         var text = result.Tokens[0].Value;
         if (Shard.TryParse(text, out var shard))
             return shard;
-        result.AddError($"'{text}': expected a part and the number of parts, such as 3/7");
+        OptionValue.Refuse(result, "a part and the number of parts, such as 3/7; the first part is 1, the last one here 7");
         return null;
     }
 }

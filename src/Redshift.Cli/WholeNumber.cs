@@ -21,7 +21,7 @@ internal static class WholeNumber
         var text = result.Tokens.Count == 1 ? result.Tokens[0].Value : "";
         if (int.TryParse(text, NumberStyles.None, CultureInfo.InvariantCulture, out var value) && value >= least)
             return value;
-        result.AddError($"'{text}': expected a whole number, {least} or more");
+        OptionValue.Refuse(result, $"a whole number, {least} or more");
         return null;
     }
 }

@@ -16,7 +16,7 @@ internal static class WordOption
             {
                 var word = result.Tokens[0].Value;
                 if (!words.Contains(word))
-                    result.AddError($"'{word}': {name} expects one of {string.Join(", ", words)}");
+                    OptionValue.Refuse(result, $"one of {string.Join(", ", words)}");
                 return word;
             },
         };

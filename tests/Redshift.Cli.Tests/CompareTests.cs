@@ -64,7 +64,7 @@ public sealed class CompareTests : IDisposable
         var places = Write("places.csv", "ra,dec,z\n1,2,0.1\n");
         Check($"nothing pairs the rows of {names} and {places}: both need a column source, target, or ra_deg and dec_deg", names, places);
         Check($"--by target: {places} has no such column", names, places, "--by", "target");
-        Check("'wide': expected a radius in arcseconds, above 0 and up to 3600", names, names, "--radius", "wide");
+        Check("--radius: found 'wide'; expected a radius in arcseconds, above 0 and up to 3600", names, names, "--radius", "wide");
         Check("/no/old: found no file that can be opened; expected a table in CSV or FITS", "/no/old", names);
         Check("there is no option --jsno", "--jsno", names);
     }

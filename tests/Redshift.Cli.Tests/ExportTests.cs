@@ -67,7 +67,7 @@ public sealed class ExportTests : IClassFixture<ExportTests.OneRun>, IDisposable
         Check("--where, at letter 1: found 'zz'; expected a column, perhaps z", _run.Out, "--format", "csv", "--where", "zz > 1", "-o", _folder.File("x"));
         Check("--where needs --output FILE: a part of the rows must not pass for the whole table", _run.Out, "--format", "csv", "--where", "z > 1");
         Check($"{_folder.Path}: found no ledger.db; expected the output folder of a run", _folder.Path, "--format", "csv");
-        Check("'xml': --format expects one of csv, fits, parquet, votable", _run.Out, "--format", "xml");
+        Check("--format: found 'xml'; expected one of csv, fits, parquet, votable", _run.Out, "--format", "xml");
         Check("Option '--format' is required.", _run.Out);
         Assert.Empty(Directory.GetFiles(_folder.Path));
     }

@@ -43,9 +43,9 @@ public sealed class InjectTests : IDisposable
     }
 
     [Theory]
-    [InlineData("--count 0", "'0': expected a whole number, 1 or more")]
+    [InlineData("--count 0", "--count: found '0'; expected a whole number, 1 or more")]
     [InlineData("--count 100001", "--count 100001: expected 100000 at most")]
-    [InlineData("--seed -1", "'-1': expected a whole number, 0 or more")]
+    [InlineData("--seed -1", "--seed: found '-1'; expected a whole number, 0 or more")]
     [InlineData("--cuont 3", "there is no option --cuont")]
     public void Wrong_usage_is_said_in_one_line_with_status_2(string arguments, string message)
     {

@@ -99,7 +99,32 @@ public sealed class RunTests : IDisposable
         var outcome = Zladder.Run("run", _folder.Spectra, "--out", _folder.At("a.txt"));
 
         Assert.Equal(3, outcome.Status);
-        Assert.StartsWith("zladder: could not go on: ", outcome.Errors, StringComparison.Ordinal);
+        Assert.Equal($"zladder: could not go on: {_folder.At("a.txt")}: found a file; expected a folder to write to, or a name for a new one\n", outcome.Errors);
+    }
+
+    [Theory]
+    [InlineData("/proc/zladder", "a place where no folder may be made")]
+    [InlineData("/proc/1", "a folder that may not be written to")]
+    public void A_folder_that_cannot_be_written_is_named(string folder, string obstacle)
+    {
+        var outcome = Zladder.Run("run", _folder.Spectra, "--out", folder);
+
+        Assert.Equal(3, outcome.Status);
+        Assert.Equal($"zladder: could not go on: {folder}: found {obstacle}; expected a folder to write to, or a name for a new one\n", outcome.Errors);
+    }
+
+    [Fact]
+    public void A_file_that_is_cut_short_says_where_and_by_how_much()
+    {
+        _folder.WriteFits("cut/whole.fits");
+        var bytes = File.ReadAllBytes(_folder.At("cut/whole.fits"));
+        File.WriteAllBytes(_folder.At("cut/data.fits"), bytes[..2980]);
+        File.WriteAllBytes(_folder.At("cut/header.fits"), bytes[..500]);
+        var outcome = Zladder.Run("run", _folder.At("cut"), "--out", _folder.Out());
+
+        Assert.Equal(0, outcome.Status);
+        Assert.Matches("(?m)^rejected: data.fits: HDU 0: found 100 bytes: the file is cut short; expected [0-9]+ bytes of data$", outcome.Errors);
+        Assert.Matches("(?m)^rejected: header.fits: HDU 0: found the end of the file: the file is cut short; expected an END card$", outcome.Errors);
     }
 
     [Fact]

@@ -46,7 +46,7 @@ public sealed class WatchTests : IDisposable
         var outcome = Zladder.Run("watch", _folder.Spectra, "--out", _folder.Out(), "--every", "never");
 
         Assert.Equal(2, outcome.Status);
-        Assert.StartsWith("zladder: 'never': expected a number of seconds from 0.1 to 3600\n", outcome.Errors, StringComparison.Ordinal);
+        Assert.StartsWith("zladder: --every: found 'never'; expected a number of seconds from 0.1 to 3600\n", outcome.Errors, StringComparison.Ordinal);
     }
 
     private void WaitFor(string source)

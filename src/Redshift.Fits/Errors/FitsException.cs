@@ -9,6 +9,15 @@ public abstract class FitsException : Exception
     private protected FitsException(FitsLocation location, string message, Exception? inner = null)
         : base(Printable($"{location}: {message}"), inner) => Location = location;
 
+    private protected FitsException(FitsLocation location, string expected, string found, string what, Exception? inner = null)
+        : this(location, $"{what}expected {expected}, found {found}", inner) => (Expected, Found) = (Printable(expected), Printable(found));
+
+    /// <summary>What should be there, where the message says so; otherwise null.</summary>
+    public string? Expected { get; }
+
+    /// <summary>What is there instead, where the message says so; otherwise null.</summary>
+    public string? Found { get; }
+
     /// <summary>Where the trouble was found.</summary>
     public FitsLocation Location { get; }
 

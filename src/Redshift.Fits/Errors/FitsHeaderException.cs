@@ -4,7 +4,7 @@ namespace Redshift.Fits;
 public sealed class FitsHeaderException : FitsException
 {
     internal FitsHeaderException(FitsLocation location, string expected, string found)
-        : base(location, $"expected {expected}, found {found}")
+        : base(location, expected, found, "")
     {
     }
 }

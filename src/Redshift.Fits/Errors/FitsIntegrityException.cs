@@ -4,7 +4,7 @@ namespace Redshift.Fits;
 public sealed class FitsIntegrityException : FitsException
 {
     internal FitsIntegrityException(FitsLocation location, string expected, string found, Exception? inner = null)
-        : base(location, $"expected {expected}, found {found}", inner)
+        : base(location, expected, found, "", inner)
     {
     }
 }

@@ -4,7 +4,7 @@ namespace Redshift.Fits;
 public sealed class FitsTruncatedException : FitsException
 {
     internal FitsTruncatedException(FitsLocation location, string expected, string found)
-        : base(location, $"the file is cut short: expected {expected}, found {found}")
+        : base(location, expected, found, "the file is cut short: ")
     {
     }
 }

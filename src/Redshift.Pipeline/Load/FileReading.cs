@@ -83,7 +83,7 @@ internal sealed class FileReading(string source, LoadSettings settings) : IDispo
         }
         catch (FitsException damage)
         {
-            return refuse(new(source, row, PlaceOf(damage.Location), Trouble(damage), "a sound FITS file"));
+            return refuse(new(source, row, PlaceOf(damage.Location), Found(damage), damage.Expected ?? "a sound FITS file"));
         }
         catch (Exception trouble) when (trouble is IOException or UnauthorizedAccessException or InvalidDataException or NotSupportedException)
         {
@@ -95,6 +95,9 @@ internal sealed class FileReading(string source, LoadSettings settings) : IDispo
             return refuse(new(source, row, "file", $"sizes that cannot be: {excess.Message}", "a spectrum"));
         }
     }
+
+    private static string Found(FitsException damage) =>
+        damage is FitsTruncatedException ? $"{damage.Found}: the file is cut short" : damage.Found ?? Trouble(damage);
 
     /// <summary>The message without its location, which names the file by a path of this machine.</summary>
     private static string Trouble(FitsException damage) => damage.Message[Math.Min(damage.Message.Length, $"{damage.Location}: ".Length)..];

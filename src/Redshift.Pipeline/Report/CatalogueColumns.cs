@@ -51,7 +51,7 @@ public static class CatalogueColumns
         new("resolution", "", "spect.resolution", "Median resolving power, wavelength over full width at half maximum", CellType.Real, r => Cell.Fixed(r.Resolution, 1)),
         new("resolution_from", "", "meta.note;spect.resolution", "Where the resolution comes from: pipeline, file, keyword or estimate", CellType.Text, r => Cell.Of(Words.Of(r.ResolutionFrom))),
         new("lines_expected", "", "meta.number;spect.line", "Lines of the answer that should be detectable in this spectrum", CellType.Whole, r => Cell.Of(r.LinesExpected)),
-        new("lines_matched", "", "meta.number;spect.line", "Lines of the answer that were measured", CellType.Whole, r => Cell.Of(r.LinesMatched)),
+        new("lines_matched", "", "meta.number;spect.line", "How many of these were found", CellType.Whole, r => Cell.Of(r.LinesMatched)),
         new("zero_point_km_s", "km/s", "arith.zp;spect.dopplerVeloc", "Error of the wavelength zero point from the ladder fit", CellType.Real, r => Cell.Fixed(r.ZeroPointKmS, 3)),
         new("zero_point_err_km_s", "km/s", Error + "arith.zp;spect.dopplerVeloc", "1 sigma of the zero point", CellType.Real, r => Cell.Fixed(r.ZeroPointErrKmS, 3)),
         new("next_z", "", Redshift, "Redshift of the best rival in the frame of z", CellType.Real, r => Cell.Fixed(NextZ(r), 7)),

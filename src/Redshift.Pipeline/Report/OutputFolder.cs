@@ -9,12 +9,18 @@ public sealed class OutputFolder : IDisposable
     /// <param name="path">The folder.</param>
     /// <exception cref="FolderInUseException">Another run writes there.</exception>
     /// <exception cref="IOException">The folder cannot be written.</exception>
-    /// <exception cref="UnauthorizedAccessException">The folder cannot be written.</exception>
     public OutputFolder(string path)
     {
-        Directory.CreateDirectory(path);
         Path = path;
-        _lock = Lock(path);
+        try
+        {
+            Directory.CreateDirectory(path);
+            _lock = Lock(path);
+        }
+        catch (Exception problem) when (problem is UnauthorizedAccessException or FileNotFoundException or DirectoryNotFoundException || File.Exists(path))
+        {
+            throw new IOException($"{path}: found {Obstacle(path)}; expected a folder to write to, or a name for a new one", problem);
+        }
     }
 
     /// <summary>The folder.</summary>
@@ -22,6 +28,11 @@ public sealed class OutputFolder : IDisposable
 
     /// <inheritdoc/>
     public void Dispose() => _lock.Dispose();
+
+    private static string Obstacle(string path) =>
+        File.Exists(path) ? "a file"
+        : Directory.Exists(path) ? "a folder that may not be written to"
+        : "a place where no folder may be made";
 
     private static FileStream Lock(string folder)
     {

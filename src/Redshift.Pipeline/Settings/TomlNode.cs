@@ -18,7 +18,7 @@ internal sealed record TomlNode(string File, int Line, int Column, object? Value
     {
         var document = SyntaxParser.Parse(text, file, validate: true);
         foreach (var problem in document.Diagnostics)
-            throw new SettingsException(file, problem.Span.Start.Line + 1, problem.Span.Start.Column + 1, problem.Message, "valid TOML");
+            throw NoToml(text, file, problem.Span.Start);
 
         var root = new TomlNode(file, 1, 1, NewTable());
         AddAll(root, document.KeyValues, file);
@@ -42,6 +42,11 @@ internal sealed record TomlNode(string File, int Line, int Column, object? Value
     /// <summary>The error that this node is not what was expected.</summary>
     public SettingsException Unlike(string expected, string? found = null) =>
         new(File, Line, Column, found ?? Describe(), expected);
+
+    // The parser speaks of tokens; who wrote the line sees what is wrong in it.
+    private static SettingsException NoToml(string text, string file, TextPosition place) => new(
+        file, place.Line + 1, place.Column + 1, $"the line \"{text.Split('\n')[place.Line].Trim()}\"",
+        "TOML: [section], key = number, key = \"text\", or # and a remark");
 
     private static Dictionary<string, TomlNode> NewTable() => new(StringComparer.Ordinal);
 

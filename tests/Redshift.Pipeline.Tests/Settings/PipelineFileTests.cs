@@ -121,16 +121,18 @@ public sealed class PipelineFileTests
     }
 
     [Theory]
-    [InlineData("[read\n", 1)]
-    [InlineData("[read]\nresolution = = 5", 2)]
-    [InlineData("[read]\nresolution = 5\nresolution = 6", 3)]
-    [InlineData("[read]\n[match]\n[read]\n", 3)]
-    public void Parse_refuses_what_is_not_toml(string text, int line)
+    [InlineData("[read\n", 1, "[read")]
+    [InlineData("[read]\nresolution = = 5", 2, "resolution = = 5")]
+    [InlineData("[read]\r\n  medium = \"air\r\n", 2, "medium = \"air")]
+    [InlineData("[read]\nresolution = 5\nresolution = 6", 3, "resolution = 6")]
+    [InlineData("[read]\n[match]\n[read]\n", 3, "[read]")]
+    public void Parse_refuses_what_is_not_toml_and_shows_the_line(string text, int line, string shown)
     {
         var problem = Assert.Throws<SettingsException>(() => PipelineFile.Parse(text, "my.toml"));
 
         Assert.Equal(line, problem.Line);
-        Assert.EndsWith("expected valid TOML", problem.Message, StringComparison.Ordinal);
+        Assert.EndsWith(
+            $": found the line \"{shown}\"; expected TOML: [section], key = number, key = \"text\", or # and a remark", problem.Message, StringComparison.Ordinal);
     }
 
     [Fact]

@@ -131,10 +131,14 @@ public static class Explanation
         }
 
         output.WriteLine();
-        output.WriteLine($"Why: what each line adds to the ln likelihood, over a spectrum without lines ({result.LinesMatched} of "
-            + $"{result.LinesExpected} expected lines found)");
+        output.WriteLine($"Why: what each line adds to the ln likelihood, over a spectrum without lines ({Expected(result)})");
         table.Write(output, Indent);
     }
+
+    // The model need not be sure of a line that is found, so that more lines may be listed than are expected.
+    private static string Expected(ObservationResult result) => "lines that have to show: " + (result.LinesExpected == 0
+        ? "none"
+        : string.Create(CultureInfo.InvariantCulture, $"{result.LinesMatched} of {result.LinesExpected} found"));
 
     private static Cell Gain(double? gain) => Cell.Fixed(gain, 1);
 

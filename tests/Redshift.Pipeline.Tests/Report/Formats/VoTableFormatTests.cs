@@ -41,7 +41,7 @@ public sealed class VoTableFormatTests : IDisposable
         1.4 catalogue 3 | Redshifts, one row a spectrum
         source char * None meta.id;meta.file | File below the common parent of all inputs
         velocity_km_s double None km / s spect.dopplerVeloc.opt | c times z
-        lines_matched int None None meta.number;spect.line | Lines of the answer that were measured
+        lines_matched int None None meta.number;spect.line | How many of these were found
         Z_2 char * None meta.note | Header card Z as it stands in the file
 
         """,
