@@ -11,15 +11,19 @@ namespace Redshift.Pipeline.Match;
 /// <summary>The match stage: search over all redshifts, exact fits of the leaders, posterior.</summary>
 internal sealed class Matcher(MatchSettings settings)
 {
-    /// <summary>Where models turn out to be worse than this share, the search is repeated knowing it.</summary>
-    private const double SearchAgain = 0.1;
+    /// <summary>Where models turn out so wrong that less than this share of the information counts, the search is repeated knowing it.</summary>
+    private const double SearchAgain = 0.85;
 
-    /// <summary>A peak so far below the best, in units of the best's own ln evidence and in ln, is not climbed.</summary>
+    /// <summary>A peak so far below the best, in units of the best's own ln evidence and in ln, is no rival.</summary>
     private const double HopelessShare = 0.35;
-    private const double Hopeless = 30;
+    private const double Hopeless = 15;
 
-    /// <summary>Peaks of each kind that are climbed however far below, and those that are fitted in full after a first look.</summary>
-    private const int AlwaysClimbed = 2;
+    /// <summary>A rival so far below the best in ln weight is not climbed, a share of the best's ln evidence allowed for what a climb may add.</summary>
+    private const double Negligible = 12;
+    private const double MostGained = 0.15;
+
+    /// <summary>Peaks of each kind that are rivals however far below, and those that are fitted in full after a first look.</summary>
+    private const int AlwaysRivals = 2;
     private const int FittedInFull = 6;
 
     /// <summary>ln evidence of a galaxy behind gas from which the gas may belong to something in front of a quasar.</summary>
@@ -46,15 +50,14 @@ internal sealed class Matcher(MatchSettings settings)
         var runs = observation.Spectra.Select(s => PixelRun.Binned(s, cell)).ToList();
         var peaks = Search(observation, ModelError.Uniform);
         if (peaks.Count == 0) return null;
-        var (error, leaders) = Learn(peaks, runs, cell);
-        if (error.Greatest > SearchAgain) leaders = Distinct(leaders.Concat(Search(observation, error)));
+        var before = FitPixels.Build(runs, ModelError.Uniform, Cells.Step);
+        var (error, leaders) = Learn(peaks, before, runs, cell);
         var pixels = FitPixels.Build(runs, error, Cells.Step);
         var fit = new ModelFit(pixels);
-        var refined = Climb(fit, leaders, cell);
+        if (pixels.Information < SearchAgain * before.Information) leaders = Distinct(leaders.Concat(Exact(fit, Search(observation, error), cell)));
+        var refined = Climb(fit, Leaders(InFull(fit, leaders)), cell);
         refined.AddRange(BehindGas(fit, refined, cell));
-        var best = refined.MaxBy(r => r.LnEvidence)!;
-        fit.Fit(best.Model, best.LnShift);
-        var excess = ResidualExcess.Measure(pixels, fit.Curves().Model);
+        var excess = fit.Excess(refined.MaxBy(r => r.LnEvidence)!);
         var hypotheses = refined.Select(r => r.Soften(excess))
             .Select(r => new Hypothesis(r, r.LnVolume + RedshiftPrior.LnDensity(r.Model.Kind, r.LnShift, observation.Resolution, observation.SnrPixel, settings)))
             .Where(h => double.IsFinite(h.LnWeight)).OrderByDescending(h => h.LnWeight).ToList();
@@ -66,16 +69,18 @@ internal sealed class Matcher(MatchSettings settings)
         new GridSearch(Cells.Build(observation.Spectra, error), settings).Peaks();
 
     /// <summary>Measures the model error on the best model of a first round, and keeps the peaks that are worth a second.</summary>
-    private static (ModelError Error, List<Peak> Leaders) Learn(List<Peak> peaks, List<PixelRun> runs, double cell)
+    private static (ModelError Error, List<Peak> Leaders) Learn(List<Peak> peaks, FitPixels pixels, List<PixelRun> runs, double cell)
     {
-        var pixels = FitPixels.Build(runs, ModelError.Uniform, Cells.Step);
         var fit = new ModelFit(pixels);
-        var exact = WithVariants(fit, InFull(fit, FirstLook(fit, Settle(fit, peaks, cell))));
+        var exact = Exact(fit, peaks, cell);
         var best = exact.MaxBy(p => p.LnEvidence);
         var climbed = Refinement.Climb(fit, best.Model, best.LnShift, 0.5 * cell);
         fit.Fit(climbed.Model, climbed.LnShift);
         return (ModelError.Measure(pixels, runs, fit, climbed.LnShift), Leaders(exact));
     }
+
+    /// <summary>The peaks of a search worth an exact fit, with the ln evidence that it finds.</summary>
+    private static List<Peak> Exact(ModelFit fit, List<Peak> peaks, double cell) => WithVariants(fit, InFull(fit, FirstLook(fit, Settle(fit, peaks, cell))));
 
     /// <summary>
     /// The best peaks of each kind by fits without partners, and the first ones of whoever found them: a template that is wrong on its own
@@ -115,7 +120,7 @@ internal sealed class Matcher(MatchSettings settings)
     private static List<Peak> Distinct(IEnumerable<Peak> peaks) => [.. peaks.DistinctBy(p => (p.Model, Math.Round(p.LnShift / Cells.Step)))];
 
     private static List<Peak> Leaders(List<Peak> peaks) =>
-        [.. Promising(peaks).Union(peaks.GroupBy(p => p.Model.Kind).SelectMany(g => g.OrderByDescending(p => p.LnEvidence).Take(AlwaysClimbed)))];
+        [.. Promising(peaks).Union(peaks.GroupBy(p => p.Model.Kind).SelectMany(g => g.OrderByDescending(p => p.LnEvidence).Take(AlwaysRivals)))];
 
     private static List<Peak> Promising(List<Peak> peaks)
     {
@@ -123,10 +128,15 @@ internal sealed class Matcher(MatchSettings settings)
         return peaks.FindAll(p => p.LnEvidence > best - Hopeless - HopelessShare * Math.Abs(best));
     }
 
-    private static List<Refined> Climb(ModelFit fit, List<Peak> peaks, double cell) =>
-        Leaders(WithVariants(fit, InFull(fit, FirstLook(fit, Settle(fit, peaks, cell)))))
-            .ConvertAll(p => Refinement.Climb(fit, p.Model, p.LnShift, 0.5 * cell))
-            .Aggregate(new List<Refined>(), WithNewTop);
+    /// <summary>Climbs the best peak, and those that could still come within reach of it; the others count as they are.</summary>
+    private static List<Refined> Climb(ModelFit fit, List<Peak> peaks, double cell)
+    {
+        var first = peaks.MaxBy(p => p.LnEvidence);
+        var best = Refinement.Climb(fit, first.Model, first.LnShift, 0.5 * cell);
+        var least = best.LnEvidence - Negligible * fit.Excess(best) - MostGained * Math.Abs(best.LnEvidence);
+        Refined Rival(Peak p) => p.LnEvidence < least ? new(p.Model, p.LnShift, cell, p.LnEvidence) : Refinement.Climb(fit, p.Model, p.LnShift, 0.5 * cell);
+        return peaks.ConvertAll(p => p == first ? best : Rival(p)).Aggregate(new List<Refined>(), WithNewTop);
+    }
 
     /// <summary>Two climbs of one model to the same top are one.</summary>
     private static List<Refined> WithNewTop(List<Refined> tops, Refined next)
@@ -141,7 +151,7 @@ internal sealed class Matcher(MatchSettings settings)
         var gas = refined.Where(r => r.Model.BehindOwnGas && r.LnEvidence > PlainGas).MaxBy(r => r.LnEvidence);
         if (gas is null) return [];
         return refined.FindAll(r => r.Model.Kind == ObjectKind.Quasar && r.LnShift > gas.LnShift + WellInFront)
-            .OrderByDescending(r => r.LnEvidence).Take(AlwaysClimbed)
+            .OrderByDescending(r => r.LnEvidence).Take(AlwaysRivals)
             .Select(r => Refinement.Climb(fit, new InterveningGas(gas.LnShift).Before(r.Model), r.LnShift, 0.5 * cell)).ToList();
     }
 

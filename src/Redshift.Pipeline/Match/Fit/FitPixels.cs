@@ -38,6 +38,9 @@ internal sealed class FitPixels
     /// <summary>Inverse variance with the model error.</summary>
     public float[] Weight { get; }
 
+    /// <summary>Σ weight × continuum²: what the pixels can say of models that multiply the continuum.</summary>
+    public double Information => Enumerable.Range(0, Count).Sum(p => (double)Weight[p] * Continuum[p] * Continuum[p]);
+
     public float[] SigmaLn { get; }
 
     /// <summary>Smooth continuum, floored at a share of the noise so that priors on line strengths stay proper.</summary>

@@ -106,6 +106,13 @@ internal sealed class ModelFit
         return (model, smooth);
     }
 
+    /// <summary>How much too sharp the likelihood is, see <see cref="ResidualExcess"/>, by what a model leaves over.</summary>
+    public double Excess(Refined best)
+    {
+        Fit(best.Model, best.LnShift);
+        return ResidualExcess.Measure(_pixels, Curves().Model);
+    }
+
     private void Render(FitModel model, double lnShift)
     {
         if (model.Template is null) _ones.CopyTo(_template, 0);

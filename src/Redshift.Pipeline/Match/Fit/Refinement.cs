@@ -1,3 +1,5 @@
+using Redshift.Pipeline.Results;
+
 namespace Redshift.Pipeline.Match.Fit;
 
 /// <summary>A model at its best redshift near a peak.</summary>
@@ -33,9 +35,12 @@ internal static class Refinement
             {
                 var direction = high > low ? 1 : -1;
                 lnShift += direction * step;
+                // Of broad lines the search tells the place only roughly: their steps double, the two points behind the new middle lying wider apart.
+                var behind = middle;
+                if (model.Kind == ObjectKind.Quasar) (behind, step) = (Math.Min(low, high), 2 * step);
                 (low, middle, high) = direction > 0
-                    ? (middle, high, fit.LnEvidence(model, lnShift + step))
-                    : (fit.LnEvidence(model, lnShift - step), low, middle);
+                    ? (behind, high, fit.LnEvidence(model, lnShift + step))
+                    : (fit.LnEvidence(model, lnShift - step), low, behind);
                 continue;
             }
 
