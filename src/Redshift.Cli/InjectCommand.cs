@@ -1,7 +1,6 @@
 using System.CommandLine;
 using Redshift.Pipeline.Batch;
 using Redshift.Pipeline.Inject;
-using Redshift.Pipeline.Observations;
 using Redshift.Pipeline.Report;
 using Redshift.Pipeline.Report.Plots;
 
@@ -29,6 +28,14 @@ internal sealed class InjectCommand
     private readonly Option<int?> _jobs = JobsOption.Create();
     private readonly Option<string?> _csv = new("--csv") { Description = "Write a table with a row for every object", HelpName = "FILE" };
     private readonly Option<string?> _plot = new("--plot") { Description = "Draw what is recovered", HelpName = "PNG" };
+
+    private readonly Option<string?> _calibration = new("--calibration")
+    {
+        Description = FormattableString.Invariant(
+            $"Fit the confidences to what is recovered, and write them as part of a pipeline file; {Recalibration.LeastObjects} objects or more"),
+        HelpName = "FILE",
+    };
+
     private readonly Option<bool> _json = new("--json") { Description = "Print JSON" };
 
     private InjectCommand()
@@ -37,7 +44,7 @@ internal sealed class InjectCommand
         foreach (var option in new Option[] { _count, _seed })
             _command.Add(option);
         _shared = new(_command);
-        foreach (var option in new Option[] { _jobs, _csv, _plot, _json })
+        foreach (var option in new Option[] { _jobs, _csv, _plot, _calibration, _json })
             _command.Add(option);
         _command.SetAction(RunAsync);
     }
@@ -49,32 +56,60 @@ internal sealed class InjectCommand
     {
         // From here on the caller's thread is free to wait for an interrupt.
         await Task.Yield();
-        var count = parsed.GetValue(_count) ?? UsualCount;
-        if (count > MostCount)
-            throw new UsageException(FormattableString.Invariant($"--count {count}: expected {MostCount} at most"));
+        var count = Count(parsed);
         var seed = (ulong)(parsed.GetValue(_seed) ?? UsualSeed);
+        var settings = _shared.Settings(parsed);
         var files = InputFiles.Find(_paths.Read(parsed), null);
-        using var run = new InjectionRun(_shared.Settings(parsed), JobsOption.Read(_jobs, parsed));
-        run.Read(files, seed, SayReject, token);
-        if (run.Givers == 0)
-        {
-            Console.Error.WriteLine("zladder: no spectrum can be used, so there is nothing to put objects into");
-            return ExitCode.Unusable;
-        }
-
         // Begun before the long work, so that a path which cannot be written is heard of at once.
         using var table = parsed.GetValue(_csv) is { } path ? new CsvTable<Injection>(path, InjectionColumns.All) : null;
-        var injections = run.Inject(count, seed, token);
+        using var calibration = parsed.GetValue(_calibration) is { } toml ? new CalibrationFile(toml) : null;
+        using var run = new InjectionRun(settings, JobsOption.Read(_jobs, parsed));
+        Read(run, files, seed, token);
+        if (run.Givers == 0)
+            return Refuse("no spectrum can be used, so there is nothing to put objects into");
+        var injections = Inject(run, count, seed, token);
         foreach (var injection in injections)
             table?.Add(injection);
         table?.Complete();
-        Report(parsed, new(injections), run.Givers, seed);
+        var maps = calibration is null ? [] : Recalibration.Of(injections, settings.Match);
+        var recovery = new Recovery(injections);
+        var report = new InjectionReport(recovery, run.Givers, seed, maps);
+        Print(parsed, report, recovery);
+        return calibration is null ? ExitCode.Done : Write(calibration, maps, report.Origin);
+    }
+
+    private static int Write(CalibrationFile calibration, IReadOnlyList<RecalibratedMap> maps, string origin)
+    {
+        if (maps.All(map => map.State == MapState.TooFew))
+            return Refuse("no calibration written: too few answers, or too few right or wrong ones; try more objects (--count)");
+        calibration.Complete(maps, origin);
         return ExitCode.Done;
     }
 
-    private void Report(ParseResult parsed, Recovery recovery, int givers, ulong seed)
+    private int Count(ParseResult parsed)
     {
-        var report = new InjectionReport(recovery, givers, seed);
+        var count = parsed.GetValue(_count) ?? UsualCount;
+        if (count > MostCount)
+            throw new UsageException(FormattableString.Invariant($"--count {count}: expected {MostCount} at most"));
+        if (parsed.GetValue(_calibration) is not null && count < Recalibration.LeastObjects)
+            throw new UsageException(FormattableString.Invariant($"--calibration with {count} objects: expected --count {Recalibration.LeastObjects} or more"));
+        return count;
+    }
+
+    private static void Read(InjectionRun run, IReadOnlyList<InputFile> files, ulong seed, CancellationToken token)
+    {
+        using var progress = new CountProgress("spectra stripped of their objects");
+        run.Read(files, seed, reject => progress.Say("rejected: " + reject), progress.Step, token);
+    }
+
+    private static IReadOnlyList<Injection> Inject(InjectionRun run, int count, ulong seed, CancellationToken token)
+    {
+        using var progress = new CountProgress("objects measured");
+        return run.Inject(count, seed, progress.Step, token);
+    }
+
+    private void Print(ParseResult parsed, InjectionReport report, Recovery recovery)
+    {
         if (parsed.GetValue(_json))
             Console.WriteLine(report.BuildJson());
         else
@@ -83,5 +118,9 @@ internal sealed class InjectCommand
             RecoveryPicture.Save(recovery, picture);
     }
 
-    private static void SayReject(Reject reject) => Console.Error.WriteLine("rejected: " + HarmlessText.Printable(reject.ToString()));
+    private static int Refuse(string message)
+    {
+        Console.Error.WriteLine("zladder: " + message);
+        return ExitCode.Unusable;
+    }
 }

@@ -56,7 +56,7 @@ internal sealed class Session : IDisposable
     public async Task<int> MeasureAsync(IEnumerable<InputFile> files, bool again, bool verify, CancellationToken token)
     {
         var plan = WorkPlan.Make(Ledger, files, _settings, again, verify, _plots is null ? null : _plots.Has, _shard);
-        using var progress = _progress = Progress.Start(plan.Bytes);
+        using var progress = _progress = new(plan.Bytes);
         try
         {
             await new RecordedRun(_batch, Ledger, progress.Update).RunAsync(plan.Files, token).ConfigureAwait(false);

@@ -1,3 +1,5 @@
+using System.Diagnostics;
+using System.Globalization;
 using System.Text.Json;
 using Redshift.Testing;
 using Xunit;
@@ -32,6 +34,49 @@ public sealed class InjectTests : IDisposable
     }
 
     [Fact]
+    public void Confidences_are_fitted_to_what_is_recovered_and_a_run_uses_them()
+    {
+        // Someone has stated confidences that are far too great.
+        File.WriteAllText(_folder.File("bold.toml"), "[calibration.galaxy]\noffset = 4.0\n");
+        var fit = Zladder.Run("inject", Spectrum, "--count", "500", "--expect", "galaxy", "--pipeline", _folder.File("bold.toml"), "--calibration", _folder.File("fit.toml"));
+
+        Assert.Equal(0, fit.Status);
+        Assert.Matches(@"\n  galaxy +\d+ +\d+ +0\.\d+ +0\.\d+ +0\.\d+  refitted\n", fit.Output);
+        var text = File.ReadAllText(_folder.File("fit.toml"));
+        Assert.StartsWith("# Part of a pipeline file", text, StringComparison.Ordinal);
+        Assert.Contains("\n[calibration.galaxy]\noffset = ", text, StringComparison.Ordinal);
+        double bold = Confidence("bold.toml"), fitted = Confidence("fit.toml");
+        Assert.InRange(fitted, 0.5, bold - 0.001);
+    }
+
+    [Fact]
+    public void A_sample_that_supports_nothing_is_refused_before_or_after_the_work()
+    {
+        var before = Zladder.Run("inject", Spectrum, "--calibration", _folder.File("no.toml"));
+        Assert.Equal((2, "zladder: --calibration with 200 objects: expected --count 500 or more\n"), (before.Status, before.Errors));
+
+        // Bright nebulae are all found.
+        var after = Zladder.Run("inject", Spectrum, "--count", "500", "--expect", "nebula", "--calibration", _folder.File("no.toml"));
+        Assert.Equal(4, after.Status);
+        Assert.EndsWith("zladder: no calibration written: too few answers, or too few right or wrong ones; try more objects (--count)\n", after.Errors, StringComparison.Ordinal);
+        Assert.Empty(Directory.GetFiles(_folder.Path));
+    }
+
+    [Fact]
+    public void An_interrupt_ends_it_with_status_130()
+    {
+        File.WriteAllText(_folder.File("notes.txt"), "clouds all night\n");
+        using var process = Zladder.Start("inject", _folder.Path, Spectrum, "--count", "100000");
+        Assert.StartsWith("rejected: ", process.StandardError.ReadLine(), StringComparison.Ordinal);
+        using (var kill = Process.Start("kill", ["-INT", process.Id.ToString(CultureInfo.InvariantCulture)]))
+            kill.WaitForExit();
+        var outcome = Zladder.Finish(process);
+
+        Assert.Equal((130, ""), (outcome.Status, outcome.Output));
+        Assert.True(outcome.Errors is "" or "zladder: interrupted\n", outcome.Errors);
+    }
+
+    [Fact]
     public void Without_a_usable_spectrum_it_ends_with_status_4_and_says_why()
     {
         File.WriteAllText(_folder.File("notes.txt"), "clouds all night\n");
@@ -53,6 +98,15 @@ public sealed class InjectTests : IDisposable
 
         Assert.Equal((2, ""), (outcome.Status, outcome.Output));
         Assert.Equal("zladder: " + message, outcome.Errors.Split('\n')[0]);
+    }
+
+    private double Confidence(string pipeline)
+    {
+        var run = Zladder.Run("run", Spectrum, "--expect", "galaxy", "--pipeline", _folder.File(pipeline), "--out", _folder.File("out-" + pipeline));
+        Assert.Equal((0, ""), (run.Status, run.Errors));
+        var rows = File.ReadAllLines(Path.Combine(_folder.File("out-" + pipeline), "catalogue.csv"));
+        var column = Array.IndexOf(rows[0].Split(','), "confidence");
+        return double.Parse(rows[1].Split(',')[column], CultureInfo.InvariantCulture);
     }
 
     [Fact]

@@ -19,8 +19,14 @@ public static class Reliability
     private static readonly double[] Edges = [0, 0.1, 0.3, 0.5, 0.7, 0.9, 0.97, 0.99];
 
     /// <summary>Sorts forecasts into ranges; empty ranges are left out.</summary>
-    public static IReadOnlyList<ReliabilityBin> Table(IEnumerable<Forecast> forecasts) =>
-        [.. forecasts.GroupBy(f => Edges.Last(edge => f.Probability >= edge)).OrderBy(group => group.Key).Select(group => Bin(group.Key, [.. group]))];
+    /// <param name="forecasts">The forecasts.</param>
+    /// <param name="least">Neighbouring ranges are joined until each has so many.</param>
+    public static IReadOnlyList<ReliabilityBin> Table(IEnumerable<Forecast> forecasts, int least = 1)
+    {
+        var bins = forecasts.GroupBy(f => Edges.Last(edge => f.Probability >= edge)).OrderBy(group => group.Key)
+            .Select(group => (From: group.Key, Members: group.ToArray()));
+        return [.. Neighbours.Join(bins, bin => bin.Members.Length, (a, b) => (a.From, [.. a.Members, .. b.Members]), least).Select(bin => Bin(bin.From, bin.Members))];
+    }
 
     private static ReliabilityBin Bin(double from, Forecast[] members)
     {

@@ -11,7 +11,8 @@ namespace Redshift.Pipeline.Inject;
 /// </summary>
 /// <param name="known">The map that holds as long as the answers do not say otherwise.</param>
 /// <param name="latitude">Factor on the widths of the priors.</param>
-internal sealed class CalibrationFit(ConfidenceMap known, double latitude = 1)
+/// <param name="onlyLower">Whether evidence may count for less than in the known map, but not for more.</param>
+internal sealed class CalibrationFit(ConfidenceMap known, double latitude = 1, bool onlyLower = false)
 {
     private const int Folds = 5;
     private const double Precision = 1e-7;
@@ -42,5 +43,17 @@ internal sealed class CalibrationFit(ConfidenceMap known, double latitude = 1)
     }
 
     /// <summary>Better evidence never means less confidence.</summary>
-    private ConfidenceMap ToMap(Vector<double> b) => known with { Offset = b[0], Near = Math.Max(0, b[1]), Far = Math.Max(0, b[2]), Misfit = Math.Max(0, b[3]) };
+    private ConfidenceMap ToMap(Vector<double> b)
+    {
+        var map = known with { Offset = b[0], Near = Math.Max(0, b[1]), Far = Math.Max(0, b[2]), Misfit = Math.Max(0, b[3]) };
+        return onlyLower ? Lower(map) : map;
+    }
+
+    private ConfidenceMap Lower(ConfidenceMap map) => map with
+    {
+        Offset = Math.Min(known.Offset, map.Offset),
+        Near = Math.Min(known.Near, map.Near),
+        Far = Math.Min(known.Far, map.Far),
+        Misfit = Math.Max(known.Misfit, map.Misfit),
+    };
 }

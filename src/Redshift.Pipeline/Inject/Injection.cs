@@ -47,6 +47,15 @@ public sealed record Injection
     /// <summary>How far off the redshift of this kind may be and still count as right, km/s.</summary>
     public required double ToleranceKmS { get; init; }
 
+    /// <summary>ln odds of the answer against its rivals.</summary>
+    public double LnOdds { get; init; }
+
+    /// <summary>How badly the best model fits.</summary>
+    public double Misfit { get; init; }
+
+    /// <summary>Chance that the stated error keeps within the tolerance of the kind that was found.</summary>
+    public double Within { get; init; }
+
     /// <summary>c (found − z) / (1 + z) in km/s.</summary>
     public double? OffsetKmS => Velocity.SpeedOfLightKmS * (FoundZ - Z) / (1 + Z);
 
@@ -62,6 +71,9 @@ public sealed record Injection
     /// <summary>The confidence as a forecast of <see cref="IsGood"/>.</summary>
     public Forecast Forecast => new(Confidence, IsGood);
 
+    /// <summary>What the confidence rests on; null without a redshift.</summary>
+    internal CalibrationCase? Answer => FoundZ is null ? null : new(FoundKind, LnOdds, Misfit, Within, IsGood);
+
     internal static Injection Of(Injected injected, ObservationResult result) => new()
     {
         Index = injected.Index,
@@ -76,6 +88,12 @@ public sealed record Injection
         FoundZErr = result.ZErr,
         Confidence = result.ZFile is null ? 0 : result.Confidence,
         Verdict = result.Verdict,
-        ToleranceKmS = PosteriorSum.ToleranceKmS(injected.Target.Kind, result.Resolution ?? double.PositiveInfinity),
+        ToleranceKmS = Tolerance(injected.Target.Kind, result),
+        LnOdds = result.LnOdds,
+        Misfit = result.Misfit,
+        Within = result is { ZFile: { } z, ZErr: { } error } ? Calibration.Within(Velocity.SpeedOfLightKmS * error / (1 + z), Tolerance(result.Kind, result)) : 0,
     };
+
+    private static double Tolerance(ObjectKind kind, ObservationResult result) =>
+        PosteriorSum.ToleranceKmS(kind, result.Resolution ?? double.PositiveInfinity);
 }

@@ -1,6 +1,7 @@
 using Redshift.Physics.Statistics;
 using Redshift.Pipeline.Report;
 using Redshift.Pipeline.Report.Explain;
+using Redshift.Pipeline.Results;
 
 namespace Redshift.Pipeline.Inject;
 
@@ -8,7 +9,8 @@ namespace Redshift.Pipeline.Inject;
 /// <param name="recovery">What was recovered.</param>
 /// <param name="givers">Number of spectra that objects were put into.</param>
 /// <param name="seed">The seed.</param>
-public sealed class InjectionReport(Recovery recovery, int givers, ulong seed)
+/// <param name="maps">The maps from evidence to confidence as held against the recovery, where that was asked for.</param>
+public sealed class InjectionReport(Recovery recovery, int givers, ulong seed, IReadOnlyList<RecalibratedMap> maps)
 {
     private static readonly Column<RecoveryGroup>[] GroupColumns =
     [
@@ -33,6 +35,17 @@ public sealed class InjectionReport(Recovery recovery, int givers, ulong seed)
         new("outside", "", "", "Whether the share lies outside the band", CellType.Text, b => Cell.Of(b.Off ? "outside" : "")),
     ];
 
+    private static readonly Column<RecalibratedMap>[] MapColumns =
+    [
+        new("answers", "", "", "Kind of the answers", CellType.Text, m => Cell.Of(m.Kind == ObjectKind.Star ? "star or other" : Words.Of(m.Kind))),
+        new("n", "", "", "Number", CellType.Whole, m => Cell.Of(m.Count)),
+        new("right", "", "", "Number of right ones", CellType.Whole, m => Cell.Of(m.Right)),
+        new("score_before", "", "", "Logarithmic score of the confidences, nats an answer", CellType.Real, m => Cell.Fixed(m.Before, 3)),
+        new("score_after", "", "", "The same with maps fitted to the other answers", CellType.Real, m => Cell.Fixed(m.After, 3)),
+        new("greatest", "", "", "Greatest confidence from now on", CellType.Real, m => Cell.Fixed(m.Map.Greatest, 4)),
+        new("map", "", "", "What became of the map", CellType.Text, m => Cell.Of(m.State switch { MapState.TooFew => "kept: too few", MapState.Kept => "kept: as good", _ => "refitted" })),
+    ];
+
     private IEnumerable<(string Title, string Name, IEnumerable<RecoveryGroup> Groups)> Tables =>
     [
         ("By signal to noise a pixel", "by_snr", recovery.BySnr.Append(recovery.All)),
@@ -48,13 +61,17 @@ public sealed class InjectionReport(Recovery recovery, int givers, ulong seed)
         "the object's own light, kinds of objects and mixtures other than these, and whether the stated resolution is true.",
     ];
 
+    /// <summary>What was put into what.</summary>
+    public string Origin => FormattableString.Invariant(
+        $"{recovery.All.Members.Count} computed objects put into {givers} {(givers == 1 ? "spectrum" : "spectra")}, seed {seed}");
+
     /// <summary>Writes the text.</summary>
     public void WriteText(TextWriter output)
     {
-        output.WriteLine(FormattableString.Invariant(
-            $"{recovery.All.Members.Count} computed objects put into {givers} {(givers == 1 ? "spectrum" : "spectra")}, seed {seed}"));
+        output.WriteLine(Origin);
         foreach (var (title, _, groups) in Tables) TextTable.Write(output, title, GroupColumns, groups);
         TextTable.Write(output, "Confidence, stated and found (band: 95 % if confidences are true)", ReliabilityColumns, recovery.Reliability);
+        TextTable.Write(output, "Maps from evidence to confidence (log score: cross-validated, less is better)", MapColumns, maps);
         output.WriteLine();
         foreach (var line in Limits) output.WriteLine(line);
     }
@@ -73,6 +90,8 @@ public sealed class InjectionReport(Recovery recovery, int givers, ulong seed)
 
         writer.WritePropertyName("reliability");
         CellsJson.WriteRows(writer, ReliabilityColumns, recovery.Reliability);
+        writer.WritePropertyName("calibration");
+        CellsJson.WriteRows(writer, MapColumns, maps);
         writer.WriteString("limits", string.Join(' ', Limits));
         writer.WritePropertyName("injections");
         CellsJson.WriteRows(writer, InjectionColumns.All, recovery.All.Members);

@@ -24,21 +24,23 @@ public sealed class InjectionRun(PipelineSettings settings, int jobs) : IDisposa
     /// <param name="files">The files, in their order.</param>
     /// <param name="seed">Seed of the choice.</param>
     /// <param name="onReject">Hears of what cannot be used.</param>
+    /// <param name="onStep">Hears, from any thread, of each spectrum that is ready, with the number of all.</param>
     /// <param name="token">Ends the work.</param>
-    public void Read(IReadOnlyList<InputFile> files, ulong seed, Action<Reject> onReject, CancellationToken token)
+    public void Read(IReadOnlyList<InputFile> files, ulong seed, Action<Reject> onReject, Action<int> onStep, CancellationToken token)
     {
         var chosen = Choose(files, RandomSource.ForMember(seed, ulong.MaxValue), onReject, token);
-        _givers = [.. InOrder(chosen.Count, i => Giver.From(chosen[i], _pipelines.Value!), token).OfType<Giver>()];
+        _givers = [.. InOrder(chosen.Count, i => Giver.From(chosen[i], _pipelines.Value!), onStep, token).OfType<Giver>()];
     }
 
     /// <summary>Makes injections and measures them, in their order.</summary>
     /// <param name="count">How many.</param>
     /// <param name="seed">The same seed, the same injections.</param>
+    /// <param name="onStep">Hears, from any thread, of each injection that is measured, with the number of all.</param>
     /// <param name="token">Ends the work.</param>
-    public IReadOnlyList<Injection> Inject(int count, ulong seed, CancellationToken token)
+    public IReadOnlyList<Injection> Inject(int count, ulong seed, Action<int> onStep, CancellationToken token)
     {
         var injector = new Injector(_givers, settings.Match, seed);
-        return InOrder(count, i => Measure(injector.Make(i)), token);
+        return InOrder(count, i => Measure(injector.Make(i)), onStep, token);
     }
 
     /// <inheritdoc/>
@@ -46,8 +48,19 @@ public sealed class InjectionRun(PipelineSettings settings, int jobs) : IDisposa
 
     private Injection Measure(Injected injected) => Injection.Of(injected, _pipelines.Value!.Analyze(injected.Observation));
 
-    private List<T> InOrder<T>(int count, Func<int, T> make, CancellationToken token) =>
-        [.. Enumerable.Range(0, count).AsParallel().AsOrdered().WithCancellation(token).WithDegreeOfParallelism(Math.Min(jobs, 512)).Select(make)];
+    private List<T> InOrder<T>(int count, Func<int, T> make, Action<int> onStep, CancellationToken token)
+    {
+        T MakeAndTell(int index)
+        {
+            // The query itself looks only now and then.
+            token.ThrowIfCancellationRequested();
+            var made = make(index);
+            onStep(count);
+            return made;
+        }
+
+        return [.. Enumerable.Range(0, count).AsParallel().AsOrdered().WithCancellation(token).WithDegreeOfParallelism(Math.Min(jobs, 512)).Select(MakeAndTell)];
+    }
 
     // Every spectrum has the same chance, however many there are (Vitter 1985, ACM Trans. Math. Softw. 11, 37, algorithm R).
     private List<Observation> Choose(IReadOnlyList<InputFile> files, RandomSource random, Action<Reject> onReject, CancellationToken token)

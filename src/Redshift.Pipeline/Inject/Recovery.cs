@@ -15,7 +15,8 @@ public sealed class Recovery(IReadOnlyList<Injection> injections)
 
     /// <summary>By the rungs of signal to noise, low to high.</summary>
     public IReadOnlyList<RecoveryGroup> BySnr { get; } =
-        [.. injections.GroupBy(i => i.Snr).OrderBy(g => g.Key).Select(g => new RecoveryGroup(FormattableString.Invariant($"S/N {g.Key}"), [.. g]))];
+        [.. injections.GroupBy(i => i.Snr).OrderBy(g => g.Key)
+            .Select(g => new RecoveryGroup(FormattableString.Invariant($"S/N {g.Key}"), [.. g]) { Range = (g.Key, g.Key) })];
 
     /// <summary>By kind.</summary>
     public IReadOnlyList<RecoveryGroup> ByKind { get; } =
@@ -26,18 +27,24 @@ public sealed class Recovery(IReadOnlyList<Injection> injections)
     [
         .. injections.Where(i => i.Kind is ObjectKind.Galaxy or ObjectKind.Quasar)
             .GroupBy(i => Array.FindLastIndex(RedshiftEdges, edge => i.Z >= edge)).OrderBy(g => g.Key)
-            .Select(g => new RecoveryGroup(RangeName(g.Key), [.. g])),
+            .Select(g => new RecoveryGroup(RangeName(g.Key), [.. g]) { Range = Range(g.Key) }),
     ];
 
     /// <summary>Stated against found probability of the answers that have a redshift.</summary>
-    public IReadOnlyList<ReliabilityBin> Reliability { get; } =
-        Physics.Statistics.Reliability.Table(injections.Where(i => i.FoundZ is not null).Select(i => i.Forecast));
+    public IReadOnlyList<ReliabilityBin> Reliability => ReliabilityOf(1);
 
-    private static string RangeName(int bin)
+    /// <summary>The same with neighbouring ranges joined until each has a least number of answers.</summary>
+    public IReadOnlyList<ReliabilityBin> ReliabilityOf(int least) =>
+        Physics.Statistics.Reliability.Table(injections.Where(i => i.FoundZ is not null).Select(i => i.Forecast), least);
+
+    private static (double From, double To) Range(int bin) => (
+        bin < 0 ? double.NegativeInfinity : RedshiftEdges[bin],
+        bin + 1 < RedshiftEdges.Length ? RedshiftEdges[bin + 1] : double.PositiveInfinity);
+
+    private static string RangeName(int bin) => Range(bin) switch
     {
-        if (bin < 0) return "z < 0";
-        return bin + 1 < RedshiftEdges.Length
-            ? FormattableString.Invariant($"z {RedshiftEdges[bin]} to {RedshiftEdges[bin + 1]}")
-            : FormattableString.Invariant($"z > {RedshiftEdges[bin]}");
-    }
+        (double.NegativeInfinity, _) => "z < 0",
+        (var from, double.PositiveInfinity) => FormattableString.Invariant($"z > {from}"),
+        var (from, to) => FormattableString.Invariant($"z {from} to {to}"),
+    };
 }

@@ -22,16 +22,22 @@ internal readonly record struct TargetDraw(ObjectKind Kind, double Z)
     private const double HighestQuasar = 6.5;
 
     /// <summary>
-    /// Draws a kind (stars and galaxies two fifths each, quasars one fifth; or the one that is expected) and its redshift: normal for
+    /// Draws a kind (stars, galaxies and quasars in the shares of their priors; or the one that is expected) and its redshift: normal for
     /// what belongs to our Galaxy, else even in ln(1+z) over the redshifts that are searched and that the spectrum covers.
     /// </summary>
     public static TargetDraw Draw(Observation observation, MatchSettings settings, RandomSource random)
     {
-        var kind = settings.Expect ?? random.Uniform() switch { < 0.4 => ObjectKind.Star, < 0.8 => ObjectKind.Galaxy, _ => ObjectKind.Quasar };
+        var kind = settings.Expect ?? DrawKind(settings, random.Uniform());
         var (low, high) = Range(kind, observation, settings);
         return high > low
             ? new(kind, (1 + low) * Math.Pow((1 + high) / (1 + low), random.Uniform()) - 1)
             : new(kind, Math.Clamp(random.Normal(0, StarsKmS / Velocity.SpeedOfLightKmS), settings.ZMin, settings.ZMax));
+    }
+
+    private static ObjectKind DrawKind(MatchSettings settings, double share)
+    {
+        var all = settings.PriorStar + settings.PriorGalaxy + settings.PriorQuasar;
+        return share * all < settings.PriorStar ? ObjectKind.Star : share * all < settings.PriorStar + settings.PriorGalaxy ? ObjectKind.Galaxy : ObjectKind.Quasar;
     }
 
     private static (double Low, double High) Range(ObjectKind kind, Observation observation, MatchSettings settings)

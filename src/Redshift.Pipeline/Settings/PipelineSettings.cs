@@ -62,4 +62,9 @@ public sealed record MatchSettings
 
     /// <summary>How evidence maps to confidence.</summary>
     public ConfidenceMaps Confidence { get; init; } = new();
+
+    /// <summary>Whether the user says which kinds are expected, or how often.</summary>
+    internal bool StatesKinds => Expect is not null || Shares != new MatchSettings().Shares;
+
+    private (double, double, double) Shares => (PriorStar, PriorGalaxy, PriorQuasar);
 }

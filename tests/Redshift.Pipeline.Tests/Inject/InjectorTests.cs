@@ -68,6 +68,30 @@ public sealed class InjectorTests
     }
 
     [Fact]
+    public void Kinds_are_put_in_as_often_as_they_are_expected()
+    {
+        Assert.All(Make(1, Settings.Match with { PriorStar = 0, PriorQuasar = 0 }), i => Assert.Equal(ObjectKind.Galaxy, i.Target.Kind));
+        Assert.All(Make(1, Settings.Match with { PriorStar = 0, PriorGalaxy = 0 }), i => Assert.Equal(ObjectKind.Quasar, i.Target.Kind));
+        Assert.Equal(3, Made.Value.Select(i => i.Target.Kind).Distinct().Count());
+    }
+
+    [Fact]
+    public void An_interrupt_ends_the_work_between_two_objects()
+    {
+        using var interrupt = new CancellationTokenSource();
+        using var run = new InjectionRun(Settings, 1);
+        run.Read(InputFiles.Find([Spectrum], null), 1, reject => Assert.Fail(reject.ToString()), _ => { }, CancellationToken.None);
+        var steps = 0;
+        void Step(int all)
+        {
+            if (++steps == 2) interrupt.Cancel();
+        }
+
+        Assert.ThrowsAny<OperationCanceledException>(() => run.Inject(100, 1, Step, interrupt.Token));
+        Assert.Equal(2, steps);
+    }
+
+    [Fact]
     public void The_number_of_workers_makes_no_difference()
     {
         var one = Inject(1);
@@ -79,8 +103,11 @@ public sealed class InjectorTests
     private static IReadOnlyList<Injection> Inject(int jobs)
     {
         using var run = new InjectionRun(Settings, jobs);
-        run.Read(InputFiles.Find([Spectrum], null), 1, reject => Assert.Fail(reject.ToString()), CancellationToken.None);
-        return run.Inject(12, 1, CancellationToken.None);
+        var steps = 0;
+        run.Read(InputFiles.Find([Spectrum], null), 1, reject => Assert.Fail(reject.ToString()), count => Assert.Equal(1, count), CancellationToken.None);
+        var injections = run.Inject(12, 1, count => Interlocked.Add(ref steps, count), CancellationToken.None);
+        Assert.Equal(12 * 12, steps);
+        return injections;
     }
 
     private static Injected[] Make(ulong seed, MatchSettings settings)

@@ -37,6 +37,18 @@ public sealed class RecoveryTests
         Assert.Equal(4, recovery.Reliability.Sum(bin => bin.Count));
     }
 
+    [Fact]
+    public void Neighbours_are_joined_until_they_are_many_and_none_gets_lost()
+    {
+        var recovery = new Recovery(Five);
+        Assert.Equal([(2, (1.5, 1.5)), (3, (3.0, 3.0))], recovery.BySnr.Select(g => (g.Members.Count, g.Range)));
+        Assert.Equal(recovery.BySnr, RecoveryGroup.Joined(recovery.BySnr, 2));
+        var joined = Assert.Single(RecoveryGroup.Joined(recovery.BySnr, 3));
+        Assert.Equal((5, (1.5, 3.0), "S/N 1.5 and S/N 3"), (joined.Members.Count, joined.Range, joined.Name));
+        Assert.Equal([(0.5, 3)], RecoveryGroup.Joined(recovery.ByRedshift, 3).Select(g => g.Range));
+        Assert.Equal(4, Assert.Single(recovery.ReliabilityOf(4)).Count);
+    }
+
     private static Injection Galaxy(int index, double snr, double z, double? offsetKmS, Verdict verdict, double confidence) => new()
     {
         Index = index,

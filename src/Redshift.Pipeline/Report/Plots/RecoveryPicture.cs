@@ -1,4 +1,5 @@
 using System.Globalization;
+using Redshift.Physics.Statistics;
 using Redshift.Pipeline.Inject;
 using SkiaSharp;
 
@@ -12,6 +13,12 @@ public static class RecoveryPicture
     private const float PanelWidth = 400;
     private const float Top = 100;
     private const float Bottom = 420;
+
+    /// <summary>Shares of fewer objects swing by chance: their bins are joined with neighbours.</summary>
+    private const int LeastInBin = 15;
+
+    /// <summary>Traces of one bin stand so far apart that their bars can be told from each other.</summary>
+    private const float TraceGap = 7;
 
     /// <summary>Draws the recovery and saves it as PNG, making the folders on the way.</summary>
     /// <exception cref="IOException">The file cannot be written.</exception>
@@ -28,29 +35,38 @@ public static class RecoveryPicture
         canvas.Clear(Ink.Paper);
         var all = recovery.All;
         Write(canvas, string.Create(CultureInfo.InvariantCulture, $"{all.Members.Count} computed objects put into the spectra: {100 * all.GoodShare:F0} % right"), 70, 36, 20, Ink.Dark);
-        DrawShares(canvas, 70, "share, by signal to noise a pixel", recovery.BySnr, "S/N ");
-        DrawShares(canvas, 560, "share, by redshift (galaxies and quasars)", recovery.ByRedshift, "z ");
+        DrawShares(canvas, 70, "share, by signal to noise a pixel", recovery.BySnr);
+        DrawShares(canvas, 560, "share, by redshift (galaxies and quasars)", recovery.ByRedshift);
         DrawReliability(canvas, 1050, recovery);
         DrawKey(canvas);
         return surface.Snapshot();
     }
 
-    private static void DrawShares(SKCanvas canvas, float left, string title, IReadOnlyList<RecoveryGroup> groups, string prefix)
+    private static void DrawShares(SKCanvas canvas, float left, string title, IReadOnlyList<RecoveryGroup> all)
     {
         DrawFrame(canvas, left, title);
-        SKPoint At(int i, double share) => new(left + PanelWidth * (i + 0.5f) / groups.Count, Y(share));
+        if (all.Count == 0)
+            Write(canvas, "none was put in", left + PanelWidth / 2, (Top + Bottom) / 2, 12, Ink.Soft, SKTextAlign.Center);
+        var groups = RecoveryGroup.Joined(all, LeastInBin);
+        float X(int i) => left + PanelWidth * (i + 0.5f) / groups.Count;
         for (var i = 0; i < groups.Count; i++)
         {
-            var name = groups[i].Name;
-            var label = name.StartsWith(prefix, StringComparison.Ordinal) ? name[prefix.Length..] : name;
-            Write(canvas, label.Replace(" to ", "–", StringComparison.Ordinal), At(i, 0).X, Bottom + 18, 11, Ink.Soft, SKTextAlign.Center);
-            Write(canvas, "n " + groups[i].Members.Count.ToString(CultureInfo.InvariantCulture), At(i, 0).X, Bottom + 34, 10, Ink.Soft, SKTextAlign.Center);
+            Write(canvas, Label(groups[i].Range), X(i), Bottom + 18, 11, Ink.Soft, SKTextAlign.Center);
+            Write(canvas, "n " + groups[i].Members.Count.ToString(CultureInfo.InvariantCulture), X(i), Bottom + 34, 10, Ink.Soft, SKTextAlign.Center);
         }
 
-        DrawTrace(canvas, Ink.Continuum, Filling.Open, [.. groups.Select((g, i) => (SKPoint?)At(i, g.GoodShare))]);
-        DrawTrace(canvas, Ink.Model, Filling.Half, [.. groups.Select((g, i) => (SKPoint?)At(i, g.Completeness))]);
-        DrawTrace(canvas, Ink.Dark, Filling.Full, [.. groups.Select((g, i) => g.Purity is { } purity ? At(i, purity) : (SKPoint?)null)]);
+        DrawTrace(canvas, Ink.Continuum, Filling.Open, [.. groups.Select((g, i) => (X(i) - TraceGap, g.Good, g.Members.Count))]);
+        DrawTrace(canvas, Ink.Model, Filling.Half, [.. groups.Select((g, i) => (X(i), g.GoodConfident, g.Members.Count))]);
+        DrawTrace(canvas, Ink.Dark, Filling.Full, [.. groups.Select((g, i) => (X(i) + TraceGap, g.GoodConfident, g.Confident))]);
     }
+
+    private static string Label((double From, double To) range) => range switch
+    {
+        (double.NegativeInfinity, var to) => string.Create(CultureInfo.InvariantCulture, $"< {to}"),
+        (var from, double.PositiveInfinity) => string.Create(CultureInfo.InvariantCulture, $"> {from}"),
+        var (from, to) when from == to => from.ToString(CultureInfo.InvariantCulture),
+        var (from, to) => string.Create(CultureInfo.InvariantCulture, $"{from}–{to}"),
+    };
 
     private static void DrawReliability(SKCanvas canvas, float left, Recovery recovery)
     {
@@ -61,7 +77,7 @@ public static class RecoveryPicture
         canvas.DrawLine(X(0), Y(0), X(1), Y(1), pen);
         foreach (var edge in new[] { 0, 0.5, 1 })
             Write(canvas, edge.ToString("0.0", CultureInfo.InvariantCulture), X(edge), Bottom + 18, 11, Ink.Soft, SKTextAlign.Center);
-        foreach (var bin in recovery.Reliability)
+        foreach (var bin in recovery.ReliabilityOf(LeastInBin))
         {
             canvas.DrawLine(X(bin.Stated), Y(bin.Low), X(bin.Stated), Y(bin.High), band);
             Mark.Draw(canvas, X(bin.Stated), Y(bin.Found), 4, bin.Off ? Filling.Open : Filling.Full);
@@ -79,12 +95,24 @@ public static class RecoveryPicture
         }
     }
 
-    private static void DrawTrace(SKCanvas canvas, SKColor color, Filling filling, IReadOnlyList<SKPoint?> points)
+    /// <summary>Draws shares with bars of 68 %; groups without a trial interrupt the trace.</summary>
+    private static void DrawTrace(SKCanvas canvas, SKColor color, Filling filling, IReadOnlyList<(float X, int Successes, int Trials)> shares)
     {
         using var pen = Ink.Pen(color, 2);
-        for (var i = 1; i < points.Count; i++)
-            if (points[i - 1] is { } from && points[i] is { } to) canvas.DrawLine(from, to, pen);
-        foreach (var point in points.OfType<SKPoint>()) Mark.Draw(canvas, point.X, point.Y, 4, filling);
+        using var bar = Ink.Pen(color.WithAlpha(0x90), 3);
+        SKPoint? before = null;
+        foreach (var (x, successes, trials) in shares)
+        {
+            SKPoint? here = trials == 0 ? null : new(x, Y((double)successes / trials));
+            if (before is { } from && here is { } to) canvas.DrawLine(from, to, pen);
+            before = here;
+            if (trials == 0) continue;
+            var (low, high) = BinomialInterval.Wilson(successes, trials);
+            canvas.DrawLine(x, Y(low), x, Y(high), bar);
+        }
+
+        foreach (var (x, successes, trials) in shares.Where(s => s.Trials > 0))
+            Mark.Draw(canvas, x, Y((double)successes / trials), 4, filling);
     }
 
     private static void DrawKey(SKCanvas canvas)
@@ -102,6 +130,7 @@ public static class RecoveryPicture
             x += 62 + Write(canvas, meaning, x + 34, Height - 24, 12, Ink.Soft);
         }
 
+        Write(canvas, "bars: 68 % of the share", x + 8, Height - 24, 12, Ink.Soft);
         Write(canvas, "bar: 95 % band if confidences are true; open: outside", 1050, Height - 24, 12, Ink.Soft);
     }
 
