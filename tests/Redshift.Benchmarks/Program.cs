@@ -16,8 +16,18 @@ var runs = new Command("runs", "Times whole runs of zladder from stacks and from
 {
     spectra, files, jobs, program,
 };
-runs.SetAction(parsed => new RunHarness(parsed.GetValue(program)!, parsed.GetValue(jobs))
+runs.SetAction(parsed => new RunHarness(new(parsed.GetValue(program)!), parsed.GetValue(jobs))
     .Measure(parsed.GetValue(spectra), parsed.GetValue(files), Console.Out));
+
+var counts = new Option<int[]>("--spectra")
+{
+    Description = "Numbers of spectra, the last of which is also run in parts and merged",
+    AllowMultipleArgumentsPerToken = true,
+    DefaultValueFactory = _ => [1000, 3000, 10000],
+};
+var parts = Number("--parts", "Number of parts", 7);
+var scale = new Command("scale", "Measures how cost, memory and output of zladder grow with the number of spectra") { counts, parts, program };
+scale.SetAction(parsed => new ScaleHarness(new(parsed.GetValue(program)!), parsed.GetValue(parts)).Measure(parsed.GetValue(counts)!, Console.Out));
 
 var rest = new Argument<string[]>("arguments") { Description = "Arguments of BenchmarkDotNet, such as --filter *Fits*", Arity = ArgumentArity.ZeroOrMore };
 var stages = new Command("stages", "Times the stages of the pipeline and the decoding of FITS files in this process") { rest };
@@ -28,6 +38,6 @@ stages.SetAction(parsed =>
     BenchmarkSwitcher.FromAssembly(typeof(StageBenchmarks).Assembly).Run(arguments.Length > 0 ? arguments : ["--filter", "*"], new QuietConfig());
 });
 
-return new RootCommand("What the pipeline costs") { runs, stages }.Parse(args).Invoke();
+return new RootCommand("What the pipeline costs") { runs, scale, stages }.Parse(args).Invoke();
 
 static Option<int> Number(string name, string description, int usual) => new(name) { Description = description, DefaultValueFactory = _ => usual };

@@ -25,6 +25,9 @@ internal sealed class LedgerDatabase : IDisposable
         }.ToString());
     }
 
+    /// <summary>What the names of files end in that SQLite keeps beside a database while it is open, and a killed run leaves behind.</summary>
+    public static IReadOnlyList<string> Logs { get; } = ["-wal", "-shm", "-journal"];
+
     /// <summary>Where the ledger is.</summary>
     public string Path { get; }
 

@@ -62,7 +62,7 @@ public static class LedgerMerge
                 (parts[0].Setup with { Shard = Shard.Whole }).Write(joined);
             }
 
-            File.Move(unfinished, path, overwrite: true);
+            Replace(path, unfinished);
         }
         finally
         {
@@ -70,6 +70,14 @@ public static class LedgerMerge
         }
 
         return [.. parts.GroupBy(static part => part.Shard).Where(static same => same.Count() > 1).Select(static same => (same.Key, same.Count()))];
+    }
+
+    // The log that a killed run left beside an older ledger must not be taken for the new one's.
+    private static void Replace(string path, string unfinished)
+    {
+        foreach (var log in LedgerDatabase.Logs)
+            File.Delete(path + log);
+        File.Move(unfinished, path, overwrite: true);
     }
 
     private static Part Open(string folder)

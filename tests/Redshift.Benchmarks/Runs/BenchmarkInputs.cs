@@ -21,7 +21,7 @@ internal sealed class BenchmarkInputs
     private const double LnStep = 69 / 299792.458;
     private const double FirstWavelength = 3600;
 
-    // A number that shares no divisor with the step of seven, so that all come before one comes again.
+    // A number that shares no divisor with the step of seven: all come before one comes again.
     private const int Powers = 40;
     private const double GreatestPower = 12000;
     private const double LeastPower = 60;
@@ -53,8 +53,8 @@ internal sealed class BenchmarkInputs
     public List<string> WriteTables(string folder, int spectra) => WriteTables(folder, spectra, static _ => []);
 
     /// <summary>
-    /// Writes one table file a spectrum into a folder, as if each came from another spectrograph: resolving powers from that of an echelle
-    /// to that of a prism, in an order that mixes them. The spectra are the same all the same; only the cost of a mixture is asked for.
+    /// Writes one table file a spectrum into a folder, with headers as if each came from another spectrograph: resolving powers from that
+    /// of an echelle to that of a prism, in an order that mixes them. The spectra are as ever; only the cost of a mixture is asked for.
     /// </summary>
     public void WriteMixedTables(string folder, int spectra) =>
         WriteTables(folder, spectra, static i => [Card.Of("SPEC_RES", Math.Round(GreatestPower * Math.Pow(LeastPower / GreatestPower, 7 * i % Powers / (Powers - 1.0))))]);

@@ -4,9 +4,9 @@ using Redshift.Testing;
 namespace Redshift.Benchmarks.Runs;
 
 /// <summary>Times whole runs and baselines, and prints a table for the docs.</summary>
-/// <param name="program">The command, or its dll.</param>
+/// <param name="zladder">The command.</param>
 /// <param name="jobs">Workers.</param>
-internal sealed class RunHarness(string program, int jobs)
+internal sealed class RunHarness(MeasuredCommand zladder, int jobs)
 {
     private const int CorrelatedSpectra = 20;
 
@@ -69,13 +69,8 @@ internal sealed class RunHarness(string program, int jobs)
             $"Textbook cross-correlation by FFT over {CrossCorrelation.TemplateCount} templates, in this process: {time.TotalMilliseconds:F2} ms CPU a spectrum."));
     }
 
-    private MeasuredProcess Zladder(string output, string input)
-    {
-        string[] arguments = ["run", input, "--out", output, "--max-rejects", "0", "--jobs", jobs.ToString(CultureInfo.InvariantCulture)];
-        return program.EndsWith(".dll", StringComparison.Ordinal)
-            ? MeasuredProcess.Run("dotnet", [program, .. arguments])
-            : MeasuredProcess.Run(program, arguments);
-    }
+    private MeasuredProcess Zladder(string output, string input) =>
+        zladder.Run("run", input, "--out", output, "--max-rejects", "0", "--jobs", jobs.ToString(CultureInfo.InvariantCulture));
 
     private static MeasuredProcess Python(IReadOnlyList<string> files) => MeasuredProcess.Run(ExternalTool.Python, ["-c", Astropy, .. files]);
 

@@ -11,7 +11,11 @@ public sealed class LedgerMergeTests : IDisposable
 {
     private readonly TemporaryFolder _folder = new();
 
-    public LedgerMergeTests() => Directory.CreateDirectory(_folder.File("out"));
+    public LedgerMergeTests()
+    {
+        Directory.CreateDirectory(_folder.File("out"));
+        Directory.CreateDirectory(_folder.File("one"));
+    }
 
     public void Dispose() => _folder.Dispose();
 
@@ -40,6 +44,23 @@ public sealed class LedgerMergeTests : IDisposable
 
         Assert.Equal([(new Shard(1, 1), 2)], Merge(one, twin));
         Assert.Equal(["a.fits 0"], Rows());
+    }
+
+    [Fact]
+    public void What_a_killed_run_left_in_the_folder_does_not_touch_the_joined_ledger()
+    {
+        using (var running = LedgerFile.Open(_folder.File("one")))
+        {
+            FilledLedger.Fill(running, [], Answer("z.fits", 0));
+            // As a killed run leaves it: the last commits are still in the log beside the ledger.
+            foreach (var file in Directory.GetFiles(_folder.File("one")))
+                File.Copy(file, Path.Combine(_folder.File("out"), Path.GetFileName(file)));
+        }
+
+        Directory.Delete(_folder.File("one"), recursive: true);
+        Merge(Part("one", "1/2", Answer("a.fits", 0)), Part("two", "2/2", Answer("b.fits", 0)));
+        Assert.Equal(["a.fits 0", "b.fits 0"], Rows());
+        Assert.Equal(["ledger.db"], Directory.GetFiles(_folder.File("out")).Select(Path.GetFileName));
     }
 
     [Fact]
