@@ -13,13 +13,20 @@ internal sealed class ForestPixels
     /// <summary>So far redward of Lyman alpha, in ln λ, the line itself (and N V) leaves no clear continuum.</summary>
     private const double Beside = 0.025;
 
+    /// <summary>Clouds at so many drops of the flux are tried, with these optical depths.</summary>
+    private const int MostDrops = 2;
+
+    private static readonly double[] Depths = [1, 20];
+
     private readonly FitPixels _pixels;
+    private readonly IReadOnlyList<double> _drops;
     private readonly float[] _alpha;
     private readonly float[] _beta;
 
     public ForestPixels(FitPixels pixels)
     {
         _pixels = pixels;
+        _drops = FluxDrops.Find(pixels);
         _alpha = new float[pixels.LnWavelength.Length];
         _beta = new float[_alpha.Length];
         for (var p = 0; p < pixels.Count; p++)
@@ -29,16 +36,31 @@ internal sealed class ForestPixels
         }
     }
 
+    /// <summary>
+    /// Where the light of a quasar may end: nowhere, at its own limit, or at the plainest drops of the flux below that, opaque or half opaque.
+    /// </summary>
+    /// <param name="lnShift">ln(1+z) of the quasar.</param>
+    public IEnumerable<LymanLimit> Limits(double lnShift)
+    {
+        var own = LymanLimit.Own(lnShift);
+        yield return own;
+        if (own.LnEdge < _pixels.LnWavelength[_pixels.Starts[0]] + FluxDrops.Window) yield break;
+        if (own.Depth > 0) yield return LymanLimit.None;
+        foreach (var drop in _drops.Where(d => d < own.LnEdge).Take(MostDrops))
+            foreach (var depth in Depths) yield return new(drop, depth);
+    }
+
     /// <summary>Transmission at each pixel as the instrument sees it.</summary>
     /// <param name="lnShift">ln(1+z) of the object.</param>
+    /// <param name="limit">Where light ends.</param>
     /// <param name="into">Value of each pixel, 1 redward of Lyman alpha.</param>
-    public void Transmit(double lnShift, float[] into)
+    public void Transmit(double lnShift, LymanLimit limit, float[] into)
     {
         var edge = Forest.LnLymanAlpha + lnShift;
         for (var s = 0; s + 1 < _pixels.Starts.Length; s++)
         {
-            var (limit, beta, alpha) = Edges(s, lnShift);
-            Sharp(s, limit, beta, alpha, lnShift, into);
+            var (beta, alpha) = Edges(s, lnShift);
+            Sharp(s, limit, beta, alpha, into);
             into.AsSpan(alpha, _pixels.Starts[s + 1] - alpha).Fill(1);
             for (var p = alpha; p < _pixels.Starts[s + 1] && Near(p, edge); p++) into[p] = Rounded(p, lnShift);
             for (var p = alpha - 1; p >= _pixels.Starts[s] && Near(p, edge); p--) into[p] = Rounded(p, lnShift);
@@ -50,16 +72,17 @@ internal sealed class ForestPixels
     /// so that models with different variances stay comparable.
     /// </summary>
     /// <param name="lnShift">ln(1+z) of the object.</param>
+    /// <param name="limit">Where light ends.</param>
     /// <param name="weight">Weight of each pixel, changed in place.</param>
     /// <param name="sharp">Room for the transmission without the instrument.</param>
-    public double Scatter(double lnShift, float[] weight, float[] sharp)
+    public double Scatter(double lnShift, LymanLimit limit, float[] weight, float[] sharp)
     {
         double change = 0;
         for (var s = 0; s + 1 < _pixels.Starts.Length; s++)
         {
-            var (limit, beta, alpha) = Edges(s, lnShift);
+            var (beta, alpha) = Edges(s, lnShift);
             if (alpha == _pixels.Starts[s]) continue;
-            Sharp(s, limit, beta, alpha, lnShift, sharp);
+            Sharp(s, limit, beta, alpha, sharp);
             var level = LevelRedward(s, Forest.LnLymanAlpha + lnShift);
             change += Scatter(_pixels.Starts[s], alpha, (float)(level * level), weight, sharp);
         }
@@ -92,17 +115,17 @@ internal sealed class ForestPixels
         return 0.5 * Vector256.Sum(squares) - 0.5 * logs;
     }
 
-    /// <summary>First pixels of a spectrum above the Lyman limit, Lyman beta and Lyman alpha.</summary>
-    private (int Limit, int Beta, int Alpha) Edges(int spectrum, double lnShift) => (
-        _pixels.Find(spectrum, lnShift + Forest.LnLymanLimit),
+    /// <summary>First pixels of a spectrum above Lyman beta and Lyman alpha.</summary>
+    private (int Beta, int Alpha) Edges(int spectrum, double lnShift) => (
         _pixels.Find(spectrum, lnShift + Forest.LnLymanBeta),
         _pixels.Find(spectrum, lnShift + Forest.LnLymanAlpha));
 
-    private void Sharp(int spectrum, int limit, int beta, int alpha, double lnShift, float[] into)
+    private void Sharp(int spectrum, LymanLimit limit, int beta, int alpha, float[] into)
     {
-        var beyondLimit = (float)Forest.LimitTransmission(lnShift);
-        for (var p = _pixels.Starts[spectrum]; p < limit; p++) into[p] = _beta[p] * beyondLimit;
-        _beta.AsSpan(limit, beta - limit).CopyTo(into.AsSpan(limit));
+        var start = _pixels.Starts[spectrum];
+        var edge = Math.Min(beta, _pixels.Find(spectrum, limit.LnEdge));
+        for (var p = start; p < edge; p++) into[p] = _beta[p] * (float)limit.Transmission(_pixels.LnWavelength[p]);
+        _beta.AsSpan(edge, beta - edge).CopyTo(into.AsSpan(edge));
         _alpha.AsSpan(beta, alpha - beta).CopyTo(into.AsSpan(beta));
     }
 

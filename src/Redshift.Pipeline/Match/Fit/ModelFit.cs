@@ -1,6 +1,7 @@
 using Redshift.Pipeline.Match.Models;
 using Redshift.Pipeline.Normalize;
 using Redshift.Pipeline.Numerics;
+using Redshift.Pipeline.Results;
 
 namespace Redshift.Pipeline.Match.Fit;
 
@@ -73,10 +74,7 @@ internal sealed class ModelFit
     public double Fit(FitModel model, double lnShift, bool mixed = true)
     {
         if (lnShift > model.GreatestLnShift) return double.NegativeInfinity;
-        _pixels.Weight.CopyTo(_weight, 0);
-        var evidence = model.Forest ? _pixels.Forest.Scatter(lnShift, _weight, _work) : 0;
-        Render(model, lnShift);
-        evidence += _spline.Solve(_weight, _template) - _null;
+        var evidence = Smooth(model, lnShift) - _null;
         _columns.Clear();
         if (mixed) AddMixtures(model, lnShift);
         foreach (var group in model.Groups)
@@ -113,12 +111,31 @@ internal sealed class ModelFit
         return ResidualExcess.Measure(_pixels, Curves().Model);
     }
 
-    private void Render(FitModel model, double lnShift)
+    /// <summary>Solves for the smooth part times the template; of a quasar where its light ends, too.</summary>
+    private double Smooth(FitModel model, double lnShift)
+    {
+        if (!model.Forest) return Smooth(model, lnShift, LymanLimit.None);
+        if (model.Kind != ObjectKind.Quasar) return Smooth(model, lnShift, LymanLimit.Own(lnShift));
+        var limits = _pixels.Forest.Limits(lnShift).ToList();
+        if (limits.Count == 1) return Smooth(model, lnShift, limits[0]);
+        var best = limits.MaxBy(l => Smooth(model, lnShift, l));
+        return Smooth(model, lnShift, best) - Math.Log(limits.Count);
+    }
+
+    private double Smooth(FitModel model, double lnShift, LymanLimit limit)
+    {
+        _pixels.Weight.CopyTo(_weight, 0);
+        var scatter = model.Forest ? _pixels.Forest.Scatter(lnShift, limit, _weight, _work) : 0;
+        Render(model, lnShift, limit);
+        return scatter + _spline.Solve(_weight, _template);
+    }
+
+    private void Render(FitModel model, double lnShift, LymanLimit limit)
     {
         if (model.Template is null) _ones.CopyTo(_template, 0);
         else _renderer.Render(model.Template, lnShift, _template);
         if (!model.Forest) return;
-        _pixels.Forest.Transmit(lnShift, _transmission);
+        _pixels.Forest.Transmit(lnShift, limit, _transmission);
         Kernels.Multiply(_template, _transmission, _template);
     }
 

@@ -33,8 +33,7 @@ internal static class Forest
         if (lnRest >= LnLymanAlpha) return 1;
         var transmission = AlphaTransmission(lnObserved);
         if (lnRest < LnLymanBeta) transmission *= BetaTransmission(lnObserved);
-        if (lnRest < LnLymanLimit) transmission *= LimitTransmission(lnShift);
-        return transmission;
+        return transmission * LymanLimit.Own(lnShift).Transmission(lnObserved);
     }
 
     /// <summary>What the gas lets pass whose Lyman alpha falls on an observed wavelength.</summary>
@@ -42,9 +41,6 @@ internal static class Forest
 
     /// <summary>What the gas lets pass whose Lyman beta falls on an observed wavelength.</summary>
     public static double BetaTransmission(double lnObserved) => Math.Exp(-0.35 * OpticalDepth(lnObserved - LnLymanBeta));
-
-    /// <summary>What is left below the Lyman limit of an object.</summary>
-    public static double LimitTransmission(double lnShift) => Math.Exp(-Math.Max(0, 3 * (Math.Exp(lnShift) - 1.8)));
 
     /// <summary>
     /// Whether the forest is so thick that only a forest can look like it: elsewhere, and below the Lyman limit where nobody knows what passes,

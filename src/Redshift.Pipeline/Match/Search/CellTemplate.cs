@@ -20,14 +20,17 @@ internal static class CellTemplate
     /// <param name="template">The template.</param>
     /// <param name="level">One of <see cref="LineSpreadLevels"/>.</param>
     /// <param name="forestShift">ln(1+z) for the depth of the forest, 0 for none.</param>
-    public static float[] Relative(Template template, int level, double forestShift = 0)
+    /// <param name="endsAtLimit">Whether nothing passes below the Lyman limit; otherwise the template says nothing there.</param>
+    public static float[] Relative(Template template, int level, double forestShift = 0, bool endsAtLimit = true)
     {
         using var broadened = new LentArray<float>(TemplateGrid.Count);
         template.Broaden(level, broadened.Span);
         var relative = Sample(broadened.Span);
         if (forestShift > 0) Absorb(relative, forestShift);
         var smooth = Smooth(relative);
-        for (var j = 0; j < relative.Length; j++) relative[j] = Math.Clamp(relative[j] / Math.Max(smooth[j], 1e-6f) - 1, -1, Tallest);
+        var silent = endsAtLimit || forestShift == 0 ? 0 : (int)((Forest.LnLymanLimit - Cells.LnOrigin) / Cells.Step);
+        relative.AsSpan(0, silent).Clear();
+        for (var j = silent; j < relative.Length; j++) relative[j] = Math.Clamp(relative[j] / Math.Max(smooth[j], 1e-6f) - 1, -1, Tallest);
         return relative;
     }
 
