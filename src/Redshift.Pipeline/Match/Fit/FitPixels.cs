@@ -64,6 +64,9 @@ internal sealed class FitPixels
     /// <summary>The same pixels under the intergalactic medium; made when first asked for, as most objects are near.</summary>
     public ForestPixels Forest => field ??= new(this);
 
+    /// <summary>What the Earth's atmosphere may take away.</summary>
+    public AirColumns Air => field ??= new(this);
+
     /// <summary>Lays out the pixels of an observation.</summary>
     /// <param name="spectra">The spectra, perhaps binned.</param>
     /// <param name="modelError">How wrong models are, in a bin of <paramref name="errorWidth"/>.</param>

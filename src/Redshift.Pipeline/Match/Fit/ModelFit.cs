@@ -21,6 +21,9 @@ internal sealed class ModelFit
     /// <summary>Prior σ of the strength of gas in front, in units of what star-forming galaxies show.</summary>
     private const double GasSpread = 1;
 
+    /// <summary>The smooth spectrum that all others are compared with, seen through the same air.</summary>
+    private static readonly FitModel Featureless = new() { Kind = ObjectKind.Unknown, Name = "smooth" };
+
     private readonly FitPixels _pixels;
     private readonly SplineFit _spline;
     private readonly FitColumns _columns;
@@ -49,7 +52,7 @@ internal sealed class ModelFit
         _ones = new float[length];
         Array.Fill(_ones, 1f);
         _ones.CopyTo(_template, 0);
-        _null = _spline.Solve(_weight, _template);
+        _null = Fit(Featureless, 0);
     }
 
     /// <summary>Amplitudes of the groups of the last fit, rest equivalent width × continuum; 0 where left out.</summary>
@@ -76,6 +79,7 @@ internal sealed class ModelFit
         if (lnShift > model.GreatestLnShift) return double.NegativeInfinity;
         var evidence = Smooth(model, lnShift) - _null;
         _columns.Clear();
+        _pixels.Air.AddTo(_columns);
         if (mixed) AddMixtures(model, lnShift);
         foreach (var group in model.Groups)
             _profiles.AddColumn(_columns, group, lnShift, group.Broad ? model.BroadKmS : model.NarrowKmS, model.Forest ? _pixels.Forest : null, model.Forest && group.Broad ? _transmission : null);
