@@ -12,7 +12,7 @@ namespace Redshift.Pipeline.Match.Fit;
 internal sealed class FitPixels
 {
     /// <summary>Emission lines are no Gaussians: their model is wrong by this share of what stands above the continuum.</summary>
-    private const double LineError = 0.08;
+    public const double LineError = 0.08;
 
     private FitPixels(int count, int coefficients)
     {

@@ -68,7 +68,7 @@ internal sealed class GridSearch
     private List<Peak> Galaxies()
     {
         var best = _populations.Fine(_firstShift, _shifts);
-        AddNarrowGroups(_library.Galaxies[0], best, _firstShift);
+        AddGas(best);
         return Highest(best, _firstShift, 1, 14, s => _library.Galaxies[_populations.Template(_firstShift + s)]);
     }
 
@@ -96,14 +96,36 @@ internal sealed class GridSearch
     {
         var reach = (int)Math.Ceiling(600 / KmSPerLn / Cells.Step);
         var total = new float[2 * reach + 1];
-        AddNarrowGroups(_library.Nebulae[0], total, -reach);
+        var narrow = new LineScan(_cells, Width(_library.Nebulae[0].NarrowKmS));
+        foreach (var group in _library.Nebulae[0].Groups) narrow.Add(group, -reach, total);
         return Highest(total, -reach, 1, 2, _ => _library.Nebulae[0]);
     }
 
-    private void AddNarrowGroups(FitModel model, float[] total, int firstShift)
+    /// <summary>
+    /// Adds the lines of a galaxy's gas: all in typical ratios, or ion by ion, whichever fits better. Each line counts once, as in the exact
+    /// fits; otherwise one spike of the sky, claimed by every group that has a line there, outweighs a galaxy.
+    /// </summary>
+    private void AddGas(float[] total)
     {
-        var narrow = new LineScan(_cells, Width(model.NarrowKmS));
-        foreach (var group in model.Groups) narrow.Add(group, firstShift, total);
+        var narrow = new LineScan(_cells, Width(_library.Galaxies[0].NarrowKmS));
+        float[] Of(EmissionGroup group)
+        {
+            var evidence = new float[_shifts];
+            narrow.Add(group, _firstShift, evidence);
+            return evidence;
+        }
+
+        var gas = GalaxyLines.Balmer.Select(Of).Aggregate(Greater);
+        foreach (var group in GalaxyLines.Ions) narrow.Add(group, _firstShift, gas);
+        gas = GalaxyLines.Mixed.Select(Of).Append(gas).Aggregate(Greater);
+        foreach (var group in GalaxyLines.Others) narrow.Add(group, _firstShift, total);
+        for (var i = 0; i < total.Length; i++) total[i] += gas[i];
+    }
+
+    private static float[] Greater(float[] first, float[] second)
+    {
+        for (var i = 0; i < first.Length; i++) first[i] = Math.Max(first[i], second[i]);
+        return first;
     }
 
     private double Width(double kmS) => Math.Sqrt(_cells.SigmaLn * _cells.SigmaLn + kmS * kmS / (KmSPerLn * KmSPerLn));
