@@ -40,6 +40,18 @@ public class GridSearchTests
         Assert.All(peaks, p => Assert.InRange(p.LnShift, Math.Log(1.1) - Cells.Step, Math.Log(4) + Cells.Step));
     }
 
+    /// <summary>One hit of a cosmic ray or a remnant of the sky is claimed by every group of lines; it must not outweigh a galaxy seen by its stars.</summary>
+    [Fact]
+    public void A_spike_does_not_hide_a_galaxy_without_lines()
+    {
+        var simulated = SimulatedSurvey.Observe(4, "fibre", "galaxy-passive", 0.3, 8);
+        var spectrum = simulated.Spectra[0];
+        foreach (var at in new[] { 1500, 2600, 3300 })
+            for (var i = at; i < at + 4; i++) spectrum.Flux[i] += 25 / Math.Sqrt(Math.Max(1e-9, spectrum.InverseVariance![i]));
+        var best = new GridSearch(CellsOf(simulated), new MatchSettings()).Peaks().Where(p => p.Model.Kind == ObjectKind.Galaxy).MaxBy(p => p.LnEvidence);
+        Assert.Equal(Math.Log(1.3), best.LnShift, 0.003);
+    }
+
     private static bool Finds(SimulatedObservation simulated)
     {
         var kind = Enum.Parse<ObjectKind>(simulated.Kind.ToString());
