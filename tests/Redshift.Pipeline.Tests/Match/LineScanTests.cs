@@ -68,7 +68,8 @@ public class LineScanTests
         for (var i = 0; i < spectrum.Count; i++)
         {
             var share = ModelError.Uniform.Share(spectrum.LnWavelength[i]) * spectrum.Continuum[i];
-            var w = 1 / (1 / spectrum.Weight[i] + share * share * Math.Max(1, Cells.Step / spectrum.PixelWidth[i]));
+            var excess = FitPixels.LineError * Math.Max(0, spectrum.Flux[i] - spectrum.Continuum[i]);
+            var w = 1 / (1 / spectrum.Weight[i] + (share * share + excess * excess) * Math.Max(1, Cells.Step / spectrum.PixelWidth[i]));
             weight += w;
             signal += w * (spectrum.Flux[i] - spectrum.Continuum[i]);
         }
