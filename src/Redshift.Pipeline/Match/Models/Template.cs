@@ -13,9 +13,10 @@ internal sealed class Template
     /// <summary>Structure wider than this σ in ln λ is colour, which dust and flux calibration change at will.</summary>
     private const double ColourScale = 0.10;
 
-    // All templates at one level take 40 MB.
+    // All templates at one level take 40 MB; a spectrum with pixels of even width in wavelength has some ten levels, each with a part of them.
+    // With less room, archives of many spectrographs spend most of their time on broadening.
     private static readonly RecentlyUsed<(Template Template, int Level), float[]> Copies =
-        new(48 << 20, static key => key.Template.Broaden(key.Level), static copy => copy.Length * sizeof(float));
+        new(192 << 20, static key => key.Template.Broaden(key.Level), static copy => copy.Length * sizeof(float));
 
     private readonly float[] _flattened;
 
