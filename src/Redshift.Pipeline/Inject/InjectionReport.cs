@@ -1,4 +1,5 @@
 using Redshift.Physics.Statistics;
+using Redshift.Pipeline.Match.Posterior;
 using Redshift.Pipeline.Report;
 using Redshift.Pipeline.Report.Explain;
 using Redshift.Pipeline.Results;
@@ -72,6 +73,8 @@ public sealed class InjectionReport(Recovery recovery, int givers, ulong seed, I
         foreach (var (title, _, groups) in Tables) TextTable.Write(output, title, GroupColumns, groups);
         TextTable.Write(output, "Confidence, stated and found (band: 95 % if confidences are true)", ReliabilityColumns, recovery.Reliability);
         TextTable.Write(output, "Maps from evidence to confidence (log score: cross-validated, less is better)", MapColumns, maps);
+        if (maps.Any(map => map.Map.Greatest < Calibration.Firm))
+            output.WriteLine("Where the greatest confidence is below 0.99 no answer can be firm; more objects (--count) may support a greater one.");
         output.WriteLine();
         foreach (var line in Limits) output.WriteLine(line);
     }

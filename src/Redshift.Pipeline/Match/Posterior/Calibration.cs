@@ -16,6 +16,9 @@ internal static class Calibration
     /// <summary>No calibration sample supports a greater probability.</summary>
     public const double Greatest = 0.999;
 
+    /// <summary>Confidence from which an answer is firm.</summary>
+    public const double Firm = 0.99;
+
     /// <summary>For answers that are galaxies.</summary>
     public static readonly ConfidenceMap Galaxies = new(-0.9, 0.26, 1.0, 0);
 
@@ -34,7 +37,7 @@ internal static class Calibration
     /// <summary>The verdict that goes with a confidence.</summary>
     public static Verdict Verdict(double confidence, double lnOddsFeatures, bool hasContinuum) => confidence switch
     {
-        >= 0.99 => Results.Verdict.Firm,
+        >= Firm => Results.Verdict.Firm,
         >= 0.9 => Results.Verdict.Likely,
         _ => lnOddsFeatures < NoFeatures && !hasContinuum ? Results.Verdict.Nothing : Results.Verdict.Unsettled,
     };

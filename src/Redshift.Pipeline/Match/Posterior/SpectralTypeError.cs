@@ -51,7 +51,7 @@ internal static class SpectralTypeError
     /// </summary>
     private static double Floor(string type) => type[0] switch
     {
-        'D' => 0.7,
+        'D' => 1,
         'O' or 'B' or 'F' or 'K' => 4,
         'A' => 3.5,
         'G' => 4.5,
