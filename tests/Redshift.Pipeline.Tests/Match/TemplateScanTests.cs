@@ -63,21 +63,17 @@ public class TemplateScanTests
     [InlineData(4000, 8500)]
     [InlineData(1105, 5000)]
     [InlineData(6000, 30000)]
-    public void Few_shifts_are_the_direct_sum_over_cells(double shortest, double longest)
+    public void Few_shifts_are_the_direct_sum_over_double_cells(double shortest, double longest)
     {
         const int First = -17;
         var cells = Data(Lines(1), shortest, longest);
         var level = LineSpreadLevels.Nearest(cells.SigmaLn);
         var templates = Range.Templates.Select(t => t.Template).ToList();
-        var rows = StarScan.Of(templates, cells).LnEvidence(cells, First, 35);
+        var rows = StarScan.Of(templates, cells).LnEvidence(cells.Pairs, First, 35);
         Assert.Equal(templates.Count, rows.Length);
         var greatest = rows.Max(r => r.Max(Math.Abs));
         for (var t = 0; t < templates.Count; t++)
-        {
-            var relative = CellTemplate.Relative(templates[t], level);
-            for (var s = 0; s < 35; s++)
-                Assert.Equal(Direct(relative, cells.TemplateGradient, cells.TemplateCurvature, cells.First, First + s, Spread), rows[t][s], 1e-4 * greatest);
-        }
+            for (var s = 0; s < 35; s++) Assert.Equal(Direct(cells, CellTemplate.Relative(templates[t], level), First + s, Spread), rows[t][s], 1e-4 * greatest);
     }
 
     private (float[] Best, short[] Which, float[] Apart) Scan(int first, int shifts)
@@ -88,12 +84,12 @@ public class TemplateScanTests
         return (best, which, apart);
     }
 
-    private double Direct(SearchedTemplate template, int shift)
+    private double Direct(SearchedTemplate template, int shift) => Direct(_cells, CellTemplate.Relative(template.Template, Level), shift, template.Spread);
+
+    private static double Direct(Cells cells, float[] relative, int shift, double spread)
     {
-        var odd = _cells.First & 1;
-        return Direct(
-            Pairs(CellTemplate.Relative(template.Template, Level), 0, 0.5f), Pairs(_cells.TemplateGradient, odd, 1), Pairs(_cells.TemplateCurvature, odd, 1),
-            (_cells.First - odd) / 2, shift, template.Spread);
+        var odd = cells.First & 1;
+        return Direct(Pairs(relative, 0, 0.5f), Pairs(cells.TemplateGradient, odd, 1), Pairs(cells.TemplateCurvature, odd, 1), (cells.First - odd) / 2, shift, spread);
     }
 
     private static float[] Pairs(float[] values, int empty, float factor)

@@ -52,6 +52,9 @@ internal sealed class Cells
     /// <summary>Mean σ of the line spread in ln λ, the cell included.</summary>
     public double SigmaLn { get; private set; }
 
+    /// <summary>The same in double cells; made when first asked for.</summary>
+    public DoubleCells Pairs => field ??= new(this);
+
     public static Cells Build(IReadOnlyList<NormalizedSpectrum> spectra, ModelError modelError)
     {
         var first = (int)Math.Floor((spectra.Min(s => s.LnWavelength[0]) - LnOrigin) / Step) - Margin;

@@ -52,14 +52,15 @@ internal sealed class GridSearch
 
     private List<Peak> Stars()
     {
-        var reach = (int)Math.Ceiling(FastestStarKmS / KmSPerLn / Cells.Step);
-        int from = Math.Max(-reach, _firstShift), to = Math.Min(reach, _firstShift + _shifts - 1);
+        const double Stride = 2 * Cells.Step;
+        var reach = (int)Math.Ceiling(FastestStarKmS / KmSPerLn / Stride);
+        int from = Math.Max(-reach, _firstShift >> 1), to = Math.Min(reach, (_firstShift + _shifts - 1) >> 1);
         var peaks = new List<Peak>();
-        var evidence = StarScan.Of(_library.StarTemplates, _cells).LnEvidence(_cells, from, Math.Max(0, to - from + 1));
+        var evidence = StarScan.Of(_library.StarTemplates, _cells).LnEvidence(_cells.Pairs, from, Math.Max(0, to - from + 1));
         for (var t = 0; t < evidence.Length; t++)
         {
             var model = _library.Stars[t];
-            peaks.AddRange(Highest(evidence[t], from, 1, 2, _ => model));
+            peaks.AddRange(Highest(evidence[t], 2 * from, 2, 2, _ => model));
         }
 
         return [.. peaks.OrderByDescending(p => p.LnEvidence).Take(10)];
@@ -149,10 +150,18 @@ internal sealed class GridSearch
         {
             if (taken.Exists(t => Math.Abs(t - shift) * stride < Separation)) continue;
             taken.Add(shift);
-            peaks.Add(new(model(shift), (firstShift + shift * stride) * Cells.Step, value));
+            peaks.Add(new(model(shift), (firstShift + (stride == 1 ? shift : (shift + Offset(evidence, shift)) * stride)) * Cells.Step, value));
             if (peaks.Count == count) break;
         }
 
         return peaks;
+    }
+
+    /// <summary>Where between its neighbours a maximum lies, in steps: the top of the parabola through them.</summary>
+    private static double Offset(ReadOnlySpan<float> evidence, int at)
+    {
+        if (at == 0 || at + 1 == evidence.Length) return 0;
+        double below = evidence[at] - evidence[at - 1], above = evidence[at] - evidence[at + 1];
+        return double.IsFinite(below + above) && below + above > 0 ? 0.5 * (below - above) / (below + above) : 0;
     }
 }

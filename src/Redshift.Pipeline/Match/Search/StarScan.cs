@@ -3,16 +3,19 @@ using Redshift.Pipeline.Match.Models;
 
 namespace Redshift.Pipeline.Match.Search;
 
-/// <summary>ln evidence of templates over the few shifts that velocities within the Galaxy make, summed directly, eight templates at once.</summary>
+/// <summary>
+/// ln evidence of templates over the few shifts that velocities within the Galaxy make, summed directly, eight templates at once, on double
+/// cells: which few stars are worth an exact fit shows as well on them.
+/// </summary>
 internal sealed class StarScan
 {
     /// <summary>Shifts that are summed together: each template is read once for all of them.</summary>
     private const int Together = 4;
 
-    /// <summary>The range of cells is rounded outwards to so many, so that observations alike share the templates.</summary>
-    private const int Rounding = 1024;
+    /// <summary>The range of double cells is rounded outwards to so many, so that observations alike share the templates.</summary>
+    private const int Rounding = 512;
 
-    // Some 3 MB for optical spectra of one resolution.
+    // Some 1.5 MB for optical spectra of one resolution.
     private static readonly RecentlyUsed<(IReadOnlyList<Template> Templates, int Level, int From, int To), StarScan> Prepared =
         new(40 << 20, static key => new(key.Templates, key.Level, key.From, key.To), static scan => scan._octets.Sum(static octet => (long)octet.Length * Vector256<byte>.Count));
 
@@ -23,7 +26,7 @@ internal sealed class StarScan
     {
         Count = templates.Count;
         _start = from;
-        _octets = [.. templates.Chunk(Vector256<float>.Count).Select(octet => Octet.Interleave([.. octet.Select(t => CellTemplate.Relative(t, level)[from..to])]))];
+        _octets = [.. templates.Chunk(Vector256<float>.Count).Select(octet => Octet.Pairs([.. octet.Select(t => CellTemplate.Relative(t, level))])[from..to])];
     }
 
     /// <summary>Number of templates.</summary>
@@ -34,16 +37,17 @@ internal sealed class StarScan
     /// <param name="cells">The data.</param>
     public static StarScan Of(IReadOnlyList<Template> templates, Cells cells)
     {
-        var from = Math.Clamp(cells.First / Rounding * Rounding, 0, CellTemplate.Length);
-        var to = Math.Clamp((cells.First + cells.Count + Rounding - 1) / Rounding * Rounding, from, CellTemplate.Length);
+        var pairs = cells.Pairs;
+        var from = Math.Clamp(pairs.First / Rounding * Rounding, 0, CellTemplate.Length / 2);
+        var to = Math.Clamp((pairs.First + pairs.Gradient.Length + Rounding - 1) / Rounding * Rounding, from, CellTemplate.Length / 2);
         return Prepared[(templates, LineSpreadLevels.Nearest(cells.SigmaLn), from, to)];
     }
 
     /// <summary>ln evidence of each template, one row each, at shifts from a first one on.</summary>
     /// <param name="cells">The data.</param>
-    /// <param name="firstShift">Shift in cells of the first column; none may move cells by more than the margin of the data.</param>
+    /// <param name="firstShift">Shift in double cells of the first column; none may move cells by more than the margin of the data.</param>
     /// <param name="count">Number of shifts.</param>
-    public float[][] LnEvidence(Cells cells, int firstShift, int count)
+    public float[][] LnEvidence(DoubleCells cells, int firstShift, int count)
     {
         var rows = new float[Count][];
         for (var t = 0; t < Count; t++) rows[t] = new float[count];
@@ -52,7 +56,7 @@ internal sealed class StarScan
         return rows;
     }
 
-    private void Take(Cells cells, int octet, int firstShift, int s, float[][] rows)
+    private void Take(DoubleCells cells, int octet, int firstShift, int s, float[][] rows)
     {
         Span<Vector256<float>> found = stackalloc Vector256<float>[Together];
         Sum(cells, _octets[octet], _start, firstShift + s, found);
@@ -61,18 +65,18 @@ internal sealed class StarScan
                 rows[octet * Vector256<float>.Count + lane][s + k] = found[k][lane];
     }
 
-    private static void Sum(Cells cells, Vector256<float>[] templates, int start, int shift, Span<Vector256<float>> found)
+    private static void Sum(DoubleCells cells, Vector256<float>[] templates, int start, int shift, Span<Vector256<float>> found)
     {
         // At the ends of the range some of the shifts meet the empty margin of the data.
-        int from = Math.Max(0, cells.First + Cells.Margin - shift - Together - start), to = Math.Min(templates.Length, cells.First + cells.Count - Cells.Margin - shift - start);
+        int from = Math.Max(0, cells.First + DoubleCells.Margin - shift - Together - start), to = Math.Min(templates.Length, cells.First + cells.Gradient.Length - DoubleCells.Margin - shift - start);
         var offset = start + shift - cells.First;
         Vector256<float> n0 = default, n1 = default, n2 = default, n3 = default, d0 = default, d1 = default, d2 = default, d3 = default;
         for (var t = from; t < to; t++)
         {
             var value = templates[t];
             var square = value * value;
-            var gradient = cells.TemplateGradient.AsSpan(t + offset, Together);
-            var curvature = cells.TemplateCurvature.AsSpan(t + offset, Together);
+            var gradient = cells.Gradient.AsSpan(t + offset, Together);
+            var curvature = cells.Curvature.AsSpan(t + offset, Together);
             n0 += value * gradient[0];
             n1 += value * gradient[1];
             n2 += value * gradient[2];

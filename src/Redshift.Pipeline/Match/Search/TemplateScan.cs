@@ -27,17 +27,15 @@ internal sealed class TemplateScan
     public TemplateScan(Cells cells)
     {
         _level = LineSpreadLevels.Nearest(cells.SigmaLn);
-        int first = cells.First + Cells.Margin, end = cells.First + cells.Count - Cells.Margin;
-        _first = first >> 1;
-        _count = ((end + 1) >> 1) - _first;
+        var pairs = cells.Pairs;
+        (_first, _count) = (pairs.First + DoubleCells.Margin, pairs.Gradient.Length - 2 * DoubleCells.Margin);
         _transform = FourierTransform.OfLength(TransformLength(_count));
         var n = _transform.Length;
         (_dataRe, _dataIm, _workRe, _workIm) = (new Vector256<float>[n], new Vector256<float>[n], new Vector256<float>[n], new Vector256<float>[n]);
-        for (var k = first; k < end; k++)
+        for (var at = 0; at < _count; at++)
         {
-            var at = (k >> 1) - _first;
-            _dataRe[at] += Vector256.Create(cells.TemplateGradient[k - cells.First]);
-            _dataIm[at] += Vector256.Create(cells.TemplateCurvature[k - cells.First]);
+            _dataRe[at] = Vector256.Create(pairs.Gradient[at + DoubleCells.Margin]);
+            _dataIm[at] = Vector256.Create(pairs.Curvature[at + DoubleCells.Margin]);
         }
 
         _transform.Forward(_dataRe, _dataIm);

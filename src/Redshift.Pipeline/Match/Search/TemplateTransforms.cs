@@ -56,10 +56,7 @@ internal sealed class TemplateTransforms
     private static Vector256<float>[] Pairs(TemplateRange range, int octet, int level)
     {
         var lanes = range.Templates.Skip(octet * Vector256<float>.Count).Take(Vector256<float>.Count);
-        var single = Octet.Interleave([.. lanes.Select(t => CellTemplate.Relative(t.Template, level, range.ForestLnShift, endsAtLimit: t.Index >= 0))]);
-        var pairs = new Vector256<float>[single.Length / 2];
-        for (var j = 0; j < pairs.Length; j++) pairs[j] = (single[2 * j] + single[2 * j + 1]) * 0.5f;
-        return pairs;
+        return Octet.Pairs([.. lanes.Select(t => CellTemplate.Relative(t.Template, level, range.ForestLnShift, endsAtLimit: t.Index >= 0))]);
     }
 
     private static void Cut(Vector256<float>[] templates, int start, Span<Vector256<float>> into)
