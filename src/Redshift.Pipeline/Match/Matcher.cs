@@ -46,18 +46,9 @@ internal sealed class Matcher(MatchSettings settings)
     /// <returns>The decision with the fit it rests on, or null where nothing can be matched.</returns>
     public MatchResult? Match(NormalizedObservation observation)
     {
-        var cell = FitCell(observation);
-        var runs = observation.Spectra.Select(s => PixelRun.Binned(s, cell)).ToList();
         var peaks = Search(observation, ModelError.Uniform);
         if (peaks.Count == 0) return null;
-        var before = FitPixels.Build(runs, ModelError.Uniform, Cells.Step);
-        var (error, leaders) = Learn(peaks, before, runs, cell);
-        var pixels = FitPixels.Build(runs, error, Cells.Step);
-        var fit = new ModelFit(pixels);
-        if (pixels.Information < SearchAgain * before.Information) leaders = Distinct(leaders.Concat(Exact(fit, Search(observation, error), cell)));
-        var refined = Climb(fit, Leaders(InFull(fit, leaders)), cell);
-        refined.AddRange(BehindGas(fit, refined, cell));
-        var excess = fit.Excess(refined.MaxBy(r => r.LnEvidence)!);
+        var (refined, error, excess) = Refine(observation, peaks);
         var hypotheses = refined.Select(r => r.Soften(excess))
             .Select(r => new Hypothesis(r, r.LnVolume + RedshiftPrior.LnDensity(r.Model.Kind, r.LnShift, observation.Resolution, observation.SnrPixel, settings)))
             .Where(h => double.IsFinite(h.LnWeight)).OrderByDescending(h => h.LnWeight).ToList();
@@ -65,31 +56,52 @@ internal sealed class Matcher(MatchSettings settings)
         return new(PosteriorSum.Decide(hypotheses, observation.Resolution), hypotheses, error, excess);
     }
 
+    /// <summary>The exact fits: a first round shows how wrong models are, a second, knowing it, which rivals there are.</summary>
+    private (List<Refined> Refined, ModelError Error, double Excess) Refine(NormalizedObservation observation, List<Peak> peaks)
+    {
+        var cell = FitCell(observation);
+        List<PixelRun> runs = Runs(observation, cell), coarse = Runs(observation, 2 * cell);
+        var before = FitPixels.Build(runs, ModelError.Uniform, Cells.Step);
+        var fit = new ModelFit(before);
+        var leaders = FirstLook(Look(coarse, ModelError.Uniform), Settle(fit, peaks, cell));
+        var error = Learn(fit, leaders, before, runs, cell);
+
+        var pixels = FitPixels.Build(runs, error, Cells.Step);
+        fit = new ModelFit(pixels);
+        var look = Look(coarse, error);
+        if (pixels.Information < SearchAgain * before.Information)
+            leaders = Distinct(leaders.Concat(FirstLook(look, Settle(fit, Search(observation, error), cell))));
+        var refined = Climb(fit, Rivals(WithVariants(fit, look, InFull(fit, leaders))), cell);
+        refined.AddRange(BehindGas(fit, refined, cell));
+        return (refined, error, fit.Excess(refined.MaxBy(r => r.LnEvidence)!));
+    }
+
+    private static List<PixelRun> Runs(NormalizedObservation observation, double cell) => [.. observation.Spectra.Select(s => PixelRun.Binned(s, cell))];
+
     private List<Peak> Search(NormalizedObservation observation, ModelError error) =>
         new GridSearch(Cells.Build(observation.Spectra, error), settings).Peaks();
 
-    /// <summary>Measures the model error on the best model of a first round, and keeps the peaks that are worth a second.</summary>
-    private static (ModelError Error, List<Peak> Leaders) Learn(List<Peak> peaks, FitPixels pixels, List<PixelRun> runs, double cell)
+    /// <summary>For first looks, which tell places and models apart on pixels twice as wide as well.</summary>
+    private static ModelFit Look(List<PixelRun> coarse, ModelError error) => new(FitPixels.Build(coarse, error, Cells.Step));
+
+    /// <summary>Measures the model error on the best model of a first round.</summary>
+    private static ModelError Learn(ModelFit fit, List<Peak> leaders, FitPixels pixels, List<PixelRun> runs, double cell)
     {
-        var fit = new ModelFit(pixels);
-        var exact = Exact(fit, peaks, cell);
-        var best = exact.MaxBy(p => p.LnEvidence);
+        var best = InFull(fit, BestOfKinds(leaders)).MaxBy(p => p.LnEvidence);
         var climbed = Refinement.Climb(fit, best.Model, best.LnShift, 0.5 * cell);
         fit.Fit(climbed.Model, climbed.LnShift);
-        return (ModelError.Measure(pixels, runs, fit, climbed.LnShift), Leaders(exact));
+        return ModelError.Measure(pixels, runs, fit, climbed.LnShift);
     }
-
-    /// <summary>The peaks of a search worth an exact fit, with the ln evidence that it finds.</summary>
-    private static List<Peak> Exact(ModelFit fit, List<Peak> peaks, double cell) => WithVariants(fit, InFull(fit, FirstLook(fit, Settle(fit, peaks, cell))));
 
     /// <summary>
     /// The best peaks of each kind by fits without partners, and the first ones of whoever found them: a template that is wrong on its own
     /// may be right in a mixture, and must not take its strong lines down with it.
     /// </summary>
-    private static List<Peak> FirstLook(ModelFit fit, List<Peak> peaks) =>
-        [.. peaks.GroupBy(p => p.Model.Kind).SelectMany(g =>
-            Peak.OnePerPlace(g.Select(p => p with { LnEvidence = fit.LnEvidence(p.Model, p.LnShift, mixed: false) }), PlaceKmS(g.Key)).Take(FittedInFull)
-                .Concat(g.OrderByDescending(p => p.LnEvidence).Take(AlwaysFitted)).DistinctBy(p => (p.Model, p.LnShift)))];
+    private static List<Peak> FirstLook(ModelFit look, List<Peak> peaks) => [.. peaks.GroupBy(p => p.Model.Kind).SelectMany(found =>
+    {
+        var looked = found.OrderByDescending(p => p.LnEvidence).Select(p => p with { LnEvidence = look.LnEvidence(p.Model, p.LnShift, mixed: false) }).ToList();
+        return Peak.OnePerPlace(looked, PlaceKmS(found.Key)).Take(FittedInFull).Union(looked.Take(AlwaysFitted));
+    })];
 
     /// <summary>Redshifts so near, in km/s, are one place to the choice of a model; a star's place is known, its type is what is looked for.</summary>
     private static double PlaceKmS(ObjectKind kind) => kind switch
@@ -106,12 +118,12 @@ internal sealed class Matcher(MatchSettings settings)
     /// Adds, at the leading places of galaxies and quasars, the kind's other models that a first look prefers: the search knows which place,
     /// but only roughly which model.
     /// </summary>
-    private static List<Peak> WithVariants(ModelFit fit, List<Peak> peaks)
+    private static List<Peak> WithVariants(ModelFit fit, ModelFit look, List<Peak> peaks)
     {
         var places = Promising(peaks).Where(p => p.Model.Kind is ObjectKind.Galaxy or ObjectKind.Quasar).GroupBy(p => p.Model.Kind)
             .SelectMany(g => Peak.OnePerPlace(g, PlaceKmS(g.Key)).Take(VariedPlaces));
         var variants = places.SelectMany(place => ModelLibrary.Instance.OfKind(place.Model.Kind)
-            .Select(model => place with { Model = model, LnEvidence = fit.LnEvidence(model, place.LnShift, mixed: false) })
+            .Select(model => place with { Model = model, LnEvidence = look.LnEvidence(model, place.LnShift, mixed: false) })
             .OrderByDescending(p => p.LnEvidence).Take(VariantsInFull)).ToList();
         return Distinct(peaks.Concat(InFull(fit, variants)));
     }
@@ -119,8 +131,10 @@ internal sealed class Matcher(MatchSettings settings)
     /// <summary>The peaks, each model once at a place.</summary>
     private static List<Peak> Distinct(IEnumerable<Peak> peaks) => [.. peaks.DistinctBy(p => (p.Model, Math.Round(p.LnShift / Cells.Step)))];
 
-    private static List<Peak> Leaders(List<Peak> peaks) =>
-        [.. Promising(peaks).Union(peaks.GroupBy(p => p.Model.Kind).SelectMany(g => g.OrderByDescending(p => p.LnEvidence).Take(AlwaysRivals)))];
+    private static List<Peak> Rivals(List<Peak> peaks) => [.. Promising(peaks).Union(BestOfKinds(peaks))];
+
+    private static IEnumerable<Peak> BestOfKinds(List<Peak> peaks) =>
+        peaks.GroupBy(p => p.Model.Kind).SelectMany(g => g.OrderByDescending(p => p.LnEvidence).Take(AlwaysRivals));
 
     private static List<Peak> Promising(List<Peak> peaks)
     {
