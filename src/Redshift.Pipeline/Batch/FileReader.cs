@@ -21,9 +21,14 @@ internal sealed class FileReader(
     {
         var file = new OpenFile(item.File, entries);
         var stamp = item.File.Problem is null ? FileStamp.Of(item.File.Path) : FileStamp.None;
-        if (!TryHash(item.File, out var hash, out var problem))
+        if (IsForOthers(file.Source, item.File.Path, stamp.Size))
         {
-            await entries.WriteAsync(new FileBegun(file.Source, FileStamp.None, "", "", Keeps: false), token).ConfigureAwait(false);
+            await entries.WriteAsync(Unread(file.Source), token).ConfigureAwait(false);
+            file.Bytes = stamp.Size;
+        }
+        else if (!TryHash(item.File, out var hash, out var problem))
+        {
+            await entries.WriteAsync(Unread(file.Source), token).ConfigureAwait(false);
             await file.ReportAsync(StoredOutcome.Of(problem), 0, problem).ConfigureAwait(false);
         }
         else
@@ -38,6 +43,16 @@ internal sealed class FileReader(
         }
 
         await file.LeaveAsync().ConfigureAwait(false);
+    }
+
+    // Of a large file the headers tell whether this part has to read it: parts must not all read all stacks.
+    private bool IsForOthers(string source, string path, long size)
+    {
+        if (size < Shard.LargeFile || shard == Shard.Whole)
+            return false;
+        using var reading = new FileReading(source, settings);
+        return Guarded(source, null, () => reading.Open(path), static fault => fault) is null
+            && !Enumerable.Range(0, reading.Rows).Any(row => shard.Owns(source, size, row));
     }
 
     private async Task ReadSpectraAsync(InputFile input, OpenFile file, Func<int, bool> isWanted, CancellationToken token)
@@ -84,6 +99,8 @@ internal sealed class FileReader(
             return false;
         }
     }
+
+    private static FileBegun Unread(string source) => new(source, FileStamp.None, "", "", Keeps: false);
 
     private static Reject Changed(InputFile file) => File.Exists(file.Path)
         ? new(file.Source, null, "file", "another size or time after reading than before", "a file that nobody writes; run again when it is complete")

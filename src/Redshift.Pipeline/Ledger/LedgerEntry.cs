@@ -7,7 +7,7 @@ namespace Redshift.Pipeline.Ledger;
 /// <param name="Bytes">How much of the input is settled with it, for the progress.</param>
 public abstract record LedgerEntry(string Source, double Bytes);
 
-/// <summary>A file is read from now on.</summary>
+/// <summary>A file is read from now on, or, without stamp and hash, is left alone.</summary>
 /// <param name="Source">The file.</param>
 /// <param name="Stamp">Its size and time.</param>
 /// <param name="Hash">Hash of its content.</param>

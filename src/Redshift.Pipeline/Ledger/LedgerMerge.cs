@@ -18,17 +18,19 @@ public static class LedgerMerge
         LIMIT 1
         """;
 
+    // Of large files a part knows only those that it had spectra of.
     private const string OtherFiles =
         """
         SELECT p.source FROM part.file p JOIN main.file m ON m.source = p.source
-        WHERE p.listed = 1 AND (p.size <> m.size OR p.hash <> m.hash)
+        WHERE p.listed = 1 AND EXISTS (SELECT 1 FROM part.outcome o WHERE o.file = p.id) AND (p.size <> m.size OR p.hash <> m.hash)
         LIMIT 1
         """;
 
     private const string Union =
         """
         INSERT OR IGNORE INTO main.file (source, path, listed, size, modified, hash, fingerprint, complete)
-        SELECT source, path, 1, size, modified, hash, fingerprint, complete FROM part.file WHERE listed = 1 ORDER BY source;
+        SELECT source, path, 1, size, modified, hash, fingerprint, complete FROM part.file p
+        WHERE listed = 1 AND EXISTS (SELECT 1 FROM part.outcome o WHERE o.file = p.id) ORDER BY source;
         INSERT OR IGNORE INTO main.outcome (file, row, state, milliseconds, cells, lines)
         SELECT m.id, o.row, o.state, o.milliseconds, o.cells, o.lines
         FROM part.file p CROSS JOIN main.file m ON m.source = p.source CROSS JOIN part.outcome o ON o.file = p.id

@@ -100,6 +100,21 @@ public sealed class FileReaderTests : IDisposable
     }
 
     [Fact]
+    public async Task Of_a_large_file_without_a_spectrum_of_its_part_only_the_headers_are_read()
+    {
+        File.WriteAllBytes(_file.Path, Stack());
+        using (var file = File.OpenWrite(_file.Path)) file.SetLength(Shard.LargeFile);
+        var others = Enumerable.Range(1, 7).Select(index => new Shard(index, 7)).Where(part => !part.Owns("stack.fits", Shard.LargeFile, 0));
+        foreach (var part in others)
+            await new FileReader(new(), "fingerprint", part, _work.Writer, _entries.Writer).ReadAsync(new(_file, null), CancellationToken.None);
+
+        Assert.Equal(6, Entries().OfType<FileBegun>().Count());
+        Assert.All(Entries().OfType<FileBegun>(), begun => Assert.Equal((FileStamp.None, "", false), (begun.Stamp, begun.Hash, begun.Keeps)));
+        Assert.All(Entries().OfType<FileEnded>(), ended => Assert.Equal((Shard.LargeFile, null), (ended.Bytes, ended.Spoilt)));
+        Assert.Empty(Entries().OfType<SpectrumDone>());
+    }
+
+    [Fact]
     public async Task An_interrupt_leaves_the_file_open()
     {
         using var interrupt = new CancellationTokenSource();

@@ -29,6 +29,7 @@ public sealed class LedgerMergeTests : IDisposable
             Part("three", "3/3"),
         ];
 
+        KnowAlso("three", "stack.fits");
         Assert.Empty(Merge(parts));
         var rows = Rows();
         Assert.Equal(["a.fits 0", "b.fits 1", "stack.fits 0", "stack.fits 1000", "c.fits "], rows);
@@ -120,6 +121,15 @@ public sealed class LedgerMergeTests : IDisposable
     }
 
     private static ObservationResult Answer(string source, int row) => Examples.Full() with { Observation = Examples.Observation(source, row) };
+
+    // A part knows large files that it has no spectra of by name only.
+    private void KnowAlso(string name, string source)
+    {
+        using var ledger = LedgerFile.Open(_folder.File(name));
+        using var listing = new LedgerListing(ledger);
+        listing.Add(source, "/" + source);
+        listing.Complete();
+    }
 
     private static string Ledger(string folder) => Path.Combine(folder, LedgerFile.Name);
 
