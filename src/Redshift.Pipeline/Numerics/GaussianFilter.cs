@@ -5,6 +5,8 @@ namespace Redshift.Pipeline.Numerics;
 /// <summary>Convolution with a normalised Gaussian on an even grid; the ends are continued by their last value.</summary>
 internal static class GaussianFilter
 {
+    private const int Passes = 4;
+
     /// <summary>Convolves.</summary>
     /// <param name="input">Values on an even grid.</param>
     /// <param name="sigma">Standard deviation in grid steps; below 0.3 the input is copied.</param>
@@ -26,9 +28,17 @@ internal static class GaussianFilter
         else ConvolveDirectly(input, sigma, output);
     }
 
+    /// <summary>How far, in grid steps, a value can reach others.</summary>
+    public static int Reach(double sigma) => sigma < 0.3 ? 0 : sigma > 12 ? Passes * HalfBox(sigma) : DirectReach(sigma);
+
+    private static int DirectReach(double sigma) => (int)Math.Ceiling(4 * sigma);
+
+    // Boxes whose variances add up to σ².
+    private static int HalfBox(double sigma) => (int)Math.Round((Math.Sqrt(12 * sigma * sigma / Passes + 1) - 1) / 2);
+
     private static void ConvolveDirectly(ReadOnlySpan<float> input, double sigma, Span<float> output)
     {
-        var reach = (int)Math.Ceiling(4 * sigma);
+        var reach = DirectReach(sigma);
         var kernel = Kernel(sigma, reach);
         using var lent = new LentArray<float>(input.Length + 2 * (reach + Kernels.Lanes));
         var padded = lent.Span;
@@ -48,8 +58,7 @@ internal static class GaussianFilter
     /// <summary>Four running means in a row come within a percent of a Gaussian of the same variance (central limit theorem).</summary>
     private static void ConvolveByBoxes(ReadOnlySpan<float> input, double sigma, Span<float> output)
     {
-        const int Passes = 4;
-        var half = (int)Math.Round((Math.Sqrt(12 * sigma * sigma / Passes + 1) - 1) / 2);
+        var half = HalfBox(sigma);
         var reach = Passes * half;
         using var lent = new LentArray<float>(input.Length + 2 * reach);
         var values = lent.Span;

@@ -45,7 +45,7 @@ public class AirColumnsTests
         }
     }
 
-    private static double Sun(double x) => At(Star.Template!.Broadened(Level), x, 0);
+    private static double Sun(double x) => At(Star.Template!.Broadened(Level, Stretch.Whole), x, 0);
 
     private static double Through(double x, double dry, double water) =>
         (1 - dry * At(AirTransmission.All[0].Absorbed(Level), x, AirTransmission.Offset)) * (1 - water * 0.5 * At(AirTransmission.All[1].Absorbed(Level), x, AirTransmission.Offset));

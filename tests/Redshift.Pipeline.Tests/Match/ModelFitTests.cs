@@ -155,10 +155,10 @@ public class ModelFitTests
 
     private static float[] Column(FitPixels pixels, EmissionGroup group) => [.. pixels.LnWavelength.Take(pixels.Count).Select(x => (float)Profile(x, group))];
 
-    private static double Star(double ln) => Interpolated(Stars.Broadened(LineSpreadLevels.Nearest(70 / 299792.458)), ln);
+    private static double Star(double ln) => Interpolated(Stars.Broadened(LineSpreadLevels.Nearest(70 / 299792.458), Stretch.Whole), ln);
 
     private static float[] Rendered(Template template, FitPixels pixels) =>
-        [.. pixels.LnWavelength.Take(pixels.Count).Select((x, p) => (float)Interpolated(template.Broadened(LineSpreadLevels.Nearest(pixels.SigmaLn[p])), x))];
+        [.. pixels.LnWavelength.Take(pixels.Count).Select((x, p) => (float)Interpolated(template.Broadened(LineSpreadLevels.Nearest(pixels.SigmaLn[p]), Stretch.Whole), x))];
 
     private static double Interpolated(float[] rest, double ln)
     {

@@ -15,15 +15,20 @@ internal sealed class TemplateRenderer(FitPixels pixels)
     {
         var shift = lnShift / TemplateGrid.Step;
         var whole = (int)Math.Floor(shift);
-        foreach (var (start, end, level) in pixels.Levels) Render(template.Broadened(level), whole, (float)(shift - whole), start, into[start..end]);
+        foreach (var (start, end, level) in pixels.Levels)
+        {
+            // The pixels of a level rise in wavelength; between neighbours on the grid may mean the one below.
+            var stretch = Stretch.Around(pixels.TemplateIndex[start] - whole - 1, pixels.TemplateIndex[end - 1] - whole + 2);
+            Render(template.Broadened(level, stretch), whole + stretch.Start, (float)(shift - whole), start, into[start..end]);
+        }
     }
 
-    private void Render(ReadOnlySpan<float> values, int whole, float part, int start, Span<float> into)
+    private void Render(ReadOnlySpan<float> values, int origin, float part, int start, Span<float> into)
     {
         Span<float> drawn = stackalloc float[Kernels.Lanes];
         for (var p = 0; p < into.Length; p += Kernels.Lanes)
         {
-            Interpolate(values, Vector256.Create(pixels.TemplateIndex, start + p) - Vector256.Create(whole), Vector256.Create(pixels.TemplateFraction, start + p) - Vector256.Create(part), drawn);
+            Interpolate(values, Vector256.Create(pixels.TemplateIndex, start + p) - Vector256.Create(origin), Vector256.Create(pixels.TemplateFraction, start + p) - Vector256.Create(part), drawn);
             if (p + Kernels.Lanes <= into.Length) drawn.CopyTo(into[p..]);
             else drawn[..(into.Length - p)].CopyTo(into[p..]);
         }

@@ -13,10 +13,8 @@ internal sealed class Template
     /// <summary>Structure wider than this σ in ln λ is colour, which dust and flux calibration change at will.</summary>
     private const double ColourScale = 0.10;
 
-    // All templates at one level take 40 MB; a spectrum with pixels of even width in wavelength has some ten levels, each with a part of them.
-    // With less room, archives of many spectrographs spend most of their time on broadening.
-    private static readonly RecentlyUsed<(Template Template, int Level), float[]> Copies =
-        new(192 << 20, static key => key.Template.Broaden(key.Level), static copy => copy.Length * sizeof(float));
+    private static readonly RecentlyUsed<(Template Template, int Level, Stretch Stretch), float[]> Copies =
+        new(48 << 20, static key => key.Template.Broaden(key.Level, key.Stretch), static copy => copy.Length * sizeof(float));
 
     private readonly float[] _flattened;
 
@@ -50,19 +48,23 @@ internal sealed class Template
     /// <summary>The same spectrum with lines broadened by rotation.</summary>
     public Template Spun(double sigmaKmS) => new(this, sigmaKmS);
 
-    /// <summary>The flattened flux convolved to a level of <see cref="LineSpreadLevels"/>.</summary>
-    public float[] Broadened(int level) => Copies[(this, level)];
+    /// <summary>The flattened flux convolved to a level of <see cref="LineSpreadLevels"/>, over a stretch of the template grid.</summary>
+    public float[] Broadened(int level, Stretch stretch) => Copies[(this, level, stretch)];
 
-    /// <summary>The same, not kept, for who makes something else of it.</summary>
+    /// <summary>The same over the whole grid, not kept, for who makes something else of it.</summary>
     /// <param name="level">The level.</param>
     /// <param name="into">Receives the values, <see cref="TemplateGrid.Count"/> of them.</param>
     public void Broaden(int level, Span<float> into) => GaussianFilter.Convolve(_flattened, LineSpreadLevels.Sigma(level) / TemplateGrid.Step, into);
 
-    private float[] Broaden(int level)
+    // What lies further from a stretch than the filter reaches does not touch it.
+    private float[] Broaden(int level, Stretch stretch)
     {
-        var broadened = new float[_flattened.Length];
-        Broaden(level, broadened);
-        return broadened;
+        var sigma = LineSpreadLevels.Sigma(level) / TemplateGrid.Step;
+        var reach = GaussianFilter.Reach(sigma);
+        int from = Math.Max(0, stretch.Start - reach), to = Math.Min(_flattened.Length, stretch.End + reach);
+        using var lent = new LentArray<float>(to - from);
+        GaussianFilter.Convolve(_flattened.AsSpan(from..to), sigma, lent.Span);
+        return lent.Span[(stretch.Start - from)..(stretch.End - from)].ToArray();
     }
 
     private static float[] Flatten(float[] flux)
