@@ -49,8 +49,9 @@ internal sealed class Matcher(MatchSettings settings)
         var peaks = Search(observation, ModelError.Uniform);
         if (peaks.Count == 0) return null;
         var (refined, error, excess) = Refine(observation, peaks);
+        var light = SpreadOfLight.Of(observation);
         var hypotheses = refined.Select(r => r.Soften(excess))
-            .Select(r => new Hypothesis(r, r.LnVolume + RedshiftPrior.LnDensity(r.Model.Kind, r.LnShift, observation.Resolution, observation.SnrPixel, settings)))
+            .Select(r => new Hypothesis(r, r.LnVolume + RedshiftPrior.LnDensity(r.Model.Kind, r.LnShift, light, settings)))
             .Where(h => double.IsFinite(h.LnWeight)).OrderByDescending(h => h.LnWeight).ToList();
         if (hypotheses.Count == 0) return null;
         return new(PosteriorSum.Decide(hypotheses, observation.Resolution), hypotheses, error, excess);

@@ -8,8 +8,7 @@ namespace Redshift.Pipeline.Tests.Match;
 
 public class RedshiftPriorTests
 {
-    private const double Resolution = 2000;
-    private const double Snr = 5;
+    private static readonly SpreadOfLight Survey = new(2000, 5, 1);
 
     private static readonly MatchSettings Settings = new() { PriorStar = 2, PriorGalaxy = 3, PriorQuasar = 0.5, PriorNebula = 0.25 };
 
@@ -21,7 +20,7 @@ public class RedshiftPriorTests
     [InlineData(ObjectKind.Nebula, 0.25)]
     public void The_density_integrates_to_the_weight_of_the_kind(ObjectKind kind, double weight)
     {
-        double Density(double lnShift) => Math.Exp(RedshiftPrior.LnDensity(kind, lnShift, Resolution, Snr, Settings));
+        double Density(double lnShift) => Math.Exp(RedshiftPrior.LnDensity(kind, lnShift, Survey, Settings));
         var pieces = new[] { Math.Log(0.99), -0.003, -0.001, -0.0003, 0, 0.0003, 0.001, 0.0025, 0.0035, 0.01, 0.1, Math.Log(8.5) };
         var total = pieces.Zip(pieces.Skip(1), (from, to) => GaussLegendreRule.Integrate(Density, from, to, 64)).Sum();
         Assert.Equal(weight, total, 0.01 * weight);
@@ -30,7 +29,7 @@ public class RedshiftPriorTests
     [Fact]
     public void Stars_are_slow_and_galaxies_are_not_among_them()
     {
-        double Ratio(double kmS) => RedshiftPrior.LnDensity(ObjectKind.Star, kmS / 299792.458, Resolution, Snr, Settings) - RedshiftPrior.LnDensity(ObjectKind.Galaxy, kmS / 299792.458, Resolution, Snr, Settings);
+        double Ratio(double kmS) => RedshiftPrior.LnDensity(ObjectKind.Star, kmS / 299792.458, Survey, Settings) - RedshiftPrior.LnDensity(ObjectKind.Galaxy, kmS / 299792.458, Survey, Settings);
         Assert.InRange(Ratio(0), 1000, double.PositiveInfinity);
         Assert.InRange(Ratio(500), 1000, double.PositiveInfinity);
         Assert.InRange(Ratio(2000), double.NegativeInfinity, -10);
@@ -40,16 +39,18 @@ public class RedshiftPriorTests
     public void Who_expects_galaxies_gets_them_at_any_velocity()
     {
         var expecting = Settings with { Expect = ObjectKind.Galaxy };
-        Assert.Equal(RedshiftPrior.LnDensity(ObjectKind.Galaxy, 0.01, Resolution, Snr, Settings), RedshiftPrior.LnDensity(ObjectKind.Galaxy, 1e-5, Resolution, Snr, expecting), 0.02);
+        Assert.Equal(RedshiftPrior.LnDensity(ObjectKind.Galaxy, 0.01, Survey, Settings), RedshiftPrior.LnDensity(ObjectKind.Galaxy, 1e-5, Survey, expecting), 0.02);
     }
 
     [Fact]
     public void High_resolving_power_is_for_bright_objects()
     {
-        static double Galaxy(double resolution, double snr) => RedshiftPrior.LnDensity(ObjectKind.Galaxy, 0.1, resolution, snr, Settings);
+        static double Galaxy(double resolution, double snr, double range = 1) => RedshiftPrior.LnDensity(ObjectKind.Galaxy, 0.1, new(resolution, snr, range), Settings);
         Assert.Equal(Galaxy(500, 100), Galaxy(4000, 100));
         Assert.InRange(Galaxy(4000, 100) - Galaxy(40000, 100), 50, 70);
         Assert.Equal(0.1 * (Galaxy(4000, 10) - Galaxy(40000, 10)), Galaxy(4000, 1) - Galaxy(40000, 1), 1e-9);
-        Assert.Equal(RedshiftPrior.LnDensity(ObjectKind.Star, 0, 500, 100, Settings), RedshiftPrior.LnDensity(ObjectKind.Star, 0, 40000, 100, Settings));
+        Assert.Equal(Galaxy(4000, 100), Galaxy(4000, 100, 0.02));
+        Assert.InRange(Galaxy(12000, 100) - Galaxy(12000, 100, 0.02), 50, 70);
+        Assert.Equal(RedshiftPrior.LnDensity(ObjectKind.Star, 0, new(500, 100, 1), Settings), RedshiftPrior.LnDensity(ObjectKind.Star, 0, new(40000, 100, 0.02), Settings));
     }
 }

@@ -10,6 +10,13 @@ internal static class RedshiftPrior
     /// <summary>Resolving power of the surveys of faint objects, at most.</summary>
     private const double OrdinaryResolution = 4000;
 
+    /// <summary>
+    /// A window so narrow in ln λ, or an echelle order, at high resolving power is laid on a line that is known beforehand: on a star. Nobody
+    /// looks there for a galaxy of unknown redshift, whose broad lines moreover would be as wide as the order and its blaze (common practice).
+    /// </summary>
+    private const double NarrowRange = 0.08;
+    private const double NarrowPenalty = 60;
+
     /// <summary>Prior weight of reflected sunlight with cometary bands: few of the bodies that look like the Sun are comets.</summary>
     private const double CometShare = 0.002;
 
@@ -21,15 +28,14 @@ internal static class RedshiftPrior
     /// <summary>ln of the prior density in ln(1+z) of a kind at a redshift, weight of the kind included.</summary>
     /// <param name="kind">The kind.</param>
     /// <param name="lnShift">ln(1+z).</param>
-    /// <param name="resolution">Resolving power λ/FWHM.</param>
-    /// <param name="snr">Signal to noise of a pixel.</param>
+    /// <param name="light">How the light was spread.</param>
     /// <param name="settings">Shares of the kinds, and what the user expects.</param>
-    public static double LnDensity(ObjectKind kind, double lnShift, double resolution, double snr, MatchSettings settings) => kind switch
+    public static double LnDensity(ObjectKind kind, double lnShift, SpreadOfLight light, MatchSettings settings) => kind switch
     {
         ObjectKind.Star => Math.Log(settings.PriorStar) + Velocities(lnShift * KmSPerLn, 60, 200),
         ObjectKind.Nebula => Math.Log(settings.PriorNebula) + Velocities(lnShift * KmSPerLn, 40, 120),
-        ObjectKind.Galaxy => Math.Log(settings.PriorGalaxy) + Flat(lnShift, 1.2) + Distant(lnShift, settings) + Faint(resolution, snr),
-        ObjectKind.Quasar => Math.Log(settings.PriorQuasar) + Flat(lnShift, 0.4) + Distant(lnShift, settings) + Faint(resolution, snr),
+        ObjectKind.Galaxy => Math.Log(settings.PriorGalaxy) + Flat(lnShift, 1.2) + Distant(lnShift, settings) + Faint(light),
+        ObjectKind.Quasar => Math.Log(settings.PriorQuasar) + Flat(lnShift, 0.4) + Distant(lnShift, settings) + Faint(light),
         _ => Math.Log(CometShare) + Velocities(lnShift * KmSPerLn, 40, 120),
     };
 
@@ -53,10 +59,11 @@ internal static class RedshiftPrior
     /// it is, and the plainer the light is seen: a faint object may well be a galaxy on a large telescope (common practice; the numbers are rough,
     /// and small against the evidence of a real galaxy's lines).
     /// </summary>
-    private static double Faint(double resolution, double snr)
+    private static double Faint(SpreadOfLight light)
     {
-        var excess = Math.Max(0, Math.Log(resolution / OrdinaryResolution));
-        return -12 * excess * excess * Math.Min(1, snr / 10);
+        var excess = Math.Max(0, Math.Log(light.Resolution / OrdinaryResolution));
+        var narrow = light.Range < NarrowRange ? NarrowPenalty * Math.Min(1, excess) : 0;
+        return -(12 * excess * excess + narrow) * Math.Min(1, light.Snr / 10);
     }
 
     private static double Normal(double x, double sigma) => Math.Exp(-0.5 * x * x / (sigma * sigma)) / (sigma * 2.5066282746310002);
