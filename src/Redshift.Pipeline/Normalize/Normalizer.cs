@@ -55,6 +55,8 @@ internal static class Normalizer
         var width = PixelWidths(pixels.LnWavelength);
         var baseline = Baseline.Estimate(pixels.LnWavelength, flux, weight);
         OutlierFilter.Apply(flux, weight, baseline);
+        var sigma = LineSpread(pixels, width);
+        GreenLine.Mask(pixels.LnWavelength, sigma, weight);
         return new()
         {
             Original = pixels.Original,
@@ -63,7 +65,7 @@ internal static class Normalizer
             PixelWidth = width,
             Flux = flux,
             Weight = weight,
-            SigmaLn = LineSpread(pixels, width),
+            SigmaLn = sigma,
             Continuum = SmoothFit.Continuum(pixels.LnWavelength, flux, weight, baseline, Blanketing),
             Baseline = baseline,
             Noise = noise,
