@@ -57,6 +57,8 @@ internal static class Normalizer
         OutlierFilter.Apply(flux, weight, baseline);
         var sigma = LineSpread(pixels, width);
         GreenLine.Mask(pixels.LnWavelength, sigma, weight);
+        var continuum = SmoothFit.Continuum(pixels.LnWavelength, flux, weight, baseline, Blanketing);
+        if (pixels.Original.HasErrors) SkyRemains.Allow(flux, continuum, weight);
         return new()
         {
             Original = pixels.Original,
@@ -66,7 +68,7 @@ internal static class Normalizer
             Flux = flux,
             Weight = weight,
             SigmaLn = sigma,
-            Continuum = SmoothFit.Continuum(pixels.LnWavelength, flux, weight, baseline, Blanketing),
+            Continuum = continuum,
             Baseline = baseline,
             Noise = noise,
         };
