@@ -4,7 +4,8 @@ namespace Redshift.Pipeline.Normalize;
 
 /// <summary>
 /// The airglow's green line of oxygen, [O I] 5577, by far the brightest of the dark sky in the visible. What its subtraction leaves is no
-/// noise and passes for the emission line of a galaxy; observers leave these pixels out (common practice).
+/// noise and passes for the emission line of a galaxy. Where a file states no errors nothing warns of it: these pixels are left out
+/// (common practice). Stated errors know of the line, and a galaxy's own line may stand there.
 /// </summary>
 internal static class GreenLine
 {

@@ -56,7 +56,7 @@ internal static class Normalizer
         var baseline = Baseline.Estimate(pixels.LnWavelength, flux, weight);
         OutlierFilter.Apply(flux, weight, baseline);
         var sigma = LineSpread(pixels, width);
-        GreenLine.Mask(pixels.LnWavelength, sigma, weight);
+        if (!pixels.Original.HasErrors) GreenLine.Mask(pixels.LnWavelength, sigma, weight);
         var continuum = SmoothFit.Continuum(pixels.LnWavelength, flux, weight, baseline, Blanketing);
         if (pixels.Original.HasErrors) SkyRemains.Allow(flux, continuum, weight);
         return new()
