@@ -21,9 +21,11 @@ internal static class SynphotData
     public static string? Folder { get; } = Find();
 
     /// <summary>Reads a file that holds one spectrum.</summary>
-    public static Observation Read(string name)
+    /// <param name="name">Name of the file.</param>
+    /// <param name="fwhmA">Width of a sharp line in Å, where more is known of it than the file says.</param>
+    public static Observation Read(string name, double? fwhmA = null)
     {
-        var outcome = Assert.Single(SpectrumLoader.Load(Path.Combine(Folder!, name), name, Settings));
+        var outcome = Assert.Single(SpectrumLoader.Load(Path.Combine(Folder!, name), name, Settings with { FwhmA = fwhmA }));
         Assert.True(outcome.Observation is not null, outcome.Reject?.ToString());
         return outcome.Observation;
     }
