@@ -55,7 +55,7 @@ internal static class Refinement
             (middle, low, high) = (fit.LnEvidence(model, lnShift), fit.LnEvidence(model, lnShift - step), fit.LnEvidence(model, lnShift + step));
         }
 
-        var bend = Math.Max((2 * middle - low - high) / (step * step), 1e-3 / (step * step));
+        var bend = Math.Max((2 * middle - low - high) / (step * step), 1 / (step * step));
         return new(model, lnShift, 1 / Math.Sqrt(bend), Math.Max(middle, Math.Max(low, high)));
     }
 }
