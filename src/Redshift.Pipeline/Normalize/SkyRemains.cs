@@ -28,12 +28,11 @@ internal static class SkyRemains
         var bright = Bright(weight);
         double Deviation(bool inSky)
         {
-            var deviations = new List<double>(flux.Length);
+            var deviations = new float[flux.Length];
+            var count = 0;
             for (var i = 0; i < flux.Length; i++)
-                if (weight[i] > 0 && bright[i] == inSky) deviations.Add(Math.Abs(flux[i] - continuum[i]) * Math.Sqrt(weight[i]));
-            if (deviations.Count < Fewest) return 0;
-            deviations.Sort();
-            return deviations[(int)(Quantile * deviations.Count)];
+                if (weight[i] > 0 && bright[i] == inSky) deviations[count++] = Math.Abs(flux[i] - continuum[i]) * MathF.Sqrt(weight[i]);
+            return count < Fewest ? 0 : Selection.Take(deviations.AsSpan(0, count), (int)(Quantile * count));
         }
 
         double sky = Deviation(true), dark = Deviation(false);

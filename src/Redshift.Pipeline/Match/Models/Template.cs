@@ -14,7 +14,7 @@ internal sealed class Template
     private const double ColourScale = 0.10;
 
     private static readonly RecentlyUsed<(Template Template, int Level, Stretch Stretch), float[]> Copies =
-        new(48 << 20, static key => key.Template.Broaden(key.Level, key.Stretch), static copy => copy.Length * sizeof(float));
+        new(96 << 20, static key => key.Template.Broaden(key.Level, key.Stretch), static copy => copy.Length * sizeof(float));
 
     private readonly float[] _flattened;
 
