@@ -63,16 +63,9 @@ internal static class OutlierFilter
 
     private static void LimitWeights(float[] weight)
     {
-        const int Window = 64;
-        Span<double> used = stackalloc double[Window];
-        for (var start = 0; start < weight.Length; start += Window)
+        foreach (var (start, end, median) in TypicalWeight.InBlocks(weight, 64))
         {
-            var end = Math.Min(weight.Length, start + Window);
-            var count = 0;
-            foreach (var w in weight.AsSpan(Math.Max(0, end - Window)..end))
-                if (w > 0) used[count++] = w;
-            if (count == 0) continue;
-            var limit = (float)(Selection.Median(used[..count]) / (SmallestErrorShare * SmallestErrorShare));
+            var limit = (float)(median / (SmallestErrorShare * SmallestErrorShare));
             for (var i = start; i < end; i++) weight[i] = Math.Min(weight[i], limit);
         }
     }

@@ -45,18 +45,8 @@ internal static class SkyRemains
     private static bool[] Bright(float[] weight)
     {
         var bright = new bool[weight.Length];
-        Span<double> used = stackalloc double[Around];
-        for (var start = 0; start < weight.Length; start += Around)
-        {
-            var end = Math.Min(weight.Length, start + Around);
-            var count = 0;
-            foreach (var w in weight.AsSpan(Math.Max(0, end - Around)..end))
-                if (w > 0) used[count++] = w;
-            if (count == 0) continue;
-            var limit = Selection.Median(used[..count]) / (Brighter * Brighter);
-            for (var i = start; i < end; i++) bright[i] = weight[i] < limit;
-        }
-
+        foreach (var (start, end, median) in TypicalWeight.InBlocks(weight, Around))
+            for (var i = start; i < end; i++) bright[i] = weight[i] < median / (Brighter * Brighter);
         return bright;
     }
 }
