@@ -11,9 +11,6 @@ namespace Redshift.Pipeline.Match.Fit;
 /// </summary>
 internal sealed class FitPixels
 {
-    /// <summary>Emission lines are no Gaussians: their model is wrong by this share of what stands above the continuum.</summary>
-    public const double LineError = 0.08;
-
     private FitPixels(int count, int coefficients)
     {
         Count = count;
@@ -94,9 +91,8 @@ internal sealed class FitPixels
             var p = at + i;
             LnWavelength[p] = run.LnWavelength[i];
             Flux[p] = run.Flux[i];
-            var share = modelError.Share(run.LnWavelength[i]) * Math.Max(Math.Abs(run.Continuum[i]), run.Baseline[i]);
-            var excess = LineError * Math.Max(0, run.Flux[i] - run.Continuum[i]);
-            var modelVariance = (share * share + excess * excess) * Math.Max(1, errorWidth / run.Width[i]);
+            var level = Math.Max(Math.Abs(run.Continuum[i]), run.Baseline[i]);
+            var modelVariance = modelError.Variance(run.LnWavelength[i], level, run.Flux[i] - run.Continuum[i], errorWidth / run.Width[i]);
             Weight[p] = run.Weight[i] <= 0 ? 0 : (float)(1 / (1 / run.Weight[i] + modelVariance));
             SigmaLn[p] = run.SigmaLn[i];
             var place = (run.LnWavelength[i] - TemplateGrid.LnStart) / TemplateGrid.Step;

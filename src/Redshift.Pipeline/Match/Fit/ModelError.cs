@@ -14,6 +14,9 @@ internal sealed class ModelError
     /// <summary>Computed spectra differ from real ones by at least this share, in cells of the search grid.</summary>
     public const double Least = 0.03;
 
+    /// <summary>Emission lines are no Gaussians: their model is wrong by this share of what stands above the continuum.</summary>
+    private const double LineShare = 0.08;
+
     private const double Most = 0.5;
     private const double Block = 0.1;
 
@@ -38,6 +41,17 @@ internal sealed class ModelError
         var telluric = _telluric * TelluricError.Share(lnWavelength);
         var own = Own(lnWavelength);
         return telluric > 0 ? Math.Sqrt(own * own + telluric * telluric) : own;
+    }
+
+    /// <summary>Variance of a pixel for what models are wrong by.</summary>
+    /// <param name="lnWavelength">ln λ.</param>
+    /// <param name="level">Level of the continuum.</param>
+    /// <param name="above">What the flux stands above the continuum, or negative.</param>
+    /// <param name="pixels">Pixels, or parts of one, over which a model errs alike: their mean is no better than one of them.</param>
+    public double Variance(double lnWavelength, double level, double above, double pixels)
+    {
+        double share = Share(lnWavelength) * level, line = LineShare * Math.Max(0, above);
+        return (share * share + line * line) * Math.Max(1, pixels);
     }
 
     private double Own(double lnWavelength)

@@ -84,9 +84,8 @@ internal sealed class Cells
     private void Add(NormalizedSpectrum s, int i, ModelError modelError, float[] weights)
     {
         double width = s.PixelWidth[i], low = s.LnWavelength[i] - 0.5 * width, high = low + width;
-        var share = modelError.Share(s.LnWavelength[i]) * Math.Max(Math.Abs(s.Continuum[i]), s.Baseline[i]);
-        double c = s.Continuum[i], r = s.Flux[i] - c, excess = FitPixels.LineError * Math.Max(0, r);
-        var w = 1 / (1 / s.Weight[i] + (share * share + excess * excess) * Math.Max(1, Step / width));
+        double c = s.Continuum[i], r = s.Flux[i] - c;
+        var w = 1 / (1 / s.Weight[i] + modelError.Variance(s.LnWavelength[i], Math.Max(Math.Abs(c), s.Baseline[i]), r, Step / width));
         int from = (int)Math.Floor((low - LnOrigin) / Step), to = (int)Math.Floor((high - LnOrigin) / Step);
         for (var k = Math.Max(from, First); k <= Math.Min(to, First + Count - 1); k++)
         {
