@@ -29,14 +29,19 @@ public static class OxygenAbsorption
     /// <summary>Beyond this distance from its middle, cm⁻¹, a line is not summed.</summary>
     private const double Reach = 12;
 
-    /// <summary>Name, origin in cm⁻¹, rotational constant of the upper state in cm⁻¹, strength of all lines together in cm a molecule.</summary>
-    private static readonly (string Name, double Origin, double UpperRotation, double Strength)[] Bands =
+    /// <summary>
+    /// The bands γ, B, A and the infrared one: origin in cm⁻¹, rotational constant of the upper state in cm⁻¹, strength of all lines together in
+    /// cm a molecule.
+    /// </summary>
+    private static readonly (double Origin, double UpperRotation, double Strength)[] Bands =
     [
-        ("gamma", 15903.7, 1.3545, 8e-25), ("B", 14527.0, 1.3730, 1.5e-23), ("A", 13122.2, 1.3912, 2.3e-22), ("infrared", 7883.8, 1.4180, 3e-24),
+        (15903.7, 1.3545, 8e-25), (14527.0, 1.3730, 1.5e-23), (13122.2, 1.3912, 2.3e-22), (7883.8, 1.4180, 3e-24),
     ];
 
     /// <summary>The lines, by rising wavenumber in cm⁻¹, with their integrated optical depth in cm⁻¹ at the zenith.</summary>
     public static IReadOnlyList<(double Wavenumber, double Depth)> Lines { get; } = [.. Bands.SelectMany(b => LinesOf(b.Origin, b.UpperRotation, b.Strength)).Order()];
+
+    private static readonly double[] Wavenumbers = [.. Lines.Select(l => l.Wavenumber)];
 
     /// <summary>Optical depth of the vertical atmosphere.</summary>
     /// <param name="wavenumber">Vacuum wavenumber, cm⁻¹.</param>
@@ -54,15 +59,8 @@ public static class OxygenAbsorption
 
     private static int FirstAbove(double wavenumber)
     {
-        int low = 0, high = Lines.Count;
-        while (low < high)
-        {
-            var middle = (low + high) / 2;
-            if (Lines[middle].Wavenumber < wavenumber) low = middle + 1;
-            else high = middle;
-        }
-
-        return low;
+        var at = Array.BinarySearch(Wavenumbers, wavenumber);
+        return at < 0 ? ~at : at;
     }
 
     /// <summary>Both branches: the molecule leaves level N for N − 1 or N + 1, each as a pair of lines.</summary>

@@ -11,8 +11,8 @@ namespace Redshift.Pipeline.Match.Models;
 /// </summary>
 internal sealed class AirTransmission
 {
-    /// <summary>Where the first band begins, as an index of the grid.</summary>
-    private static readonly int First = (int)((Math.Log(5850) - TemplateGrid.LnStart) / TemplateGrid.Step);
+    /// <summary>Index on the grid of the first value, where the first band begins.</summary>
+    public static readonly int Offset = (int)((Math.Log(5850) - TemplateGrid.LnStart) / TemplateGrid.Step);
 
     /// <summary>Points of a cell of the grid at which oxygen is computed: its lines are far narrower.</summary>
     private const int Points = 40;
@@ -38,8 +38,8 @@ internal sealed class AirTransmission
 
     private AirTransmission(Func<double, double> transmission)
     {
-        _absorbed = new float[TemplateGrid.Count - First];
-        for (var i = 0; i < _absorbed.Length; i++) _absorbed[i] = (float)(1 - transmission(TemplateGrid.Wavelength(First + i)));
+        _absorbed = new float[TemplateGrid.Count - Offset];
+        for (var i = 0; i < _absorbed.Length; i++) _absorbed[i] = (float)(1 - transmission(TemplateGrid.Wavelength(Offset + i)));
     }
 
     /// <summary>Dry air and water.</summary>
@@ -49,13 +49,13 @@ internal sealed class AirTransmission
     /// <param name="level">One of <see cref="LineSpreadLevels"/>.</param>
     public float[] Absorbed(int level) => _broadened.GetOrAdd(level, l => GaussianFilter.Convolve(_absorbed, LineSpreadLevels.Sigma(l) / TemplateGrid.Step));
 
-    /// <summary>Index on the grid of the first value.</summary>
-    public static int Offset => First;
-
     private static double Oxygen(double wavelength)
     {
+        double Depth(int point) => OxygenAbsorption.Depth(1e8 / wavelength / (1 + ((point + 0.5) / Points - 0.5) * TemplateGrid.Step));
+        // Between two points that no line reaches there is none: nearly the whole grid is clear.
+        if (Depth(0) == 0 && Depth(Points - 1) == 0) return 1;
         double sum = 0;
-        for (var i = 0; i < Points; i++) sum += Math.Exp(-OxygenAbsorption.Depth(1e8 / wavelength / (1 + ((i + 0.5) / Points - 0.5) * TemplateGrid.Step)));
+        for (var i = 0; i < Points; i++) sum += Math.Exp(-Depth(i));
         return sum / Points;
     }
 
