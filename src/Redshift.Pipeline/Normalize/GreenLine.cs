@@ -25,9 +25,7 @@ internal static class GreenLine
         var near = Array.BinarySearch(lnWavelength, LnWavelength);
         if (near < 0) near = Math.Min(~near, lnWavelength.Length - 1);
         var reach = Sigmas * sigmaLn[near] + EarthMotion;
-        for (var i = near; i >= 0 && lnWavelength[i] > LnWavelength - reach; i--)
-            if (lnWavelength[i] < LnWavelength + reach) weight[i] = 0;
-        for (var i = near; i < lnWavelength.Length && lnWavelength[i] < LnWavelength + reach; i++)
-            if (lnWavelength[i] > LnWavelength - reach) weight[i] = 0;
+        for (var i = 0; i < weight.Length; i++)
+            if (Math.Abs(lnWavelength[i] - LnWavelength) < reach) weight[i] = 0;
     }
 }

@@ -1,3 +1,5 @@
+using Redshift.Pipeline.Match.Models;
+
 namespace Redshift.Pipeline.Match.Fit;
 
 /// <summary>Places where the flux drops towards shorter wavelengths, the plainest first: candidates for Lyman limits of clouds in front.</summary>
@@ -5,9 +7,6 @@ internal static class FluxDrops
 {
     /// <summary>Width in ln λ of the stretches on both sides that are compared: the forest's own scatter averages out over it.</summary>
     public const double Window = 0.02;
-
-    /// <summary>Scatter of the forest from pixel to pixel, as a share of the flux.</summary>
-    private const double ForestShare = 0.45;
 
     private const double LeastSigmas = 3;
     private const int MostKept = 24;
@@ -54,7 +53,7 @@ internal static class FluxDrops
     {
         if (leftWeight <= 0 || rightWeight <= 0) return 0;
         double left = leftSum / leftWeight, right = rightSum / rightWeight;
-        var variance = 1 / leftWeight + 1 / rightWeight + ForestShare * ForestShare * (left * left / leftCount + right * right / rightCount);
+        var variance = 1 / leftWeight + 1 / rightWeight + Forest.ScatterShare * Forest.ScatterShare * (left * left / leftCount + right * right / rightCount);
         return (right - left) / Math.Sqrt(variance);
     }
 }
